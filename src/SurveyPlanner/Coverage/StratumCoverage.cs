@@ -1,0 +1,58 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Coverage;
+
+/// <summary>
+/// Coverage probability of one stratum, cell by cell.
+/// </summary>
+/// <param name="Stratum">The stratum's name.</param>
+/// <param name="Nominal">The coverage an interior place would have with no edge near: what even coverage would be.</param>
+/// <param name="CellSizeMetres">Side of a whole cell, metres; cells are cut at the stratum's boundary.</param>
+/// <param name="RowBearingRadians">Direction of the rows of cells in the plane, radians anticlockwise from plane east.</param>
+/// <param name="Replicates">Number of simulated draws.</param>
+/// <param name="Cells">The cells.</param>
+/// <param name="Mean">Area-weighted mean of the exact coverage, or of the simulated where no closed form exists.</param>
+/// <param name="Min">Smallest of it.</param>
+/// <param name="Max">Largest of it.</param>
+/// <param name="Cv">Area-weighted coefficient of variation of it.</param>
+/// <param name="SimulatedMean">Area-weighted mean of the simulated coverage.</param>
+/// <param name="MaxAbsZ">Largest absolute difference between simulated and exact coverage in standard errors; null where no closed form exists.</param>
+public sealed record StratumCoverage(
+    string Stratum,
+    double Nominal,
+    double CellSizeMetres,
+    double RowBearingRadians,
+    int Replicates,
+    ImmutableArray<CoverageCell> Cells,
+    double Mean,
+    double Min,
+    double Max,
+    double Cv,
+    double SimulatedMean,
+    double? MaxAbsZ);
+
+/// <summary>
+/// One cell: a square of the grid cut at the stratum's boundary, with the coverage of the place that stands for it.
+/// </summary>
+/// <param name="Place">The place in the cell whose coverage is given: its centre where that is inside the stratum. Plane, metres.</param>
+/// <param name="Position">The same place in degrees.</param>
+/// <param name="SquareCentre">Centre of the uncut square, plane, metres: with the cell size and the grid's turn it draws the square.</param>
+/// <param name="AreaKm2">Area of the cell inside the stratum, square kilometres.</param>
+/// <param name="Exact">Probability of being covered at least once, from the closed form; null where none exists.</param>
+/// <param name="Simulated">Share of simulated draws that covered the place at least once.</param>
+/// <param name="ExpectedTimes">Mean number of times covered, simulated.</param>
+/// <param name="StandardError">Standard error of <paramref name="Simulated"/>; see docs/methods/coverage.md.</param>
+public sealed record CoverageCell(
+    PlanePoint Place,
+    LonLat Position,
+    PlanePoint SquareCentre,
+    double AreaKm2,
+    double? Exact,
+    double Simulated,
+    double ExpectedTimes,
+    double StandardError)
+{
+    /// <summary>The coverage to show: exact where it exists.</summary>
+    public double Best => Exact ?? Simulated;
+}
