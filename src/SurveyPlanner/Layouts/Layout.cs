@@ -12,8 +12,9 @@ namespace SurveyPlanner.Layouts;
 /// <param name="SpacingMetres">The spacing that the sizing came to, metres.</param>
 /// <param name="OffsetMetres">The random offset(s) drawn, metres: across the lines; a point grid has a second along its rows.</param>
 /// <param name="Transects">Lines or points in the order to be visited.</param>
-/// <param name="ExpectedLengthMetres">Lines: expected total length over the random offset, metres. Null for points.</param>
-/// <param name="ExpectedCount">Expected number of points; for lines, of lines. Null where no closed form is known.</param>
+/// <param name="ExpectedLengthMetres">Lines: expected total length over the random offset, metres in the plane. Null for points.</param>
+/// <param name="ExpectedCount">Expected number of points; for lines, of lines.</param>
+/// <param name="Spread">How the effort varies over the random offset.</param>
 /// <param name="Notices">Warnings about this design in this stratum.</param>
 public sealed record Layout(
     string Stratum,
@@ -23,12 +24,19 @@ public sealed record Layout(
     ImmutableArray<double> OffsetMetres,
     ImmutableArray<Transect> Transects,
     double? ExpectedLengthMetres,
-    double? ExpectedCount,
+    double ExpectedCount,
+    EffortSpread Spread,
     ImmutableArray<Notice> Notices)
 {
     /// <summary>Total length of the drawn lines on the ellipsoid, metres; 0 for points.</summary>
     public double TotalLengthMetres => Transects.Sum(transect => transect.LengthMetres);
 }
+
+/// <summary>
+/// How the effort of one draw varies over the random offset: total length in metres for lines, number for points.
+/// Found by drawing the layout at many offsets spread evenly over their range.
+/// </summary>
+public sealed record EffortSpread(double Mean, double StandardDeviation, double Smallest, double Largest);
 
 /// <summary>
 /// One line or point of a layout. A line that the region cuts has several pieces and stays one transect.

@@ -44,7 +44,7 @@ public sealed class AzimuthalEqualArea : EqualAreaProjection
     public override PlanePoint Project(LonLat position)
     {
         var (sin, cos) = Math.SinCos(_ellipsoid.Authalic(position.Lat * RadiansPerDegree));
-        var (sinLon, cosLon) = Math.SinCos((position.Lon - Centre.Lon) * RadiansPerDegree);
+        var (sinLon, cosLon) = Math.SinCos(ProjectionMath.LongitudeFrom(Centre.Lon, position.Lon) * RadiansPerDegree);
         var cosDistance = (_sinCentre * sin) + (_cosCentre * cos * cosLon);
         if (1 + cosDistance < 1e-12)
         {

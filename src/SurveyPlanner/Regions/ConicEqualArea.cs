@@ -53,7 +53,7 @@ public sealed class ConicEqualArea : EqualAreaProjection
     public override PlanePoint Project(LonLat position)
     {
         var rho = Rho(position.Lat);
-        var theta = _n * ProjectionMath.NormaliseLongitude(position.Lon - Centre.Lon) * RadiansPerDegree;
+        var theta = _n * ProjectionMath.LongitudeFrom(Centre.Lon, position.Lon) * RadiansPerDegree;
         var (sin, cos) = Math.SinCos(theta);
         return new PlanePoint(rho * sin, _rho0 - (rho * cos));
     }

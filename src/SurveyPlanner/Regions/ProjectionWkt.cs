@@ -16,6 +16,9 @@ internal static class ProjectionMath
         var turned = degrees - (360 * Math.Floor((degrees + 180) / 360));
         return turned >= 180 ? turned - 360 : turned;
     }
+
+    /// <summary>Degrees east of a meridian, in [-180, 180). 180 and -180 give the same digits, so that a region cut there closes again.</summary>
+    public static double LongitudeFrom(double meridian, double longitude) => NormaliseLongitude(NormaliseLongitude(longitude) - meridian);
 }
 
 /// <summary>Projections as WKT 2 (ISO 19162:2019) with the codes of the EPSG registry for methods and parameters.</summary>

@@ -1,0 +1,159 @@
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// Cuts straight lines at a shape's boundary. Pieces shorter than a tenth of a millimetre are rounding and are left out;
+/// pieces that touch end to end (at a border shared by two parts) are one piece.
+/// </summary>
+internal static class Clipper
+{
+    private const double ShortestMetres = 1e-4;
+
+    /// <summary>The parts of a horizontal line inside the shape, from left to right, or from right to left.</summary>
+    public static void ClipHorizontal(FrameShape shape, double y, int transect, bool leftwards, PieceBuffer output)
+    {
+        var count = shape.CrossingsAt(y, ref output.Crossings);
+        var pairs = Join(output.Crossings.AsSpan(0, count));
+        for (var i = 0; i < pairs; i++)
+        {
+            var pair = leftwards ? pairs - 1 - i : i;
+            var (from, to) = (output.Crossings[2 * pair], output.Crossings[(2 * pair) + 1]);
+            if (leftwards)
+            {
+                (from, to) = (to, from);
+            }
+
+            output.Add(transect, from, y, to, y);
+        }
+    }
+
+    /// <summary>The parts of any straight line inside the shape, in the direction from its start to its end.</summary>
+    public static void ClipSegment(FrameShape shape, double fromX, double fromY, double toX, double toY, int transect, PieceBuffer output)
+    {
+        var (dx, dy) = (toX - fromX, toY - fromY);
+        var length = Math.Sqrt((dx * dx) + (dy * dy));
+        if (length == 0)
+        {
+            return;
+        }
+
+        var count = SegmentCrossings(shape, fromX, fromY, dx / length, dy / length, length, output);
+        var cuts = output.Crossings.AsSpan(0, count);
+        cuts.Sort();
+        var inside = IsInsideAtStart(shape, fromX, fromY, dx / length, dy / length, length, cuts);
+        EmitSegment(cuts, inside, length, transect, (fromX, fromY, dx / length, dy / length), output);
+    }
+
+    /// <summary>Distances from the start at which the segment crosses the boundary, unsorted.</summary>
+    private static int SegmentCrossings(FrameShape shape, double x0, double y0, double ux, double uy, double length, PieceBuffer output)
+    {
+        var count = 0;
+        var endY = y0 + (uy * length);
+        foreach (var edge in shape.EdgesBetween(Math.Min(y0, endY), Math.Max(y0, endY)))
+        {
+            // Height of the edge's ends over the infinite line; "on or below" is decided once a vertex, so crossings pair up.
+            var low = ((edge.LowY - y0) * ux) - ((edge.LowX - x0) * uy);
+            var high = ((edge.HighY - y0) * ux) - ((edge.HighX - x0) * uy);
+            if ((low <= 0) == (high <= 0))
+            {
+                continue;
+            }
+
+            var share = low / (low - high);
+            var x = edge.LowX + (share * (edge.HighX - edge.LowX));
+            var y = edge.LowY + (share * (edge.HighY - edge.LowY));
+            var along = ((x - x0) * ux) + ((y - y0) * uy);
+            if (along > 0 && along < length)
+            {
+                if (count == output.Crossings.Length)
+                {
+                    Array.Resize(ref output.Crossings, 2 * count);
+                }
+
+                output.Crossings[count++] = along;
+            }
+        }
+
+        return count;
+    }
+
+    /// <summary>
+    /// Whether the stretch before the first crossing is inside. Asked at the middle of the longest stretch, where rounding cannot matter,
+    /// and counted back: every crossing changes sides.
+    /// </summary>
+    private static bool IsInsideAtStart(FrameShape shape, double x0, double y0, double ux, double uy, double length, ReadOnlySpan<double> cuts)
+    {
+        var (longest, middle, index) = (-1.0, 0.0, 0);
+        for (var i = 0; i <= cuts.Length; i++)
+        {
+            var (low, high) = (i == 0 ? 0 : cuts[i - 1], i == cuts.Length ? length : cuts[i]);
+            if (high - low > longest)
+            {
+                (longest, middle, index) = (high - low, (low + high) / 2, i);
+            }
+        }
+
+        return shape.Contains(x0 + (middle * ux), y0 + (middle * uy)) == (index % 2 == 0);
+    }
+
+    private static void EmitSegment(
+        ReadOnlySpan<double> cuts, bool inside, double length, int transect, (double X, double Y, double Ux, double Uy) line, PieceBuffer output)
+    {
+        var start = 0.0;
+        for (var i = 0; i <= cuts.Length; i++)
+        {
+            var cut = i == cuts.Length ? length : cuts[i];
+            if (!inside)
+            {
+                (start, inside) = (cut, true);
+                continue;
+            }
+
+            if (i + 1 < cuts.Length && cuts[i + 1] - cut < ShortestMetres)
+            {
+                // Out and in again at once, at a shared border: still the same piece.
+                i++;
+                continue;
+            }
+
+            inside = false;
+            if (cut - start >= ShortestMetres)
+            {
+                output.Add(
+                    transect, line.X + (start * line.Ux), line.Y + (start * line.Uy), line.X + (cut * line.Ux), line.Y + (cut * line.Uy));
+            }
+        }
+    }
+
+    /// <summary>Joins stretches that touch and drops those too short to matter; returns how many pairs are left at the front.</summary>
+    private static int Join(Span<double> crossings)
+    {
+        var kept = 0;
+        for (var i = 0; i + 1 < crossings.Length; i += 2)
+        {
+            var (low, high) = (crossings[i], crossings[i + 1]);
+            if (kept > 0 && low - crossings[(2 * kept) - 1] < ShortestMetres)
+            {
+                crossings[(2 * kept) - 1] = high;
+            }
+            else
+            {
+                crossings[2 * kept] = low;
+                crossings[(2 * kept) + 1] = high;
+                kept++;
+            }
+        }
+
+        var longEnough = 0;
+        for (var pair = 0; pair < kept; pair++)
+        {
+            var (low, high) = (crossings[2 * pair], crossings[(2 * pair) + 1]);
+            if (high - low >= ShortestMetres)
+            {
+                (crossings[2 * longEnough], crossings[(2 * longEnough) + 1]) = (low, high);
+                longEnough++;
+            }
+        }
+
+        return longEnough;
+    }
+}

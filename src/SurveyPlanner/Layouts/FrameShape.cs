@@ -1,0 +1,284 @@
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// A shape in the turned frame, its edges sorted into horizontal bands, so that a line meets only the edges that can cross it.
+/// Inside is where a ray crosses the edges an odd number of times. Safe to share between threads.
+/// </summary>
+/// <remarks>
+/// Robust where general overlay is not: whether an edge crosses a line is decided once a vertex (on it or below counts as below), so crossings
+/// always pair up, however thin the sliver between them. Accuracy of a crossing: a few units in the last place of the edge's length.
+/// </remarks>
+internal sealed class FrameShape
+{
+    private const int MaxBands = 1 << 17;
+
+    private readonly Edge[] _edges;
+    private readonly int[] _bandStarts;
+    private readonly Edge[] _bandEdges;
+    private readonly double _bandsPerMetre;
+
+    /// <param name="shape">The shape in the plane.</param>
+    /// <param name="frame">How it is turned.</param>
+    /// <param name="transposed">Swap x and y afterwards: bands then run across the lines.</param>
+    public FrameShape(PlaneShape shape, TurnedFrame frame, bool transposed = false)
+    {
+        var (x, y) = Turn(shape, frame, transposed);
+        (MinX, MaxX, MinY, MaxY) = (x.Min(), x.Max(), y.Min(), y.Max());
+        _edges = Edges(shape, x, y, transposed);
+        var bands = Math.Clamp(_edges.Length / 2, 1, MaxBands);
+        _bandsPerMetre = bands / Math.Max(MaxY - MinY, double.Epsilon);
+        if (!double.IsFinite(_bandsPerMetre))
+        {
+            (bands, _bandsPerMetre) = (1, 0);
+        }
+
+        (_bandStarts, _bandEdges) = SortIntoBands(bands);
+        AreaSquareMetres = shape.AreaSquareMetres;
+        PartRanges = YRanges(shape, y);
+    }
+
+    public double MinX { get; }
+
+    public double MaxX { get; }
+
+    public double MinY { get; }
+
+    public double MaxY { get; }
+
+    public double AreaSquareMetres { get; }
+
+    /// <summary>All edges, each once.</summary>
+    public ReadOnlySpan<Edge> AllEdges => _edges;
+
+    /// <summary>Lowest and highest y of each part.</summary>
+    public (double Low, double High)[] PartRanges { get; }
+
+    /// <summary>
+    /// The x at which the horizontal line at <paramref name="y"/> crosses the boundary, ascending, always an even number:
+    /// the line is inside from each even entry to the next. The buffer is replaced by a larger one when it is too small.
+    /// </summary>
+    public int CrossingsAt(double y, ref double[] buffer)
+    {
+        if (!(y >= MinY && y <= MaxY))
+        {
+            return 0;
+        }
+
+        var band = BandOf(y);
+        var (start, end) = (_bandStarts[band], _bandStarts[band + 1]);
+        if (buffer.Length < end - start)
+        {
+            buffer = new double[Math.Max(end - start, 2 * buffer.Length)];
+        }
+
+        var count = 0;
+        for (var i = start; i < end; i++)
+        {
+            ref readonly var edge = ref _bandEdges[i];
+
+            // Edges run upwards (LowY < HighY): crossed where the lower end is on or below the line and the upper end above it.
+            if (edge.LowY <= y && edge.HighY > y)
+            {
+                buffer[count++] = edge.XAt(y);
+            }
+        }
+
+        SortShort(buffer.AsSpan(0, count));
+        return count;
+    }
+
+    /// <summary>Whether a place lies inside.</summary>
+    public bool Contains(double x, double y)
+    {
+        if (!(y >= MinY && y <= MaxY))
+        {
+            return false;
+        }
+
+        var band = BandOf(y);
+        var inside = false;
+        for (var i = _bandStarts[band]; i < _bandStarts[band + 1]; i++)
+        {
+            ref readonly var edge = ref _bandEdges[i];
+            inside ^= edge.LowY <= y && edge.HighY > y && edge.XAt(y) > x;
+        }
+
+        return inside;
+    }
+
+    /// <summary>
+    /// The edges that may touch the rows from <paramref name="low"/> to <paramref name="high"/>, each edge once.
+    /// </summary>
+    public BandEdges EdgesBetween(double low, double high)
+    {
+        if (high < MinY || low > MaxY)
+        {
+            return default;
+        }
+
+        return new BandEdges(this, BandOf(low), BandOf(high));
+    }
+
+    private int BandOf(double y) => Math.Clamp((int)((y - MinY) * _bandsPerMetre), 0, _bandStarts.Length - 2);
+
+    private static (double[] X, double[] Y) Turn(PlaneShape shape, TurnedFrame frame, bool transposed)
+    {
+        var (x, y) = (new double[shape.VertexCount], new double[shape.VertexCount]);
+        for (var i = 0; i < x.Length; i++)
+        {
+            (x[i], y[i]) = frame.ToFrame(shape.X[i], shape.Y[i]);
+        }
+
+        return transposed ? (y, x) : (x, y);
+    }
+
+    private static Edge[] Edges(PlaneShape shape, double[] x, double[] y, bool transposed)
+    {
+        var edges = new Edge[shape.VertexCount];
+        for (var part = 0; part < shape.PartCount; part++)
+        {
+            for (var ring = shape.PartStarts[part]; ring < shape.PartStarts[part + 1]; ring++)
+            {
+                // The inside lies to the left of a shell that runs anticlockwise and of a hole that runs clockwise; transposing swaps sides.
+                var isShell = ring == shape.PartStarts[part];
+                var insideLeft = ((shape.SignedRingArea(ring) > 0) == isShell) != transposed;
+                var (start, end) = (shape.RingStarts[ring], shape.RingStarts[ring + 1]);
+                for (var i = start; i < end; i++)
+                {
+                    var next = i + 1 == end ? start : i + 1;
+                    edges[i] = y[i] <= y[next]
+                        ? new Edge(x[i], y[i], x[next], y[next], insideLeft)
+                        : new Edge(x[next], y[next], x[i], y[i], !insideLeft);
+                }
+            }
+        }
+
+        return edges;
+    }
+
+    private (int[] Starts, Edge[] Sorted) SortIntoBands(int bands)
+    {
+        var starts = new int[bands + 1];
+        int Band(double y) => Math.Clamp((int)((y - MinY) * _bandsPerMetre), 0, bands - 1);
+        foreach (ref readonly var edge in _edges.AsSpan())
+        {
+            for (var band = Band(edge.LowY); band <= Band(edge.HighY); band++)
+            {
+                starts[band + 1]++;
+            }
+        }
+
+        for (var band = 0; band < bands; band++)
+        {
+            starts[band + 1] += starts[band];
+        }
+
+        var sorted = new Edge[starts[bands]];
+        var next = starts.AsSpan(0, bands).ToArray();
+        foreach (ref readonly var edge in _edges.AsSpan())
+        {
+            for (var band = Band(edge.LowY); band <= Band(edge.HighY); band++)
+            {
+                sorted[next[band]++] = edge;
+            }
+        }
+
+        return (starts, sorted);
+    }
+
+    private static (double Low, double High)[] YRanges(PlaneShape shape, double[] y)
+    {
+        var ranges = new (double Low, double High)[shape.PartCount];
+        for (var part = 0; part < ranges.Length; part++)
+        {
+            var shell = shape.PartStarts[part];
+            var span = y.AsSpan(shape.RingStarts[shell]..shape.RingStarts[shell + 1]);
+            var (low, high) = (double.PositiveInfinity, double.NegativeInfinity);
+            foreach (var value in span)
+            {
+                low = Math.Min(low, value);
+                high = Math.Max(high, value);
+            }
+
+            ranges[part] = (low, high);
+        }
+
+        return ranges;
+    }
+
+    /// <summary>Insertion sort: a line seldom crosses more than a dozen edges; many crossings go to the library's sort.</summary>
+    private static void SortShort(Span<double> values)
+    {
+        if (values.Length > 32)
+        {
+            values.Sort();
+            return;
+        }
+
+        for (var i = 1; i < values.Length; i++)
+        {
+            var value = values[i];
+            var j = i - 1;
+            while (j >= 0 && values[j] > value)
+            {
+                values[j + 1] = values[j];
+                j--;
+            }
+
+            values[j + 1] = value;
+        }
+    }
+
+    /// <summary>One edge, its lower end first. <paramref name="InsideLeft"/>: going up it, the inside is to the left.</summary>
+    public readonly record struct Edge(double LowX, double LowY, double HighX, double HighY, bool InsideLeft)
+    {
+        /// <summary>Where a horizontal line that crosses the edge does so. The same digits whichever way the ring runs.</summary>
+        public double XAt(double y) => LowX + ((y - LowY) * (HighX - LowX) / (HighY - LowY));
+    }
+
+    /// <summary>Walks the edges of some bands, each edge once: in the first of the bands walked that it touches.</summary>
+    public ref struct BandEdges
+    {
+        private readonly FrameShape? _shape;
+        private readonly int _firstBand;
+        private readonly int _lastBand;
+        private int _band;
+        private int _next;
+
+        public BandEdges(FrameShape shape, int firstBand, int lastBand)
+        {
+            (_shape, _firstBand, _lastBand, _band) = (shape, firstBand, lastBand, firstBand);
+            _next = shape._bandStarts[firstBand];
+        }
+
+        public Edge Current { get; private set; }
+
+        public readonly BandEdges GetEnumerator() => this;
+
+        public bool MoveNext()
+        {
+            if (_shape is null)
+            {
+                return false;
+            }
+
+            for (; _band <= _lastBand; _band++)
+            {
+                var end = _shape._bandStarts[_band + 1];
+                while (_next < end)
+                {
+                    ref readonly var edge = ref _shape._bandEdges[_next++];
+                    if (_band == _firstBand || _shape.BandOf(edge.LowY) == _band)
+                    {
+                        Current = edge;
+                        return true;
+                    }
+                }
+            }
+
+            return false;
+        }
+    }
+}

@@ -1,0 +1,81 @@
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>Left and right side of the convex hull of where transects may lie, as functions of y in the turned frame.</summary>
+internal sealed class HullSides
+{
+    private readonly (double X, double Y)[] _left;
+    private readonly (double X, double Y)[] _right;
+
+    public HullSides(StratumFrame stratum)
+    {
+        var hull = PlaneGeometry.ConvexHull(stratum.ClipShape).Select(point => stratum.Frame.ToFrame(point.X, point.Y)).ToArray();
+        MinY = hull.Min(point => point.Y);
+        MaxY = hull.Max(point => point.Y);
+
+        // Anticlockwise from the lowest vertex the right side goes up to the highest and the left side comes down again.
+        var lowest = IndexOf(hull, (a, b) => a.Y < b.Y || (a.Y == b.Y && a.X > b.X));
+        var highest = IndexOf(hull, (a, b) => a.Y > b.Y || (a.Y == b.Y && a.X > b.X));
+        _right = [.. Walk(hull, lowest, highest)];
+        var lowestLeft = IndexOf(hull, (a, b) => a.Y < b.Y || (a.Y == b.Y && a.X < b.X));
+        var highestLeft = IndexOf(hull, (a, b) => a.Y > b.Y || (a.Y == b.Y && a.X < b.X));
+        _left = [.. Walk(hull, highestLeft, lowestLeft).Reverse()];
+    }
+
+    public double MinY { get; }
+
+    public double MaxY { get; }
+
+    /// <summary>x of the left side; beyond the ends that of the end.</summary>
+    public double Left(double y) => At(_left, y);
+
+    /// <summary>x of the right side; beyond the ends that of the end.</summary>
+    public double Right(double y) => At(_right, y);
+
+    private static double At((double X, double Y)[] chain, double y)
+    {
+        if (y <= chain[0].Y)
+        {
+            return chain[0].X;
+        }
+
+        if (y >= chain[^1].Y)
+        {
+            return chain[^1].X;
+        }
+
+        var (low, high) = (0, chain.Length - 1);
+        while (high - low > 1)
+        {
+            var middle = (low + high) / 2;
+            (low, high) = chain[middle].Y <= y ? (middle, high) : (low, middle);
+        }
+
+        var (from, to) = (chain[low], chain[high]);
+        return from.X + ((y - from.Y) * (to.X - from.X) / (to.Y - from.Y));
+    }
+
+    private static int IndexOf((double X, double Y)[] hull, Func<(double X, double Y), (double X, double Y), bool> better)
+    {
+        var best = 0;
+        for (var i = 1; i < hull.Length; i++)
+        {
+            best = better(hull[i], hull[best]) ? i : best;
+        }
+
+        return best;
+    }
+
+    private static IEnumerable<(double X, double Y)> Walk((double X, double Y)[] hull, int from, int to)
+    {
+        for (var i = from; ; i = (i + 1) % hull.Length)
+        {
+            yield return hull[i];
+            if (i == to)
+            {
+                yield break;
+            }
+        }
+    }
+}

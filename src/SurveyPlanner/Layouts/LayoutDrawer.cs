@@ -1,0 +1,89 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using SurveyPlanner.Numerics;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>Draws the layout that will be surveyed: one random offset for each stratum, from the seed.</summary>
+internal static class LayoutDrawer
+{
+    /// <summary>Draws all strata; ids and order run through the whole survey.</summary>
+    public static ImmutableArray<Layout> Draw(IReadOnlyList<LayoutGenerator> generators, EqualAreaProjection projection, ulong seed)
+    {
+        var realisations = generators.Select((generator, i) => Realise(generator, seed, (uint)i)).ToList();
+        var ids = new TransectIds([.. realisations.Select(realisation => realisation.Transects)]);
+        var order = 0;
+        var layouts = ImmutableArray.CreateBuilder<Layout>(generators.Count);
+        for (var i = 0; i < generators.Count; i++)
+        {
+            layouts.Add(Describe(generators[i], realisations[i], projection, i, ids, order));
+            order += realisations[i].Transects;
+        }
+
+        return layouts.MoveToImmutable();
+    }
+
+    private static Realisation Realise(LayoutGenerator generator, ulong seed, uint stratum)
+    {
+        var random = new PhiloxStream(seed, RandomPurpose.Layout, stratum, replicate: 0);
+        var offsets = new double[generator.OffsetRanges.Length];
+        for (var axis = 0; axis < offsets.Length; axis++)
+        {
+            offsets[axis] = random.NextDouble();
+        }
+
+        var buffer = new PieceBuffer();
+        generator.Realise(offsets, ref random, buffer);
+        return new Realisation(offsets, [.. buffer.Pieces]);
+    }
+
+    private static Layout Describe(
+        LayoutGenerator generator, Realisation realisation, EqualAreaProjection projection, int stratum, TransectIds ids, int ordersBefore)
+    {
+        var builder = new TransectBuilder(generator, projection);
+        var transects = realisation.Pieces
+            .GroupBy(piece => piece.Transect)
+            .Select(pieces => builder.Build(ids.Of(stratum, pieces.Key), ordersBefore + pieces.Key + 1, [.. pieces]))
+            .ToImmutableArray();
+        var spread = EffortIntegral.Over(generator, out var meanCount);
+        return new Layout(
+            generator.Stratum.Stratum.Name,
+            generator.Design,
+            generator.Stratum.BearingDegrees,
+            generator.SpacingMetres,
+            [.. realisation.Offsets.Zip(generator.OffsetRanges.ToArray(), (offset, range) => offset * range)],
+            transects,
+            generator.Design.IsPoints ? null : generator.ExpectedLength ?? spread.Mean,
+            generator.ExpectedCount ?? meanCount,
+            spread,
+            Notices(generator, transects.Length));
+    }
+
+    private static ImmutableArray<Notice> Notices(LayoutGenerator generator, int transects)
+    {
+        var notices = ImmutableArray.CreateBuilder<Notice>();
+        var name = generator.Stratum.Stratum.Name;
+        if (transects == 0)
+        {
+            notices.Add(new Notice(
+                NoticeKind.Warning,
+                $"this draw places no transect in stratum '{name}', although the spacing fits; a stratum this small against its spacing needs a smaller one"));
+        }
+
+        if (2 * generator.Stratum.HalfWidthMetres > generator.SpacingMetres)
+        {
+            var (what, reach) = generator.Design.IsPoints ? ("radius", "disks") : ("half-width", "strips");
+            notices.Add(new Notice(NoticeKind.Warning, string.Create(
+                CultureInfo.InvariantCulture,
+                $"in stratum '{name}' the {what} of {generator.Stratum.HalfWidthMetres:0.###} m is more than half the spacing of {generator.SpacingMetres:0.###} m, so {reach} overlap and some animals may be counted twice; coverage is computed for overlapping {reach}")));
+        }
+
+        return notices.ToImmutable();
+    }
+
+    private sealed record Realisation(double[] Offsets, Piece[] Pieces)
+    {
+        public int Transects => Pieces.Length == 0 ? 0 : Pieces[^1].Transect + 1;
+    }
+}

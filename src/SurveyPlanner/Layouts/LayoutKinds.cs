@@ -1,0 +1,21 @@
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>The one list of layout kinds.</summary>
+internal static class LayoutKinds
+{
+    /// <summary>The kind that a design asks for, made ready for a stratum.</summary>
+    /// <exception cref="InputException">The design cannot work in this stratum.</exception>
+    public static LayoutGenerator Prepare(Stratum stratum, LayoutDesign design)
+    {
+        var frame = new StratumFrame(stratum, design);
+        return design.Kind switch
+        {
+            LayoutKind.Parallel => new ParallelLines(frame, design),
+            LayoutKind.Zigzag => new Zigzag(frame, design),
+            LayoutKind.PointGrid => new PointGrid(frame, design),
+            _ => throw new InvalidOperationException($"layout kind {design.Kind} is not in the list"),
+        };
+    }
+}

@@ -1,0 +1,59 @@
+using SurveyPlanner.Numerics;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// Systematic parallel lines: one spacing apart, the first at a random distance in [0, spacing) from the stratum's edge.
+/// Expected total length: area / spacing, exactly, for any shape. Travelled to and fro.
+/// </summary>
+internal sealed class ParallelLines : LayoutGenerator
+{
+    private readonly double[] _ranges;
+
+    public ParallelLines(StratumFrame stratum, LayoutDesign design)
+        : base(stratum, design, SpacingFor(stratum, design.Sizing))
+    {
+        _ranges = [SpacingMetres];
+        SizingRules.RefuseTooCoarse(stratum, SpacingMetres);
+        SizingRules.RefuseTooMany(stratum, stratum.ExtentAcross / SpacingMetres);
+    }
+
+    public override ReadOnlySpan<double> OffsetRanges => _ranges;
+
+    public override double NominalCoverage => Math.Min(1, 2 * Stratum.HalfWidthMetres / SpacingMetres);
+
+    public override bool StripsMayOverlap => 2 * Stratum.HalfWidthMetres > SpacingMetres;
+
+    public override double? ExpectedLength => Stratum.Clip.AreaSquareMetres / SpacingMetres;
+
+    public override double? ExpectedCount => SizingRules.CoveredExtent(Stratum.Clip) / SpacingMetres;
+
+    public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
+    {
+        var clip = Stratum.Clip;
+        var transect = 0;
+        for (var line = 0; ; line++)
+        {
+            var y = clip.MinY + ((offsets[0] + line) * SpacingMetres);
+            if (y > clip.MaxY)
+            {
+                return;
+            }
+
+            var before = output.Count;
+            Clipper.ClipHorizontal(clip, y, transect, leftwards: transect % 2 == 1, output);
+            if (output.Count > before)
+            {
+                transect++;
+            }
+        }
+    }
+
+    private static double SpacingFor(StratumFrame stratum, Sizing sizing) => sizing switch
+    {
+        Sizing.Spacing spacing => spacing.Metres,
+        Sizing.Number number => SizingRules.CoveredExtent(stratum.Clip) / number.Count,
+        Sizing.TotalLength length => stratum.Clip.AreaSquareMetres / length.Metres,
+        _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
+    };
+}

@@ -1,0 +1,59 @@
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// A stratum turned so that transects run along x: where transects may lie, and where they count.
+/// </summary>
+internal sealed class StratumFrame
+{
+    private readonly Lazy<FrameShape> _across;
+
+    public StratumFrame(Stratum stratum, LayoutDesign design)
+    {
+        Stratum = stratum;
+        HalfWidthMetres = design.HalfWidthMetres;
+        BearingDegrees = TrueBearing(stratum, design.Bearing);
+        Frame = new TurnedFrame((90 - (BearingDegrees - stratum.ConvergenceDegrees)) * Math.PI / 180);
+        Region = new FrameShape(stratum.Shape, Frame);
+        ClipShape = design.Edge == EdgeRule.Plus ? PlaneGeometry.Grow(stratum.Shape, HalfWidthMetres) : stratum.Shape;
+        Clip = design.Edge == EdgeRule.Plus ? new FrameShape(ClipShape, Frame) : Region;
+        _across = new Lazy<FrameShape>(() => new FrameShape(ClipShape, Frame, transposed: true));
+    }
+
+    public Stratum Stratum { get; }
+
+    public double HalfWidthMetres { get; }
+
+    /// <summary>True bearing of the lines at the stratum's centre, degrees in [0, 180).</summary>
+    public double BearingDegrees { get; }
+
+    public TurnedFrame Frame { get; }
+
+    /// <summary>The stratum itself.</summary>
+    public FrameShape Region { get; }
+
+    /// <summary>Where transects may lie: the stratum, or with plus sampling the stratum and a margin round it.</summary>
+    public FrameShape Clip { get; }
+
+    /// <summary>The same in the plane.</summary>
+    public PlaneShape ClipShape { get; }
+
+    /// <summary><see cref="Clip"/> with x and y swapped, for looking across the lines.</summary>
+    public FrameShape ClipAcross => _across.Value;
+
+    /// <summary>Length of the stratum across its lines, metres: what the lines are spread over.</summary>
+    public double ExtentAcross => Clip.MaxY - Clip.MinY;
+
+    private static double TrueBearing(Stratum stratum, Bearing bearing)
+    {
+        var degrees = bearing switch
+        {
+            Bearing.Degrees given => given.Value,
+            Bearing.LongAxis => stratum.LongAxisBearing,
+            Bearing.ShortAxis => stratum.LongAxisBearing + 90,
+            _ => throw new InvalidOperationException($"unknown bearing {bearing}"),
+        };
+        return ((degrees % 180) + 180) % 180;
+    }
+}

@@ -1,0 +1,67 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// Turns the pieces of one transect from the turned frame into positions on Earth. A line that is straight in the plane gets as many vertices
+/// as it needs for someone who follows the shortest path from each to the next to stray by less than 2 % of the half-width.
+/// </summary>
+internal sealed class TransectBuilder(LayoutGenerator generator, EqualAreaProjection projection)
+{
+    private const double StraySharePerHalfWidth = 0.02;
+
+    // Receivers take routes of 250 points.
+    private const int MaxVertices = 250;
+
+    private readonly TurnedFrame _frame = generator.Stratum.Frame;
+    private readonly double _toleranceMetres = StraySharePerHalfWidth * generator.Stratum.HalfWidthMetres;
+
+    public Transect Build(string id, int order, IReadOnlyList<Piece> pieces)
+    {
+        if (generator.Design.IsPoints)
+        {
+            var point = _frame.ToPlane(pieces[0].FromX, pieces[0].FromY);
+            return new Transect(id, order, [new TransectPiece([point], [projection.Unproject(point)])], 0, null);
+        }
+
+        var built = pieces.Select(Build).ToImmutableArray();
+        var first = built[0].Positions;
+        return new Transect(
+            id,
+            order,
+            built,
+            built.Sum(piece => Geodesic.PathLength(piece.Positions.AsSpan())),
+            Geodesic.Inverse(first[0], first[1]).StartBearing);
+    }
+
+    private TransectPiece Build(Piece piece)
+    {
+        var (from, to) = (_frame.ToPlane(piece.FromX, piece.FromY), _frame.ToPlane(piece.ToX, piece.ToY));
+        var stray = Stray(from, to);
+
+        // A bent line cut into n strays by 1/n² of what the whole one does.
+        var legs = Math.Clamp((int)Math.Ceiling(Math.Sqrt(stray / _toleranceMetres)), 1, MaxVertices - 1);
+        var plane = ImmutableArray.CreateBuilder<PlanePoint>(legs + 1);
+        for (var i = 0; i <= legs; i++)
+        {
+            plane.Add(Between(from, to, (double)i / legs));
+        }
+
+        var points = plane.MoveToImmutable();
+        return new TransectPiece(points, [.. points.Select(projection.Unproject)]);
+    }
+
+    /// <summary>How far the middle of the straight line in the plane lies from the shortest path on the ellipsoid, metres.</summary>
+    private double Stray(PlanePoint from, PlanePoint to)
+    {
+        var (start, middle, end) = (projection.Unproject(from), projection.Unproject(Between(from, to, 0.5)), projection.Unproject(to));
+        var (whole, _, _) = Geodesic.Inverse(start, end);
+        var (first, _, arriving) = Geodesic.Inverse(start, middle);
+        var (second, leaving, _) = Geodesic.Inverse(middle, end);
+        return whole == 0 ? 0 : Math.Abs(first * second * Math.Sin((leaving - arriving) * Math.PI / 180) / whole);
+    }
+
+    private static PlanePoint Between(PlanePoint from, PlanePoint to, double share)
+        => new(from.X + (share * (to.X - from.X)), from.Y + (share * (to.Y - from.Y)));
+}
