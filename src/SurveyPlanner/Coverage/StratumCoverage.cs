@@ -43,7 +43,7 @@ public sealed record StratumCoverage(
 /// <param name="Simulated">Share of simulated draws that covered the place at least once.</param>
 /// <param name="ExpectedTimes">Mean number of times covered, simulated.</param>
 /// <param name="StandardError">Standard error of <paramref name="Simulated"/>; see docs/methods/coverage.md.</param>
-public sealed record CoverageCell(
+public readonly record struct CoverageCell(
     PlanePoint Place,
     LonLat Position,
     PlanePoint SquareCentre,
