@@ -1,19 +1,7 @@
 using System.Collections.Immutable;
+using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Effort;
-
-/// <summary>How the variance of the encounter rate is estimated from the pilot's transects.</summary>
-public enum EncounterRateEstimator
-{
-    /// <summary>As if the lines had been placed independently at random.</summary>
-    RandomLines,
-
-    /// <summary>Within pairs of neighbouring lines that do not overlap.</summary>
-    AdjacentPairs,
-
-    /// <summary>Between each line and the next.</summary>
-    OverlappingPairs,
-}
 
 /// <summary>How total effort is shared among strata.</summary>
 public enum Allocation
@@ -26,16 +14,6 @@ public enum Allocation
 
     /// <summary>Neyman's, with costs where given.</summary>
     Optimal,
-}
-
-/// <summary>Detection models by their full names.</summary>
-public enum DetectionModel
-{
-    /// <summary>Everything out to the half-width is seen.</summary>
-    Strip,
-    HalfNormal,
-    HazardRate,
-    UniformCosine,
 }
 
 /// <summary>What the plan file says about precision and what it may take as given instead of from a pilot.</summary>

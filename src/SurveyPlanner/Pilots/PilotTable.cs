@@ -11,11 +11,35 @@ public sealed record PilotTable(
     bool IsPoints,
     ImmutableArray<PilotTransect> Transects,
     ImmutableArray<PilotDetection> Detections,
-    string? Source = null);
+    string? Source = null)
+{
+    /// <summary>The file of the detections, for messages; null when not from a file.</summary>
+    public string? DetectionsSource { get; init; }
+
+    /// <summary>
+    /// The table without detections beyond a distance, its counts lowered to match: what lies beyond the truncation distance counts as not seen.
+    /// Without detections the table comes back as it is.
+    /// </summary>
+    public PilotTable Within(double truncationMetres)
+    {
+        if (Detections.IsEmpty)
+        {
+            return this;
+        }
+
+        var kept = Detections.Where(detection => detection.DistanceMetres <= truncationMetres).ToImmutableArray();
+        var counts = kept.GroupBy(detection => detection.TransectId).ToDictionary(group => group.Key, group => group.Count());
+        return this with
+        {
+            Transects = [.. Transects.Select(transect => transect with { Count = counts.GetValueOrDefault(transect.Id) })],
+            Detections = kept,
+        };
+    }
+}
 
 /// <summary>One transect of the pilot.</summary>
 /// <param name="Stratum">Its stratum; empty when the pilot names none.</param>
-/// <param name="Id">Its name in the table.</param>
+/// <param name="Id">Its name in the table, unique in it.</param>
 /// <param name="Effort">Kilometres of line, or visits to the point. Positive.</param>
 /// <param name="Count">Number of detections (of clusters, where animals come in clusters) on it. Not negative.</param>
 /// <param name="Line">Line of the table it stands in, for messages; null when not from a file.</param>

@@ -1,0 +1,105 @@
+namespace SurveyPlanner.Effort;
+
+/// <summary>The sentences that go with an effort plan.</summary>
+internal static class EffortAdvice
+{
+    private const string Minima = "Buckland and others 2001, Introduction to Distance Sampling, section 7.2 (from memory)";
+    private const string Replicates = "Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13";
+
+    public static IEnumerable<Advice> For(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
+        => Basis(plan, design, strata).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan));
+
+    private static IEnumerable<Advice> Basis(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
+    {
+        var left = strata.Where(stratum => stratum.IsPoints != plan.IsPoints).Select(stratum => $"'{stratum.Name}'").ToList();
+        if (left.Count > 0)
+        {
+            yield return new Advice(
+                $"These figures are for strata surveyed {(plan.IsPoints ? "at points" : "along lines")} only; {string.Join(", ", left)} {(left.Count == 1 ? "is" : "are")} left out.");
+        }
+
+        if (plan.Required is null && design.TargetCv is { } target)
+        {
+            yield return new Advice(FormattableString.Invariant(
+                $"No effort reaches a coefficient of variation of {target:0.###}: detection, taken as given, already has {plan.Model.FixedCv:0.###}, which more effort does not lower."));
+        }
+
+        if (plan.IsPoints && plan.B.Origin != BOrigin.Pilot)
+        {
+            yield return new Advice(
+                "The rule of thumb for b was made for lines; at points the same precision needs more detections (with a half-normal detection function 0.5 to 1.5 more on b), so give b from a pilot of points if you can.",
+                "Arithmetic of half-normal theory, see docs/methods/effort.md");
+        }
+    }
+
+    private static IEnumerable<Advice> Pilot(EffortPlan plan)
+    {
+        if (plan.Pilot is not { } pilot)
+        {
+            yield break;
+        }
+
+        if (pilot.Pooled.Transects == 1)
+        {
+            yield return new Advice(
+                "The pilot has one transect, and one transect has no variance: its encounter rate is used, b comes from elsewhere. Two or more transects, better ten, would give both.");
+        }
+        else if (pilot.Pooled.Transects < 10)
+        {
+            yield return new Advice(
+                $"The pilot has only {pilot.Pooled.Transects} transects, so its variance is itself uncertain; take the effort as a rough figure.");
+        }
+
+        if (pilot.BeyondTruncation > 0)
+        {
+            yield return new Advice(FormattableString.Invariant(
+                $"{pilot.BeyondTruncation} of {pilot.BeyondTruncation + pilot.Pooled.Count} detections of the pilot lie beyond the truncation distance of {pilot.TruncationMetres:0.###} m and were left out."));
+        }
+    }
+
+    private static IEnumerable<Advice> Detection(EffortPlan plan, EffortDesign design)
+    {
+        if (plan.B.Origin == BOrigin.Pilot && plan.B.DetectionPart is null && plan.Model.FixedCv is null)
+        {
+            var part = plan.IsPoints ? "1 to 2.6" : "0.5 to 1.1";
+            yield return new Advice(
+                $"No detection function is planned for: the figures hold only if everything out to the half-width is seen. If one will be fitted, expect about {part} more on b.",
+                "Arithmetic of half-normal theory, see docs/methods/effort.md");
+        }
+
+        if (plan.Model.RateIncludesDetection && design.Detection.GivenCv is not null)
+        {
+            yield return new Advice("b covers detection already, so the coefficient of variation given for detection is not added to it.");
+        }
+    }
+
+    private static IEnumerable<Advice> Numbers(EffortPlan plan)
+    {
+        if (plan.Required is not { } required)
+        {
+            yield break;
+        }
+
+        var (low, high) = plan.IsPoints ? (75, 100) : (60, 80);
+        var detections = required.Precision.ExpectedDetections;
+        if (detections < high)
+        {
+            yield return new Advice(
+                FormattableString.Invariant(
+                    $"The effort brings about {detections:0} detections; at least {low} to {high} are advised {(plan.IsPoints ? "at points" : "along lines")} to fit a detection function."),
+                Minima);
+        }
+
+        foreach (var stratum in plan.Model.Strata.Where(stratum => stratum.TransectEffort is not null))
+        {
+            var transects = required.Effort * stratum.Share / stratum.TransectEffort!.Value;
+            if (transects < 10)
+            {
+                yield return new Advice(
+                    FormattableString.Invariant(
+                        $"Stratum '{stratum.Name}' would get about {transects:0.#} {(plan.IsPoints ? "points" : "lines")}; at least 10 to 20 in each stratum are advised."),
+                    Replicates);
+            }
+        }
+    }
+}

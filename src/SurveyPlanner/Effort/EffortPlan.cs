@@ -1,0 +1,124 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Pilots;
+
+namespace SurveyPlanner.Effort;
+
+/// <summary>
+/// How much effort buys which precision. Effort is kilometres of line, or visits to points (one visit a point). What does not apply, or
+/// cannot be estimated, is null and said in <see cref="Advice"/>; no figure is ever NaN.
+/// </summary>
+/// <param name="IsPoints">Whether effort is visits to points (else kilometres of line).</param>
+/// <param name="EncounterRate">Detections per unit of effort over the region, strata weighted by area.</param>
+/// <param name="Estimator">Variance estimator of the encounter rate; null without a pilot.</param>
+/// <param name="EstimatorReason">Why that one, a sentence; null without a pilot.</param>
+/// <param name="Pilot">The pilot's figures; null without a pilot.</param>
+/// <param name="B">The constant b of effort = (b / cv²) / encounter rate.</param>
+/// <param name="PilotCv">Coefficient of variation of density that the pilot itself reached, by component; null where it cannot be estimated.</param>
+/// <param name="Required">Effort for the target; null without a target, or where no effort reaches it.</param>
+/// <param name="Strata">The same by stratum, only those surveyed the way the pilot was.</param>
+/// <param name="Advice">What the user should know, with sources.</param>
+/// <param name="Model">The relation of effort and precision that all of this follows from.</param>
+public sealed record EffortPlan(
+    bool IsPoints,
+    double EncounterRate,
+    EncounterRateEstimator? Estimator,
+    string? EstimatorReason,
+    PilotFigures? Pilot,
+    BConstant B,
+    CvDecomposition? PilotCv,
+    RequiredEffort? Required,
+    ImmutableArray<StratumEffort> Strata,
+    ImmutableArray<Advice> Advice,
+    EffortModel Model)
+{
+    /// <summary>The precision that a total effort delivers when shared among the strata as planned; null for an effort that is not above 0.</summary>
+    public EffortPrecision? CvAt(double effort) => Model.PrecisionAt(effort);
+}
+
+/// <summary>Where b comes from.</summary>
+public enum BOrigin
+{
+    /// <summary>Estimated from the pilot.</summary>
+    Pilot,
+
+    /// <summary>Given in the plan.</summary>
+    Given,
+
+    /// <summary>The published rule of thumb.</summary>
+    RuleOfThumb,
+}
+
+/// <summary>The constant b and its parts; parts are null where b was given whole.</summary>
+/// <param name="Value">b, cluster size included.</param>
+/// <param name="Origin">Where it comes from.</param>
+/// <param name="EncounterRatePart">Share of the encounter rate: the variance-to-mean ratio of counts under the variance estimator used.</param>
+/// <param name="DetectionPart">Share of the detection function that falls with effort.</param>
+/// <param name="ClusterSizePart">Share of cluster size, (sd / mean)².</param>
+/// <param name="Explanation">One sentence for the reader.</param>
+public sealed record BConstant(
+    double Value, BOrigin Origin, double? EncounterRatePart, double? DetectionPart, double? ClusterSizePart, string Explanation);
+
+/// <summary>A part of the variance of density.</summary>
+public enum CvSource
+{
+    EncounterRate,
+    Detection,
+    ClusterSize,
+
+    /// <summary>Encounter rate and detection together, where b was given whole.</summary>
+    EncounterRateAndDetection,
+}
+
+/// <summary>One component of the coefficient of variation of density.</summary>
+/// <param name="Source">What it comes from.</param>
+/// <param name="Cv">Its coefficient of variation.</param>
+/// <param name="DegreesOfFreedom">Null for many.</param>
+/// <param name="Share">Its share of cv², 0 to 1; null when all components are 0.</param>
+public sealed record CvComponent(CvSource Source, double Cv, double? DegreesOfFreedom, double? Share);
+
+/// <summary>cv² of density as the sum of its components (delta method), and its log-normal interval.</summary>
+/// <param name="Components">The parts.</param>
+/// <param name="Cv">The whole.</param>
+/// <param name="DegreesOfFreedom">By Satterthwaite; null for many.</param>
+/// <param name="IntervalFactor">C of the 95 % interval from D / C to D C; null with less than one degree of freedom.</param>
+public sealed record CvDecomposition(ImmutableArray<CvComponent> Components, double Cv, double? DegreesOfFreedom, double? IntervalFactor);
+
+/// <summary>What an effort delivers.</summary>
+/// <param name="Effort">Kilometres of line or visits to points.</param>
+/// <param name="ExpectedDetections">Detections expected at the pilot's encounter rate.</param>
+/// <param name="Decomposition">The coefficient of variation of density and its parts.</param>
+public sealed record EffortPrecision(double Effort, double ExpectedDetections, CvDecomposition Decomposition)
+{
+    /// <summary>Coefficient of variation of density.</summary>
+    public double Cv => Decomposition.Cv;
+}
+
+/// <summary>Effort for the target precision.</summary>
+/// <param name="TargetCv">The coefficient of variation asked for.</param>
+/// <param name="Effort">Kilometres of line (not rounded), or points (rounded up).</param>
+/// <param name="Precision">What that effort delivers.</param>
+public sealed record RequiredEffort(double TargetCv, double Effort, EffortPrecision Precision);
+
+/// <summary>Effort in one stratum.</summary>
+/// <param name="Name">The stratum.</param>
+/// <param name="EncounterRate">The encounter rate assumed for it.</param>
+/// <param name="Pilot">Its own encounter rate in the pilot; null when the pilot has none of its own for it.</param>
+/// <param name="Share">Its share of the total effort under the allocation, 0 to 1.</param>
+/// <param name="Effort">Kilometres of line, or points, of the required total; null without a required total.</param>
+/// <param name="ExpectedDetections">On that effort.</param>
+/// <param name="Cv">Coefficient of variation of the stratum's own density on that effort; null where nothing was seen in it.</param>
+/// <param name="EffortForOwnTarget">Effort that would bring the stratum's own density to the target; null where nothing was seen in it, or no effort does.</param>
+public sealed record StratumEffort(
+    string Name,
+    double EncounterRate,
+    EncounterRate? Pilot,
+    double Share,
+    double? Effort,
+    double? ExpectedDetections,
+    double? Cv,
+    double? EffortForOwnTarget);
+
+/// <summary>A sentence the user should read.</summary>
+/// <param name="Message">The sentence.</param>
+/// <param name="Source">Where the advice comes from; null when it is plain arithmetic on the input.</param>
+public sealed record Advice(string Message, string? Source = null);

@@ -1,0 +1,139 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Effort;
+using SurveyPlanner.Pilots;
+
+namespace SurveyPlanner.Tests.Effort;
+
+public class EffortPlanningTests
+{
+    private static readonly EffortStratum Whole = new("all", 400, false, 100, true);
+    private static readonly EffortDesign Target = EffortDesign.None with { TargetCv = 0.2 };
+
+    [Fact]
+    public void Without_pilot_rate_or_target_there_is_no_plan()
+        => Assert.Null(EffortPlanning.For(EffortDesign.None, null, [Whole]));
+
+    [Fact]
+    public void The_effort_for_a_target_delivers_the_target()
+    {
+        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        Assert.Equal(0.2, plan.CvAt(plan.Required!.Effort)!.Cv, 1e-12);
+        Assert.Equal(BOrigin.Pilot, plan.B.Origin);
+        Assert.Equal(EncounterRateEstimator.OverlappingPairs, plan.Estimator);
+    }
+
+    /// <summary>With one stratum the general model is the published formula: b = n cv².</summary>
+    [Fact]
+    public void B_is_detections_times_squared_cv()
+    {
+        var design = Target with { ClusterSize = new GivenClusterSize(4, 3) };
+        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        Assert.Equal(EffortFormula.B(28, plan.PilotCv!.Cv), plan.B.Value, 1e-12);
+        Assert.Equal(0.5625, plan.B.ClusterSizePart!.Value, 1e-12);
+    }
+
+    [Fact]
+    public void Splitting_a_region_into_like_strata_changes_nothing_under_proportional_allocation()
+    {
+        var pilot = Pilot([3, 5, 2, 8, 4, 6]);
+        var one = EffortPlanning.For(Target, pilot, [Whole])!;
+        var two = EffortPlanning.For(Target, pilot, [Whole with { Name = "a", AreaKm2 = 100 }, Whole with { Name = "b", AreaKm2 = 300 }])!;
+        Assert.Equal(one.Required!.Effort, two.Required!.Effort, 1e-9);
+        Assert.Equal([0.25, 0.75], two.Strata.Select(stratum => stratum.Share));
+    }
+
+    [Fact]
+    public void One_transect_falls_back_on_the_rule_of_thumb_and_says_so()
+    {
+        var plan = EffortPlanning.For(Target, Pilot([7]), [Whole])!;
+        Assert.Equal(BOrigin.RuleOfThumb, plan.B.Origin);
+        Assert.Equal(3 / 0.04 / 3.5, plan.Required!.Effort, 1e-9);
+        Assert.Null(plan.PilotCv);
+        Assert.Null(plan.Pilot!.Pooled.Variance);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("one transect has no variance", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Equal_counts_do_not_promise_a_variance_of_nothing()
+    {
+        var plan = EffortPlanning.For(Target, Pilot([4, 4, 4, 4]), [Whole])!;
+        Assert.Equal(1, plan.B.EncounterRatePart!.Value, 1e-12);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("Poisson", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void A_detection_cv_taken_as_given_stays_whatever_the_effort()
+    {
+        var design = Target with { Detection = DetectionDesign.None with { GivenCv = 0.1 } };
+        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        Assert.Equal(0.2, plan.CvAt(plan.Required!.Effort)!.Cv, 1e-12);
+        Assert.InRange(plan.CvAt(1e12)!.Cv, 0.1, 0.1001);
+
+        var hopeless = EffortPlanning.For(design with { TargetCv = 0.1 }, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        Assert.Null(hopeless.Required);
+        Assert.Contains(hopeless.Advice, advice => advice.Message.StartsWith("No effort reaches", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Strata_of_the_other_kind_are_left_out_and_named()
+    {
+        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2]), [Whole, Whole with { Name = "hut", IsPoints = true }])!;
+        Assert.Equal("all", Assert.Single(plan.Strata).Name);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("'hut' is left out", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void A_stratum_where_nothing_was_seen_has_no_cv_of_its_own()
+    {
+        var pilot = new PilotTable(
+            false, [new("a", "1", 2, 3), new("a", "2", 2, 5), new("b", "3", 2, 0), new("b", "4", 2, 0)], []);
+        var plan = EffortPlanning.For(Target, pilot, [Whole with { Name = "a" }, Whole with { Name = "b" }])!;
+        Assert.Null(plan.Strata[1].Cv);
+        Assert.Null(plan.Strata[1].EffortForOwnTarget);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("saw nothing in stratum 'b'", StringComparison.Ordinal));
+    }
+
+    [Theory]
+    [InlineData(0, "above 0")]
+    [InlineData(-0.1, "above 0")]
+    [InlineData(15, "15 % is 0.15")]
+    [InlineData(150, "at most 1")]
+    [InlineData(double.NaN, "above 0")]
+    public void Impossible_targets_are_refused(double target, string says)
+        => Assert.Contains(says, Refused(Target with { TargetCv = target, GivenEncounterRate = 1 }).Single().Message, StringComparison.Ordinal);
+
+    [Fact]
+    public void Every_problem_of_the_design_is_told_at_once()
+    {
+        var design = Target with
+        {
+            TargetCv = 0,
+            Assurance = 1,
+            B = -1,
+            MinLines = 0,
+            GivenEncounterRate = double.PositiveInfinity,
+            ClusterSize = new GivenClusterSize(0.5, 1),
+            CostPerUnit = ImmutableSortedDictionary<string, double>.Empty.Add("elsewhere", -3),
+        };
+        Assert.Equal(8, Refused(design).Count);
+    }
+
+    [Fact]
+    public void A_target_without_any_encounter_rate_is_refused()
+        => Assert.Equal("precision.target_cv", Refused(Target).Single().Key);
+
+    [Fact]
+    public void A_pilot_of_lines_does_not_size_points()
+    {
+        var problems = Assert.Throws<InputException>(
+            () => EffortPlanning.For(Target, Pilot([1, 2]), [Whole with { IsPoints = true }])).Problems;
+        Assert.Contains("give a pilot of points", Assert.Single(problems).Message, StringComparison.Ordinal);
+    }
+
+    private static IReadOnlyList<Problem> Refused(EffortDesign design)
+        => Assert.Throws<InputException>(() => EffortPlanning.For(design, null, [Whole])).Problems;
+
+    /// <summary>Lines of 2 km without stratum names.</summary>
+    private static PilotTable Pilot(int[] counts)
+        => new(false, [.. counts.Select((count, i) => new PilotTransect("", $"T{i}", 2, count))], []);
+}
