@@ -29,6 +29,9 @@ public sealed record SurveyDesign(
     /// <summary>Projection asked for by name; null for the one that distorts least.</summary>
     public string? Projection { get; init; }
 
+    /// <summary>Distance kept from the exclusions, metres.</summary>
+    public double ExclusionBufferMetres { get; init; }
+
     /// <summary>The layout of one stratum.</summary>
     public LayoutDesign LayoutOf(string stratum) => StratumLayouts.GetValueOrDefault(stratum, Layout);
 }

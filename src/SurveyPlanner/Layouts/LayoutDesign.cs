@@ -103,4 +103,7 @@ public sealed record LayoutDesign(
 {
     /// <summary>Whether animals are counted around points rather than along lines.</summary>
     public bool IsPoints => Kind is LayoutKind.PointGrid;
+
+    /// <summary>Whether transects lie at fixed distances from each other, so that neighbours can be compared.</summary>
+    public bool IsSystematic => Kind is LayoutKind.Parallel or LayoutKind.Zigzag or LayoutKind.PointGrid;
 }
