@@ -38,9 +38,9 @@ internal sealed class CellGridBuilder
         _shape = shape;
         _size = size;
 
-        // Whole cells centred on the shape, so that opposite edges are treated alike.
-        _columns = (int)Math.Max(1, Math.Ceiling((shape.MaxX - shape.MinX) / size));
-        Rows = (int)Math.Max(1, Math.Ceiling((shape.MaxY - shape.MinY) / size));
+        // Whole cells centred on the shape, so that opposite edges are treated alike. A billionth of a cell too wide is rounding.
+        _columns = (int)Math.Max(1, Math.Ceiling(((shape.MaxX - shape.MinX) / size) - 1e-9));
+        Rows = (int)Math.Max(1, Math.Ceiling(((shape.MaxY - shape.MinY) / size) - 1e-9));
         _originX = ((shape.MinX + shape.MaxX) / 2) - (_columns * size / 2);
         _originY = ((shape.MinY + shape.MaxY) / 2) - (Rows * size / 2);
         _areas = new double[_columns + 1];
@@ -168,7 +168,9 @@ internal sealed class CellGridBuilder
                 var left = _originX + (column * _size);
                 var (from, to) = (Math.Max(low, left), Math.Min(high, left + _size));
                 var centre = left + (_size / 2);
-                var holdsCentre = from <= centre && to >= centre;
+
+                // On the boundary itself a place is neither in nor out: stay a millionth of a cell away from it.
+                var holdsCentre = from < centre - (1e-6 * _size) && to > centre + (1e-6 * _size);
                 var width = holdsCentre ? double.PositiveInfinity : to - from;
                 if (widestColumn != column)
                 {

@@ -19,15 +19,16 @@ internal static class EffortIntegral
 
     /// <param name="generator">The layout.</param>
     /// <param name="meanCount">Mean number of transects that lie in the stratum.</param>
-    public static EffortSpread Over(LayoutGenerator generator, out double meanCount)
+    /// <param name="draws">Offsets to try.</param>
+    public static EffortSpread Over(LayoutGenerator generator, out double meanCount, int draws = Offsets)
     {
         var buffer = new PieceBuffer();
         var offsets = new double[generator.OffsetRanges.Length];
         double sum = 0, squares = 0, smallest = double.PositiveInfinity, largest = 0, count = 0;
         var first = 0.0;
-        for (var i = 0; i < Offsets; i++)
+        for (var i = 0; i < draws; i++)
         {
-            SetOffsets(offsets, i);
+            SetOffsets(offsets, i, draws);
             buffer.Clear();
             var random = new PhiloxStream(0, RandomPurpose.Expectation, 0, (uint)i);
             generator.Realise(offsets, ref random, buffer);
@@ -42,16 +43,16 @@ internal static class EffortIntegral
             largest = Math.Max(largest, effort);
         }
 
-        meanCount = count / Offsets;
-        var mean = sum / Offsets;
-        return new EffortSpread(first + mean, Math.Sqrt(Math.Max(0, (squares / Offsets) - (mean * mean))), smallest, largest);
+        meanCount = count / draws;
+        var mean = sum / draws;
+        return new EffortSpread(first + mean, Math.Sqrt(Math.Max(0, (squares / draws) - (mean * mean))), smallest, largest);
     }
 
-    private static void SetOffsets(double[] offsets, int i)
+    private static void SetOffsets(double[] offsets, int i, int draws)
     {
         for (var axis = 0; axis < offsets.Length; axis++)
         {
-            offsets[axis] = ((axis == 0 ? i : (long)i * LatticeGenerator % Offsets) + 0.5) / Offsets;
+            offsets[axis] = ((axis == 0 ? i : (long)i * LatticeGenerator % draws) + 0.5) / draws;
         }
     }
 }
