@@ -28,10 +28,19 @@ internal sealed class HullSides
     public double MaxY { get; }
 
     /// <summary>x of the left side; beyond the ends that of the end.</summary>
-    public double Left(double y) => At(_left, y);
+    public double Left(double y) => At(_left, Within(y));
 
     /// <summary>x of the right side; beyond the ends that of the end.</summary>
-    public double Right(double y) => At(_right, y);
+    public double Right(double y) => At(_right, Within(y));
+
+    /// <summary>
+    /// A millionth inside the ends: an end that is flat but for rounding keeps both its corners, and turning the region changes nothing.
+    /// </summary>
+    private double Within(double y)
+    {
+        var margin = 1e-6 * (MaxY - MinY);
+        return Math.Clamp(y, MinY + margin, MaxY - margin);
+    }
 
     private static double At((double X, double Y)[] chain, double y)
     {
