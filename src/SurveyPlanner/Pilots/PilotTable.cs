@@ -16,6 +16,9 @@ public sealed record PilotTable(
     /// <summary>The file of the detections, for messages; null when not from a file.</summary>
     public string? DetectionsSource { get; init; }
 
+    /// <summary>What was noticed while reading, such as columns that are not used.</summary>
+    public ImmutableArray<Notice> Notices { get; init; } = [];
+
     /// <summary>
     /// The table without detections beyond a distance, its counts lowered to match: what lies beyond the truncation distance counts as not seen.
     /// Without detections the table comes back as it is.

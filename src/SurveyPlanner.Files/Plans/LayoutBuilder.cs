@@ -1,0 +1,64 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Layouts;
+
+namespace SurveyPlanner.Files.Plans;
+
+/// <summary>Turns the keys that hold in a stratum into its layout design.</summary>
+internal static class LayoutBuilder
+{
+    /// <summary>What is missing for a design.</summary>
+    /// <param name="table">All keys that hold.</param>
+    /// <param name="inherited">What <c>[layout]</c> holds, for a stratum; what is missing there already is not said again.</param>
+    public static IEnumerable<Problem> Missing(PlanTable table, PlanTable? inherited)
+    {
+        var kind = table.Value(PlanKeys.Kind);
+        var required = new List<PlanKey[]> { new PlanKey[] { PlanKeys.Kind }, SizingKeys(kind) };
+        if (kind is not null)
+        {
+            required.Add([PlanKeys.ReachOf(kind.Value)]);
+        }
+
+        return required.Select(keys => Missing(table, inherited, keys)).OfType<Problem>();
+    }
+
+    /// <param name="table">All keys that hold, none of them missing or unreadable.</param>
+    public static LayoutDesign Build(PlanTable table)
+    {
+        var kind = table.Value(PlanKeys.Kind)!.Value;
+        return new LayoutDesign(
+            kind,
+            SizingOf(table),
+            table.Text(PlanKeys.Bearing)!,
+            table.Value(PlanKeys.ReachOf(kind))!.Value,
+            table.Value(PlanKeys.Edge)!.Value,
+            table.Value(PlanKeys.Grid)!.Value,
+            table.Value(PlanKeys.Turning)!.Value);
+    }
+
+    private static Sizing SizingOf(PlanTable table)
+        => table.Value(PlanKeys.Spacing) is { } spacing ? new Sizing.Spacing(spacing)
+            : table.Value(PlanKeys.Lines) is { } lines ? new Sizing.Number((int)lines)
+            : table.Value(PlanKeys.Points) is { } points ? new Sizing.Number((int)points)
+            : table.Value(PlanKeys.TotalLength) is { } length ? new Sizing.TotalLength(length)
+            : new Sizing.Precision();
+
+    private static PlanKey[] SizingKeys(LayoutKind? kind)
+        => [.. PlanKeys.Of("layout").Where(key => key.Group == KeyGroup.Sizing && (kind is null || key.BelongsTo(kind.Value)))];
+
+    /// <summary>The problem that none of these keys, which answer one question, is given; null when one is.</summary>
+    private static Problem? Missing(PlanTable table, PlanTable? inherited, PlanKey[] keys)
+    {
+        // A key of the same group that does not suit the kind has been reported as such.
+        bool Answers(PlanTable candidate) => candidate.Entries.Keys.Any(key => keys.Contains(key) || (key.Group != KeyGroup.None && key.Group == keys[0].Group));
+        if (Answers(table) || (inherited is not null && !Answers(inherited)))
+        {
+            return null;
+        }
+
+        var others = keys.Length > 1 ? $" (or one of {string.Join(", ", keys[1..].Select(key => key.Name))})" : "";
+        var why = inherited is null ? "is missing" : "is missing: what [layout] says does not suit the kind of this stratum";
+        var place = table.EntryOf(PlanKeys.Kind)?.KeyPlace ?? table.Place;
+        return place.Problem(
+            $"{why}: write {keys[0].Name} = {keys[0].Example}{others} under [{table.Path}]", table.Path.Add([keys[0].Name]).ToString());
+    }
+}

@@ -1,0 +1,30 @@
+using System.Collections.Immutable;
+
+namespace SurveyPlanner.Files.Plans;
+
+/// <summary>
+/// A plan file as read: the design it asks for, and the files it names.
+/// </summary>
+/// <param name="Path">The plan file as the user named it.</param>
+/// <param name="Design">The design; its seed is 0 when the file gives none.</param>
+/// <param name="SeedGiven">Whether the file (or <c>--set</c>) gives a seed; if not, the caller takes one from the system.</param>
+/// <param name="BoundaryPath">The boundary file, resolved against the plan's folder.</param>
+/// <param name="Layer">The layer of it; null when none is named.</param>
+/// <param name="Crs">Its coordinate system as the plan states it; null when it does not.</param>
+/// <param name="ExclusionPaths">Files of excluded areas, resolved; empty when there are none.</param>
+/// <param name="PilotTransectsPath">Table of pilot transects, resolved; null when there is none.</param>
+/// <param name="PilotDetectionsPath">Table of pilot detections, resolved; null when there is none.</param>
+/// <param name="CanonicalText">Every key with the value that holds, in one fixed form: what a hash of the plan is taken of. Holds no seed.</param>
+/// <param name="RawText">The file as it is.</param>
+public sealed record PlanFile(
+    string Path,
+    SurveyDesign Design,
+    bool SeedGiven,
+    string BoundaryPath,
+    string? Layer,
+    string? Crs,
+    ImmutableArray<string> ExclusionPaths,
+    string? PilotTransectsPath,
+    string? PilotDetectionsPath,
+    string CanonicalText,
+    string RawText);

@@ -1,0 +1,54 @@
+using System.Text;
+
+namespace SurveyPlanner.Files;
+
+/// <summary>Text files of a size that a person writes: strictly UTF-8, with or without a byte-order mark.</summary>
+internal static class TextFile
+{
+    /// <summary>A plan or a table that is larger is something else under the wrong name.</summary>
+    private const long MostBytes = 64L << 20;
+
+    private static readonly UTF8Encoding Strict = new(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true);
+
+    /// <param name="path">The file.</param>
+    /// <param name="noun">What it should be, for messages: <c>plan file</c>.</param>
+    /// <exception cref="InputException">No such file, too large, or not UTF-8 (with the line).</exception>
+    public static string Read(string path, string noun)
+    {
+        if (Directory.Exists(path))
+        {
+            throw new InputException(new Problem($"this is a folder, not a {noun}", path));
+        }
+
+        if (!File.Exists(path))
+        {
+            throw new InputException(new Problem($"there is no {noun} of this name", path));
+        }
+
+        if (new FileInfo(path).Length > MostBytes)
+        {
+            throw new InputException(new Problem($"is larger than {MostBytes >> 20} MB: no {noun} is so large", path));
+        }
+
+        return Decode(File.ReadAllBytes(path), path);
+    }
+
+    private static string Decode(byte[] bytes, string path)
+    {
+        if (bytes.AsSpan().StartsWith([(byte)0xFF, (byte)0xFE]) || bytes.AsSpan().StartsWith([(byte)0xFE, (byte)0xFF]))
+        {
+            throw new InputException(new Problem("is saved as UTF-16: save it as UTF-8", path, 1, 1));
+        }
+
+        try
+        {
+            var text = Strict.GetString(bytes);
+            return text.StartsWith('\uFEFF') ? text[1..] : text;
+        }
+        catch (DecoderFallbackException exception)
+        {
+            var line = 1 + bytes.Take(exception.Index).Count(b => b == (byte)'\n');
+            throw new InputException(new Problem("holds a character that is not UTF-8: save the file as UTF-8", path, line, 1));
+        }
+    }
+}
