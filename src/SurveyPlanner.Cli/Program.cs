@@ -1,1 +1,3 @@
-Console.WriteLine("survey-planner");
+using SurveyPlanner.Cli;
+
+return Application.Run(args, Terminal.OfProcess());

@@ -1,0 +1,85 @@
+using System.Collections.Immutable;
+using System.Security.Cryptography;
+using SurveyPlanner.Files.Boundaries;
+using SurveyPlanner.Files.Plans;
+using SurveyPlanner.Files.Records;
+using SurveyPlanner.Files.Tables;
+
+namespace SurveyPlanner.Cli;
+
+/// <summary>A plan file with everything it names read.</summary>
+/// <param name="File">The plan file.</param>
+/// <param name="Design">Its design, a seed always filled in.</param>
+/// <param name="SeedFromSystem">Whether the seed was taken from the system, because neither plan nor command line gave one.</param>
+/// <param name="Inputs">The files it names, read.</param>
+/// <param name="Source">The same files as the record keeps them.</param>
+internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedFromSystem, SurveyInputs Inputs, PlanSource Source)
+{
+    /// <summary>Reads a plan file and all that it names.</summary>
+    public static LoadedPlan Read(string path, IReadOnlyList<string> sets)
+        => Complete(PlanFileReader.Read(path, sets), System.IO.File.ReadAllBytes(path));
+
+    /// <summary>The plan of a record, its inputs taken from a folder.</summary>
+    public static LoadedPlan FromRecord(SurveyRecord record, string folder)
+    {
+        var path = Path.Combine(folder, Path.GetFileName(record.Plan.File));
+        var seed = record.Seed.ToString(System.Globalization.CultureInfo.InvariantCulture);
+        var file = PlanFileReader.Parse(record.Plan.CanonicalText, path, [$"survey.seed={seed}"]);
+        return Complete(file, System.Text.Encoding.UTF8.GetBytes(record.Plan.Text));
+    }
+
+    private static LoadedPlan Complete(PlanFile file, byte[] content)
+    {
+        var boundary = BoundaryReader.Read(file.BoundaryPath, new BoundaryOptions { Layer = file.Layer, Crs = file.Crs });
+        var exclusions = file.ExclusionPaths.Select(path => BoundaryReader.Read(path, new BoundaryOptions())).ToImmutableArray();
+        var pilot = file.PilotTransectsPath is { } transects ? PilotTableReader.Read(transects, file.PilotDetectionsPath) : null;
+        var design = file.SeedGiven ? file.Design : file.Design with { Seed = SeedOfSystem() };
+        return new LoadedPlan(
+            file,
+            design,
+            !file.SeedGiven,
+            new SurveyInputs(boundary, exclusions, pilot),
+            new PlanSource(file.Path, content, file.CanonicalText, InputFiles(file)));
+    }
+
+    /// <summary>Short enough to be read out over a radio, long enough that nobody meets the same one twice.</summary>
+    private static ulong SeedOfSystem() => (ulong)RandomNumberGenerator.GetInt32(1_000_000, int.MaxValue);
+
+    private static ImmutableArray<InputFile> InputFiles(PlanFile file)
+    {
+        var named = new List<(string Key, string? Path)> { ("region.boundary", file.BoundaryPath) };
+        named.AddRange(file.ExclusionPaths.Select(path => ("region.exclusions", (string?)path)));
+        named.Add(("pilot.transects", file.PilotTransectsPath));
+        named.Add(("pilot.detections", file.PilotDetectionsPath));
+        var folder = Path.GetDirectoryName(Path.GetFullPath(file.Path))!;
+        return
+        [
+            .. from entry in named
+               where entry.Path is not null
+               from part in Parts(entry.Path!)
+               select InputFile.Of(
+                   entry.Key,
+                   Path.GetRelativePath(folder, Path.GetFullPath(part)).Replace('\\', '/'),
+                   System.IO.File.ReadAllBytes(part)),
+        ];
+    }
+
+    /// <summary>A boundary may be a folder, or a shapefile with its companions: every file of it counts.</summary>
+    private static IEnumerable<string> Parts(string path)
+    {
+        if (Directory.Exists(path))
+        {
+            return Directory.EnumerateFiles(path).Order(StringComparer.Ordinal);
+        }
+
+        if (!path.EndsWith(".shp", StringComparison.OrdinalIgnoreCase))
+        {
+            return [path];
+        }
+
+        var stem = Path.GetFileNameWithoutExtension(path);
+        return Directory.EnumerateFiles(Path.GetDirectoryName(Path.GetFullPath(path))!)
+            .Where(file => Path.GetFileNameWithoutExtension(file) == stem)
+            .Order(StringComparer.Ordinal);
+    }
+}

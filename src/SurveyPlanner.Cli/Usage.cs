@@ -1,0 +1,36 @@
+using System.CommandLine;
+using System.CommandLine.Parsing;
+using SurveyPlanner.Files.Plans;
+
+namespace SurveyPlanner.Cli;
+
+/// <summary>Says in one sentence what is wrong with a command line.</summary>
+internal static class Usage
+{
+    public static string Explain(ParseResult parsed)
+    {
+        var command = parsed.CommandResult.Command;
+        var name = command is RootCommand ? "survey-planner" : $"survey-planner {command.Name}";
+        var unknown = parsed.UnmatchedTokens.FirstOrDefault(token => token.StartsWith('-')) ?? parsed.UnmatchedTokens.FirstOrDefault();
+        if (unknown is not null)
+        {
+            return Unknown(unknown, command, name);
+        }
+
+        var message = parsed.Errors.Count > 0 ? parsed.Errors[0].Message.TrimEnd('.') : "the command line is incomplete";
+        return $"{message}; see {name} --help";
+    }
+
+    private static string Unknown(string token, Command command, string name)
+    {
+        var isOption = token.StartsWith('-');
+        var written = token.Split('=')[0];
+        var known = isOption ? Options(command) : command.Subcommands.Select(sub => sub.Name);
+        var what = isOption ? "option" : command is RootCommand ? "command" : "argument";
+        var hint = Spelling.Nearest(written, known) is { } nearest ? $"; did you mean '{nearest}'?" : "";
+        return $"{name} has no {what} '{written}'{hint}{(hint.Length == 0 ? $"; see {name} --help" : "")}";
+    }
+
+    private static IEnumerable<string> Options(Command command)
+        => command.Options.Concat(command.Parents.OfType<Command>().SelectMany(parent => parent.Options)).Select(option => option.Name);
+}
