@@ -36,17 +36,17 @@ internal static class TestPlans
             new(NoticeKind.Repair, "A ring was closed."),
             new(NoticeKind.Warning, "The half-width is more than half the spacing."),
         ];
-        return new SurveyPlan(design, region, [.. strata.Select(stratum => Placed(stratum, projection))], notices);
+        return new SurveyPlan(design, region, [.. strata.Select(stratum => Placed(stratum, projection))], null, notices);
     }
 
     public static StratumPlan Lines(string name, params Transect[] transects) => new(
         Square(name),
-        new Layout(name, LineDesign, 0, 5000, [1234.5], [.. transects], transects.Sum(transect => transect.LengthMetres) + 1.25, null, []),
+        new Layout(name, LineDesign, 0, 5000, [1234.5], [.. transects], transects.Sum(transect => transect.LengthMetres) + 1.25, 2.25, new EffortSpread(66_869.62, 1500, 60_000, 70_000), []),
         Coverage(name));
 
     public static StratumPlan Points(string name, params Transect[] transects) => new(
         Square(name),
-        new Layout(name, PointDesign, 45, 2000, [1, 2], [.. transects], null, 2.5, []),
+        new Layout(name, PointDesign, 45, 2000, [1, 2], [.. transects], null, 2.5, new EffortSpread(2.5, 0.5, 2, 3), []),
         null);
 
     public static Transect Line(string id, int order, double bearing, params ImmutableArray<LonLat>[] pieces) =>

@@ -123,6 +123,16 @@ public sealed class TransectsGpxTests
     }
 
     [Fact]
+    public void Pieces_of_a_line_with_a_long_id_lose_the_zeros_that_fill_up_its_number()
+    {
+        var pieces = new[] { TestPlans.Path(0, 1, 0.01, 1), TestPlans.Path(0.02, 1, 0.03, 1) };
+        var root = XDocument.Parse(Text(TestPlans.OneStratum(new LonLat(0, 1), TestPlans.Line("T0012", 1, 90, pieces)))).Root!;
+
+        Assert.Equal(["T12AS", "T12AE", "T12BS", "T12BE"], root.Elements(Gpx + "wpt").Select(wpt => wpt.Element(Gpx + "name")!.Value));
+        Assert.Equal(["T0012A", "T0012B"], root.Elements(Gpx + "rte").Select(rte => rte.Element(Gpx + "name")!.Value));
+    }
+
+    [Fact]
     public void Every_text_of_unicode_makes_a_well_formed_file()
     {
         var everything = string.Concat(Enumerable.Range(0, 0x10000).Select(code => (char)code));
