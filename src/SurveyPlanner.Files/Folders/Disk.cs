@@ -1,0 +1,51 @@
+using System.Runtime.InteropServices;
+using System.Text;
+
+namespace SurveyPlanner.Files.Folders;
+
+/// <summary>The real disk.</summary>
+internal sealed class Disk : IDisk
+{
+    public void MakeFolder(string path) => Directory.CreateDirectory(path);
+
+    public void WriteFile(string path, ReadOnlyMemory<byte> content)
+    {
+        using var stream = new FileStream(path, FileMode.CreateNew, FileAccess.Write, FileShare.None, bufferSize: 0);
+        stream.Write(content.Span);
+        stream.Flush(flushToDisk: true);
+    }
+
+    public void MoveFolder(string from, string to) => Directory.Move(from, to);
+
+    public void DeleteFolder(string path) => Directory.Delete(path, recursive: true);
+
+    public void SyncFolder(string path)
+    {
+        // .NET opens no folders. Some file systems cannot sync one either: then the rename is as safe as they make it.
+        if (OperatingSystem.IsWindows())
+        {
+            return;
+        }
+
+        var descriptor = Open([.. Encoding.UTF8.GetBytes(path), 0], ReadOnly);
+        if (descriptor >= 0)
+        {
+            _ = Sync(descriptor);
+            _ = Close(descriptor);
+        }
+    }
+
+    private const int ReadOnly = 0;
+
+    [DllImport("libc", EntryPoint = "open")]
+    [DefaultDllImportSearchPaths(DllImportSearchPath.SafeDirectories)]
+    private static extern int Open(byte[] path, int flags);
+
+    [DllImport("libc", EntryPoint = "fsync")]
+    [DefaultDllImportSearchPaths(DllImportSearchPath.SafeDirectories)]
+    private static extern int Sync(int descriptor);
+
+    [DllImport("libc", EntryPoint = "close")]
+    [DefaultDllImportSearchPaths(DllImportSearchPath.SafeDirectories)]
+    private static extern int Close(int descriptor);
+}

@@ -1,0 +1,143 @@
+using System.Text.Json;
+using SurveyPlanner.Coverage;
+using SurveyPlanner.Layouts;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Files.Outputs;
+
+/// <summary>
+/// <c>summary.json</c>: every figure of the report, its unit in its key; what does not apply is left out, never 0.
+/// Layout and digits: docs/outputs.md.
+/// </summary>
+public static class SummaryWriter
+{
+    /// <summary>Raised when a key changes its meaning or goes; a new key does not raise it.</summary>
+    public const int FormatVersion = 1;
+
+    private const int Digits = 9;
+
+    /// <param name="plan">The plan.</param>
+    /// <param name="draw">Which draw under this plan it is; null for work that draws nothing that counts.</param>
+    public static OutputFile Write(SurveyPlan plan, int? draw) =>
+        new(OutputNames.Summary, JsonText.Write(json => WriteTo(json, plan, draw), indented: true));
+
+    /// <summary>The same document into a writer, for the command line's <c>--json</c>.</summary>
+    public static void WriteTo(Utf8JsonWriter json, SurveyPlan plan, int? draw)
+    {
+        json.WriteStartObject();
+        json.WriteNumber("format_version", FormatVersion);
+        json.Object("survey", () => WriteSurvey(json, plan.Design, draw));
+        json.Object("projection", () => WriteProjection(json, plan.Region));
+        json.Object("region", () => WriteRegion(json, plan.Region));
+        json.Array("strata", plan.Strata, stratum => WriteStratum(json, stratum));
+        json.WriteEndObject();
+    }
+
+    /// <summary>What <c>check --json</c> prints: projection, region and strata in the same form, with repairs and warnings.</summary>
+    public static void WriteCheck(Utf8JsonWriter json, Region region, IEnumerable<Notice> notices)
+    {
+        var all = notices.ToList();
+        json.WriteStartObject();
+        json.WriteNumber("format_version", FormatVersion);
+        json.Object("projection", () => WriteProjection(json, region));
+        json.Object("region", () => WriteRegion(json, region));
+        json.Array("strata", region.Strata, stratum =>
+        {
+            json.WriteStartObject();
+            WriteArea(json, stratum);
+            json.WriteEndObject();
+        });
+        WriteNotices(json, all);
+        json.WriteEndObject();
+    }
+
+    /// <summary>Repairs and warnings as two lists of sentences.</summary>
+    internal static void WriteNotices(Utf8JsonWriter json, IReadOnlyCollection<Notice> notices)
+    {
+        void List(string key, NoticeKind kind) => json.Array(
+            key, notices.Where(notice => notice.Kind == kind), notice => json.WriteStringValue(PlainText.WellFormed(notice.Message)));
+
+        List("repairs", NoticeKind.Repair);
+        List("warnings", NoticeKind.Warning);
+    }
+
+    private static void WriteSurvey(Utf8JsonWriter json, SurveyDesign design, int? draw)
+    {
+        json.Text("name", design.Name);
+        json.WriteNumber("seed", design.Seed);
+        if (draw is { } number)
+        {
+            json.WriteNumber("draw", number);
+        }
+    }
+
+    private static void WriteProjection(Utf8JsonWriter json, Region region)
+    {
+        json.Text("method", region.Projection.Method);
+        json.Text("wkt", region.Projection.Wkt);
+        json.Figure("max_scale_error_percent", Figures.Significant(region.MaxScaleErrorPercent, 6));
+    }
+
+    private static void WriteRegion(Utf8JsonWriter json, Region region)
+    {
+        json.Figure("area_km2", Figures.Area(region.AreaKm2));
+        json.Figure("geodesic_area_km2", Figures.Area(region.GeodesicAreaKm2));
+    }
+
+    private static void WriteArea(Utf8JsonWriter json, Stratum stratum)
+    {
+        json.Text("name", stratum.Name);
+        json.Figure("area_km2", Figures.Area(stratum.AreaKm2));
+        json.Figure("geodesic_area_km2", Figures.Area(stratum.GeodesicAreaKm2));
+    }
+
+    private static void WriteStratum(Utf8JsonWriter json, StratumPlan stratum)
+    {
+        json.WriteStartObject();
+        WriteArea(json, stratum.Stratum);
+        WriteLayout(json, stratum.Layout);
+        if (stratum.Coverage is { } coverage)
+        {
+            json.Object("coverage", () => WriteCoverage(json, coverage));
+        }
+
+        json.WriteEndObject();
+    }
+
+    private static void WriteLayout(Utf8JsonWriter json, Layout layout)
+    {
+        json.WriteString("kind", KindWord(layout.Design.Kind));
+        json.Figure("bearing_deg", Figures.Bearing(layout.BearingDegrees, fullTurn: 180));
+        json.Figure("spacing_m", Figures.Metres(layout.SpacingMetres));
+        json.Figure("half_width_m", Figures.Metres(layout.Design.HalfWidthMetres));
+        if (layout.Design.IsPoints)
+        {
+            json.WriteNumber("points", layout.Transects.Length);
+            return;
+        }
+
+        json.WriteNumber("transects", layout.Transects.Length);
+        json.Figure("total_length_km", Figures.KilometresOf(layout.TotalLengthMetres));
+        if (layout.ExpectedLengthMetres is { } expected)
+        {
+            json.Figure("expected_length_km", Figures.KilometresOf(expected));
+        }
+    }
+
+    private static void WriteCoverage(Utf8JsonWriter json, StratumCoverage coverage)
+    {
+        json.Figure("nominal", Figures.Significant(coverage.Nominal, Digits));
+        json.Figure("mean", Figures.Significant(coverage.Mean, Digits));
+        json.Figure("min", Figures.Significant(coverage.Min, Digits));
+        json.Figure("max", Figures.Significant(coverage.Max, Digits));
+        json.Figure("cv", Figures.Significant(coverage.Cv, Digits));
+        json.Figure("simulated_mean", Figures.Significant(coverage.SimulatedMean, Digits));
+        if (coverage.MaxAbsZ is { } z)
+        {
+            json.Figure("max_abs_z", Figures.Significant(z, Digits));
+        }
+    }
+
+    /// <summary>The plan file's word for a kind: its name in lower case with hyphens.</summary>
+    private static string KindWord(LayoutKind kind) => JsonNamingPolicy.KebabCaseLower.ConvertName(kind.ToString());
+}
