@@ -55,7 +55,7 @@ internal static class Stylesheet
         "figure{margin:16px 0}figcaption{font-size:14px;max-width:70ch;margin-top:8px}",
         ".scroll{overflow-x:auto}.scroll svg{display:block;width:100%;min-width:600px;height:auto}",
         ".chart svg{display:block;width:100%;height:auto}",
-        $"table{{border-collapse:collapse;font-size:14px;margin:12px 0 20px;font-variant-numeric:tabular-nums;width:100%}}",
+        $"table{{border-collapse:collapse;font-size:14px;margin:12px 0 20px;font-variant-numeric:tabular-nums}}",
         "caption{text-align:left;font-weight:600;padding-bottom:4px}",
         $"th,td{{padding:4px 12px 4px 0;text-align:left;vertical-align:top;border-bottom:1px solid {Tokens.Hairline}}}",
         $"thead th{{color:{Tokens.Muted};font-weight:400;vertical-align:bottom;border-bottom:1px solid {Tokens.Muted}}}",
@@ -67,7 +67,7 @@ internal static class Stylesheet
         ".swatch{display:inline-block;vertical-align:-2px;margin-right:8px}",
         // On a narrow screen a row becomes a small list, each figure with its own heading: nothing has to be scrolled sideways.
         "@media screen and (max-width:720px){thead,td.empty{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}"
-            + "table,tbody,tr,caption{display:block}tr{padding:8px 0;border-bottom:1px solid " + Tokens.Hairline + "}"
+            + "table,tbody,tr,caption{display:block;width:100%}tr{padding:8px 0;border-bottom:1px solid " + Tokens.Hairline + "}"
             + "th[scope=row],td{display:flex;justify-content:space-between;gap:16px;border:0;padding:1px 0;text-align:right}"
             + "td::before,th[scope=row]::before{content:attr(data-label);color:" + Tokens.Muted + ";font-weight:400;text-align:left}"
             + "dl{display:block}dd{margin-bottom:8px}body{padding:20px 12px}}",

@@ -1,7 +1,7 @@
 using System.Globalization;
 using System.Text;
 using SurveyPlanner.Coverage;
-using SurveyPlanner.Regions;
+using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Pages.Maps;
 
@@ -10,35 +10,34 @@ namespace SurveyPlanner.Pages.Maps;
 /// in whole numbers of cells under one transform. Ten thousand cells come to some ten kilobytes.
 /// </summary>
 /// <param name="Transform">From cells to pixels.</param>
-/// <param name="Paths">A path for each class that occurs.</param>
+/// <param name="Paths">A path for each class that occurs, but for places without coverage: there the hatch below shows.</param>
 public sealed record CellsDrawing(string Transform, IReadOnlyList<(int Class, string Path)> Paths)
 {
     public static CellsDrawing Of(StratumCoverage coverage, MapFrame frame)
     {
-        var (sin, cos) = Math.SinCos(coverage.RowBearingRadians);
-        var turned = coverage.Cells.Select(cell => (
-            U: (cell.SquareCentre.X * cos) + (cell.SquareCentre.Y * sin),
-            V: (cell.SquareCentre.Y * cos) - (cell.SquareCentre.X * sin),
-            Class: CoverageClasses.Of(cell, coverage.Nominal))).ToArray();
+        var grid = new TurnedFrame(coverage.RowBearingRadians);
+        var turned = coverage.Cells
+            .Select(cell => (Place: grid.ToFrame(cell.SquareCentre.X, cell.SquareCentre.Y), Class: CoverageClasses.Of(cell, coverage.Nominal)))
+            .ToArray();
         if (turned.Length == 0)
         {
             return new CellsDrawing("", []);
         }
 
-        var (size, u0, v0) = (coverage.CellSizeMetres, turned.Min(cell => cell.U), turned.Min(cell => cell.V));
+        var (size, u0, v0) = (coverage.CellSizeMetres, turned.Min(cell => cell.Place.X), turned.Min(cell => cell.Place.Y));
         var paths = turned
-            .Select(cell => (Column: (int)Math.Round((cell.U - u0) / size), Row: (int)Math.Round((cell.V - v0) / size), cell.Class))
+            .Select(cell => (Column: (int)Math.Round((cell.Place.X - u0) / size), Row: (int)Math.Round((cell.Place.Y - v0) / size), cell.Class))
+            .Where(cell => cell.Class != CoverageClasses.Never)
             .GroupBy(cell => cell.Class)
             .OrderBy(group => group.Key)
             .Select(group => (group.Key, Runs(group.Select(cell => (cell.Row, cell.Column)))));
 
         // The corner of the first cell, and the steps to the next column and row.
-        var corner = frame.ToPixel(Plane(u0 - (size / 2), v0 - (size / 2), sin, cos));
+        var corner = frame.ToPixel(grid.ToPlane(u0 - (size / 2), v0 - (size / 2)));
         var step = size / frame.MetresPerPixel;
+        var (sin, cos) = Math.SinCos(coverage.RowBearingRadians);
         return new CellsDrawing(Matrix(cos * step, -sin * step, -sin * step, -cos * step, corner.X, corner.Y), [.. paths]);
     }
-
-    private static PlanePoint Plane(double u, double v, double sin, double cos) => new((u * cos) - (v * sin), (u * sin) + (v * cos));
 
     private static string Runs(IEnumerable<(int Row, int Column)> cells)
     {

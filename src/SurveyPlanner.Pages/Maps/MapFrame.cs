@@ -34,7 +34,7 @@ public sealed record MapFrame(double Width, double Height, PlanePoint Centre, do
 
     public bool Contains(Pixel p) => p.X >= 0 && p.X <= Width && p.Y >= 0 && p.Y <= Height;
 
-    /// <summary>A drawing of full width whose height suits what lies between the bounds (metres); tall regions get narrower maps.</summary>
+    /// <summary>A drawing of full width whose height suits what lies between the bounds (metres).</summary>
     public static MapFrame Around(double minX, double maxX, double minY, double maxY)
     {
         var (wide, high) = (Math.Max(maxX - minX, 1), Math.Max(maxY - minY, 1));

@@ -1,4 +1,4 @@
-using SurveyPlanner.Pages.Words;
+using System.Globalization;
 
 namespace SurveyPlanner.Pages.Maps;
 
@@ -25,10 +25,11 @@ public sealed record ScaleBar(double SegmentPixels, int Segments, IReadOnlyList<
             >= 2 => (2 * power, 4),
             _ => (power, 5),
         };
-        var last = Figures.Three(length) + " " + name;
         return new ScaleBar(
             length / segments * unit / metresPerPixel,
             segments,
-            [(0, "0"), (segments == 4 ? 2 : 1, Figures.Three(length / segments * (segments == 4 ? 2 : 1))), (segments, last)]);
+            [(0, "0"), (segments / 2, Round(length / segments * (segments / 2))), (segments, Round(length) + " " + name)]);
     }
+
+    private static string Round(double value) => value.ToString("0.######", CultureInfo.InvariantCulture);
 }

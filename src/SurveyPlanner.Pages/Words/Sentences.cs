@@ -46,9 +46,14 @@ internal static class Sentences
     public static string OfMap(SurveyPlan plan)
     {
         var strata = plan.Strata.Select(stratum =>
-            $"{stratum.Stratum.Name}: {Word(stratum.Layout.Design.Kind)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
+            $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Word(stratum.Layout.Design.Kind)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
         return $"{OfRegion(plan.Region)} {string.Join("; ", strata)}. The table of transects has their positions.";
     }
+
+    /// <summary>How much coverage differs, by stratum.</summary>
+    public static string OfCoverageRange(IReadOnlyCollection<StratumCoverage> coverages) => string.Join(" ", coverages.Select(coverage =>
+        $"{(coverages.Count == 1 ? "Coverage" : coverage.Stratum + ": coverage")} averages {Figures.Three(coverage.Mean)} and runs from {Figures.Three(coverage.Min)} "
+        + $"to {Figures.Three(coverage.Max)}; its coefficient of variation over the area is {Figures.Percent(coverage.Cv)}."));
 
     /// <summary>What the map of coverage shows.</summary>
     public static string OfCoverage(IReadOnlyCollection<StratumCoverage> coverages, IReadOnlyList<CoverageClass> classes)
@@ -56,9 +61,9 @@ internal static class Sentences
         var even = classes.FirstOrDefault(one => one.Name == "0.9–1.1")?.Share ?? 0;
         var never = classes.FirstOrDefault(one => one.Index == CoverageClasses.Never);
         var lowest = coverages.MinBy(coverage => coverage.Nominal > 0 ? coverage.Min / coverage.Nominal : double.MaxValue)!;
-        var where = lowest.Cells.IsEmpty ? "" : " near " + Positions.Rough(lowest.Cells.MinBy(cell => cell.Best)!.Position);
+        var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + (lowest.Cells.IsEmpty ? "" : ", near " + Positions.Rough(lowest.Cells.MinBy(cell => cell.Best)!.Position));
         return $"{Figures.Percent(even)} of the area has a coverage probability within 10 % of nominal. "
-            + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}, in {lowest.Stratum}{where}. "
+            + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}{where}. "
             + (never is null ? "No place is without coverage." : $"{Figures.Percent(never.Share)} of the area can never be covered (hatched).");
     }
 
