@@ -21,7 +21,7 @@ public class PictureBook
                      ("polar_svalbard", null, 25_000), ("lake_caspian_with_islands", null, 40_000), ("island_iceland", null, 20_000),
                  ])
         {
-            var plan = SamplePlan.Lines(SampleRegion.Read(file, field), spacing);
+            var plan = SamplePlan.Of(SampleBoundary.Read(file), SamplePlan.Parallel(spacing), field);
             File.WriteAllText(Path.Combine(folder, file + ".html"), ReportRenderer.Render(plan, SamplePlan.Context));
             File.WriteAllText(Path.Combine(folder, file + ".svg"), MapRenderer.RenderSvg(plan, SamplePlan.Context));
             File.WriteAllText(Path.Combine(folder, file + "-region.svg"), MapRenderer.RenderSvg(plan.Region, file));

@@ -9,15 +9,13 @@ namespace SurveyPlanner.Pages.Tests;
 
 public partial class ReportTests
 {
-    private static readonly SurveyPlan Archipelago = SamplePlan.Lines(SampleRegion.Read("marine_archipelago_sea"));
-
     // Everything that can go wrong in a name: markup, ends of CDATA and comments, control characters, half a surrogate pair, turned reading direction.
     private const string Hostile = "<script>alert(1)</script>]]>--><img src=x onerror=y>\"'&\u0000\u0001\u0085\ud800\u202e\u2066;</style></title>{}";
 
     [Fact]
     public void Equal_plans_give_equal_bytes_whatever_the_culture()
     {
-        var expected = ReportRenderer.Render(Archipelago, SamplePlan.Context);
+        var expected = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         var culture = (CultureInfo)CultureInfo.InvariantCulture.Clone();
         culture.NumberFormat.NumberDecimalSeparator = ",";
         culture.NumberFormat.NumberGroupSeparator = "'";
@@ -26,7 +24,7 @@ public partial class ReportTests
         try
         {
             CultureInfo.CurrentCulture = culture;
-            Assert.Equal(expected, ReportRenderer.Render(Archipelago, SamplePlan.Context));
+            Assert.Equal(expected, ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context));
         }
         finally
         {
@@ -43,9 +41,9 @@ public partial class ReportTests
             LayoutSha256 = Hostile,
             RecordFileName = Hostile,
         };
-        var region = SampleRegion.Boxes((Hostile, 20, 60, 21, 61), (Hostile + "2", 21, 60, 22, 61)) with { CoordinateSystem = Hostile };
-        var plan = SamplePlan.Lines(region, name: Hostile);
-        plan = plan with { Notices = [new Notice(NoticeKind.Warning, Hostile), new Notice(NoticeKind.Repair, Hostile)] };
+        var plan = SamplePlan.Of(
+            SampleBoundary.Boxes((Hostile, 20, 60, 21, 61), (Hostile + "2", 21, 60, 22, 61)), SamplePlan.Parallel(20_000), stratumField: "name", name: Hostile);
+        plan = plan with { Region = plan.Region with { CoordinateSystem = Hostile }, Notices = [new Notice(NoticeKind.Warning, Hostile), new Notice(NoticeKind.Repair, Hostile)] };
 
         var page = ReportRenderer.Render(plan, context);
         Assert.DoesNotContain("<script", page, StringComparison.OrdinalIgnoreCase);
@@ -65,7 +63,7 @@ public partial class ReportTests
     [Fact]
     public void The_page_needs_no_network_and_allows_nothing_but_its_own_style()
     {
-        var page = ReportRenderer.Render(Archipelago, SamplePlan.Context);
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         Assert.DoesNotContain("http://", page, StringComparison.Ordinal);
         Assert.DoesNotContain("https://", page, StringComparison.Ordinal);
         Assert.DoesNotContain(" src=", page, StringComparison.Ordinal);
@@ -81,7 +79,7 @@ public partial class ReportTests
     [Fact]
     public void Every_picture_has_a_title_and_a_description_and_every_id_is_unique()
     {
-        var page = ReportRenderer.Render(Archipelago, SamplePlan.Context);
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         var ids = Id().Matches(page).Select(match => match.Groups[1].Value).ToArray();
         Assert.Equal(ids.Length, ids.Distinct().Count());
         Assert.Equal(2, Picture().Count(page));
@@ -96,7 +94,7 @@ public partial class ReportTests
     [Fact]
     public void Every_heading_cell_says_what_it_heads()
     {
-        var page = ReportRenderer.Render(Archipelago, SamplePlan.Context);
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         var headings = HeadingCell().Matches(page);
         Assert.NotEmpty(headings);
         Assert.All(headings, match => Assert.Contains("scope=", match.Value, StringComparison.Ordinal));
@@ -105,9 +103,9 @@ public partial class ReportTests
     [Fact]
     public void Every_transect_stands_in_the_table()
     {
-        var page = ReportRenderer.Render(Archipelago, SamplePlan.Context);
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         Assert.All(
-            Archipelago.Strata.SelectMany(stratum => stratum.Layout.Transects),
+            SamplePlan.Archipelago.Strata.SelectMany(stratum => stratum.Layout.Transects),
             transect => Assert.Contains($"<th scope=\"row\" data-label=\"Id\">{transect.Id}</th>", page, StringComparison.Ordinal));
     }
 
@@ -119,8 +117,8 @@ public partial class ReportTests
     [InlineData("island_iceland", null)]
     public void A_real_region_gives_a_map_that_is_xml_without_a_missing_number(string file, string? stratumField)
     {
-        var region = SampleRegion.Read(file, stratumField);
-        foreach (var svg in (string[])[MapRenderer.RenderSvg(region, file), MapRenderer.RenderSvg(SamplePlan.Lines(region, 20_000), SamplePlan.Context)])
+        var plan = SamplePlan.Of(SampleBoundary.Read(file), SamplePlan.Parallel(20_000), stratumField, cells: 500);
+        foreach (var svg in (string[])[MapRenderer.RenderSvg(plan.Region, file), MapRenderer.RenderSvg(plan, SamplePlan.Context)])
         {
             new XmlDocument { XmlResolver = null }.LoadXml(svg);
             Assert.DoesNotContain("NaN", svg, StringComparison.Ordinal);

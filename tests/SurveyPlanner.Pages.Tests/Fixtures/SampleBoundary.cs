@@ -5,35 +5,24 @@ using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Pages.Tests.Fixtures;
 
-/// <summary>Regions for the tests of pages, read from the reference boundaries without the checks that the program's own reader does.</summary>
-internal static class SampleRegion
+/// <summary>Boundaries for the tests of pages: the reference ones, read without the checks of the program's own reader, and boxes.</summary>
+internal static class SampleBoundary
 {
     /// <param name="file">Name of a file of tests/reference-data/regions, without its ending.</param>
-    /// <param name="stratumField">Attribute that names the strata; null for one stratum.</param>
-    public static Region Read(string file, string? stratumField = null)
+    public static Boundary Read(string file)
     {
         using var document = JsonDocument.Parse(File.ReadAllText(Path.Combine(ReferenceData(), "regions", file + ".geojson")));
-        var features = document.RootElement.GetProperty("features").EnumerateArray().Select((feature, i) => new BoundaryFeature(
+        return Of([.. document.RootElement.GetProperty("features").EnumerateArray().Select((feature, i) => new BoundaryFeature(
             i + 1,
             feature.GetProperty("properties").EnumerateObject().ToImmutableSortedDictionary(p => p.Name, p => p.Value.ToString()),
-            [.. Polygons(feature.GetProperty("geometry"))]));
-        return Build(stratumField, [.. features]);
+            [.. Polygons(feature.GetProperty("geometry"))]))]);
     }
 
-    /// <summary>Strata given as rectangles in degrees: west, south, east, north.</summary>
-    public static Region Boxes(params (string Name, double West, double South, double East, double North)[] strata) => Build("name", [.. strata.Select((box, i) => new BoundaryFeature(
+    /// <summary>Features given as rectangles in degrees, with the attribute <c>name</c>.</summary>
+    public static Boundary Boxes(params (string Name, double West, double South, double East, double North)[] boxes) => Of([.. boxes.Select((box, i) => new BoundaryFeature(
         i + 1, ImmutableSortedDictionary<string, string>.Empty.Add("name", box.Name), [Box(box.West, box.South, box.East, box.North)]))]);
 
-    /// <summary>A rectangle in degrees with one closed to survey within it.</summary>
-    public static Region WithExclusion() => RegionBuilder.Build(
-        BoundaryOf([new(1, ImmutableSortedDictionary<string, string>.Empty, [Box(20, 60, 22, 61)])]),
-        new RegionDesign(),
-        [BoundaryOf([new(1, ImmutableSortedDictionary<string, string>.Empty, [Box(20.6, 60.3, 21, 60.5)])])]);
-
-    private static Region Build(string? stratumField, ImmutableArray<BoundaryFeature> features)
-        => RegionBuilder.Build(BoundaryOf(features), new RegionDesign(stratumField, []), []);
-
-    private static Boundary BoundaryOf(ImmutableArray<BoundaryFeature> features)
+    private static Boundary Of(ImmutableArray<BoundaryFeature> features)
         => new("sample.geojson", features, "longitude and latitude on WGS 84, as RFC 7946 says", []);
 
     private static GeographicPolygon Box(double west, double south, double east, double north)
