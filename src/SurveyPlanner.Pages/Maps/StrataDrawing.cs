@@ -1,0 +1,60 @@
+using SurveyPlanner.Pages.Look;
+using SurveyPlanner.Pages.Words;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Pages.Maps;
+
+/// <summary>The strata of a region on a drawing.</summary>
+public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string Exclusions)
+{
+    public const double NameSize = 14;
+    private const int LongestName = 28;
+
+    /// <summary>A lone stratum needs no name: the map's title has it.</summary>
+    internal static StrataDrawing Of(Region region, MapFrame frame, LabelPlacer placer)
+    {
+        var shapes = region.Strata.Select(stratum => ShapeDrawing.Of(stratum.Shape, frame)).ToArray();
+        var fills = FillsFor(shapes);
+        var strata = region.Strata.Select((stratum, i) => new StratumDrawing(
+            stratum.Name,
+            shapes[i],
+            Tokens.StratumFills[fills[i]],
+            region.Strata.Length > 1 ? NameLabel(stratum.Name, shapes[i], placer) : null));
+        return new StrataDrawing([.. strata], ShapeDrawing.Of(region.Exclusions, frame).Path);
+    }
+
+    private static Label NameLabel(string name, ShapeDrawing shape, LabelPlacer placer)
+    {
+        var text = PlainText.Shorten(name, LongestName);
+        var candidates = shape.RoomiestPlaces(120).Select(place => new Label(text, place with { Y = place.Y + (NameSize / 3) })).ToArray();
+        if (candidates.FirstOrDefault(label => placer.TryPlace(label, NameSize)) is { } free)
+        {
+            return free;
+        }
+
+        // A stratum is never without its name, even where names must touch.
+        placer.Place(candidates[0], NameSize);
+        return candidates[0];
+    }
+
+    // Neighbours (strata that share a vertex on the drawing) get different fills as far as four allow.
+    private static int[] FillsFor(ShapeDrawing[] shapes)
+    {
+        var corners = shapes.Select(shape => shape.Rings.SelectMany(ring => ring).Select(p => ((int)p.X, (int)p.Y)).ToHashSet()).ToArray();
+        var fills = new int[shapes.Length];
+        for (var i = 0; i < shapes.Length; i++)
+        {
+            var used = Enumerable.Range(0, i).Where(j => corners[i].Overlaps(corners[j])).Select(j => fills[j]).ToArray();
+            fills[i] = Enumerable.Range(0, Tokens.StratumFills.Count).OrderBy(fill => used.Count(u => u == fill)).ThenBy(fill => fill).First();
+        }
+
+        return fills;
+    }
+}
+
+/// <summary>One stratum on a drawing.</summary>
+/// <param name="Name">Its full name.</param>
+/// <param name="Shape">Its rings.</param>
+/// <param name="Fill">Its colour.</param>
+/// <param name="NameLabel">Its name where it stands on the map; null for a lone stratum.</param>
+public sealed record StratumDrawing(string Name, ShapeDrawing Shape, string Fill, Label? NameLabel);

@@ -1,0 +1,143 @@
+using SurveyPlanner.Layouts;
+using SurveyPlanner.Pages.Words;
+
+namespace SurveyPlanner.Pages.Maps;
+
+/// <summary>The transects of a survey on a drawing.</summary>
+/// <param name="Lines">Path and tooltip of each.</param>
+/// <param name="Rings">Circles of the detection radius round points, where they are large enough to see.</param>
+/// <param name="Chevrons">Where and which way (degrees clockwise from rightwards) lines are travelled.</param>
+/// <param name="Ids">Ids that found room.</param>
+/// <param name="IdsLeftOut">Number of transects of which no id found room.</param>
+public sealed record TransectsDrawing(
+    IReadOnlyList<(string Path, string Title)> Lines,
+    string Rings,
+    IReadOnlyList<(Pixel Place, double Turn)> Chevrons,
+    IReadOnlyList<Label> Ids,
+    int IdsLeftOut)
+{
+    public const double IdSize = 12;
+
+    // Shorter pieces have no room for the mark, which is 10 pixels long.
+    private const double LeastForChevron = 18;
+    private const double LeastRingRadius = 4;
+
+    public string AllPaths => string.Concat(Lines.Select(line => line.Path));
+
+    internal static TransectsDrawing Of(IEnumerable<Layout> layouts, MapFrame frame, LabelPlacer placer)
+    {
+        var all = layouts.SelectMany(layout => layout.Transects, (layout, transect) => new Drawn(layout, transect, Pixels(transect, frame))).ToArray();
+        var rings = new PathData();
+        foreach (var point in all.Where(drawn => drawn.Transect.IsPoint))
+        {
+            if (point.Layout.Design.HalfWidthMetres / frame.MetresPerPixel is var radius && radius >= LeastRingRadius)
+            {
+                rings.Circle(point.Start, radius);
+            }
+        }
+
+        var chevrons = all.Select(ChevronOf).OfType<(Pixel Place, double Turn)>()
+            .Where(chevron => placer.TryPlaceBox(chevron.Place, 6)).ToArray();
+        var shared = all.SelectMany(drawn => new[] { Rounded(drawn.Start), Rounded(drawn.End) })
+            .GroupBy(place => place).Where(group => group.Count() > 1).Select(group => group.Key).ToHashSet();
+        var ids = all.Select(drawn => IdLabels(drawn, shared, placer)).ToArray();
+        return new TransectsDrawing(
+            [.. all.Select(drawn => (drawn.Path, drawn.Title))],
+            rings.ToString(),
+            chevrons,
+            [.. ids.SelectMany(labels => labels)],
+            ids.Count(labels => labels.Count == 0));
+    }
+
+    private static Pixel[][] Pixels(Transect transect, MapFrame frame)
+        => [.. transect.Pieces.Select(piece => piece.Plane.Select(frame.ToPixel).ToArray())];
+
+    private static (int, int) Rounded(Pixel p) => ((int)Math.Round(p.X), (int)Math.Round(p.Y));
+
+    // In the middle of the longest piece.
+    private static (Pixel Place, double Turn)? ChevronOf(Drawn drawn)
+    {
+        var longest = drawn.Pieces.MaxBy(Length)!;
+        var half = Length(longest) / 2;
+        if (half < LeastForChevron / 2)
+        {
+            return null;
+        }
+
+        for (var i = 1; ; i++)
+        {
+            var (a, b) = (longest[i - 1], longest[i]);
+            var leg = a.DistanceTo(b);
+            if (half <= leg || i == longest.Length - 1)
+            {
+                var share = leg > 0 ? Math.Min(half / leg, 1) : 0;
+                return (new Pixel(a.X + (share * (b.X - a.X)), a.Y + (share * (b.Y - a.Y))), Math.Atan2(b.Y - a.Y, b.X - a.X) * 180 / Math.PI);
+            }
+
+            half -= leg;
+        }
+    }
+
+    private static double Length(Pixel[] piece)
+    {
+        var length = 0.0;
+        for (var i = 1; i < piece.Length; i++)
+        {
+            length += piece[i - 1].DistanceTo(piece[i]);
+        }
+
+        return length;
+    }
+
+    private static List<Label> IdLabels(Drawn drawn, HashSet<(int, int)> shared, LabelPlacer placer)
+    {
+        var id = drawn.Transect.Id;
+        IEnumerable<IEnumerable<Label>> ends = drawn.Transect.IsPoint
+            ? [PointPlaces(id, drawn.Start)]
+            :
+            [
+                LinePlaces(id, drawn.Start, drawn.Pieces[0][1], shared.Contains(Rounded(drawn.Start))),
+                LinePlaces(id, drawn.End, drawn.Pieces[^1][^2], shared.Contains(Rounded(drawn.End))),
+            ];
+        return [.. ends.Select(places => places.FirstOrDefault(label => placer.TryPlace(label, IdSize))).OfType<Label>()];
+    }
+
+    private static IEnumerable<Label> PointPlaces(string id, Pixel at) =>
+    [
+        new Label(id, new Pixel(at.X + 6, at.Y - 5), Anchor.Start),
+        new Label(id, new Pixel(at.X + 6, at.Y + 13), Anchor.Start),
+        new Label(id, new Pixel(at.X - 6, at.Y - 5), Anchor.End),
+        new Label(id, new Pixel(at.X - 6, at.Y + 13), Anchor.End),
+    ];
+
+    // Beyond the end; where two lines meet (the turns of a zigzag) that would not tell which is which: beside the line instead, a little way in.
+    private static IEnumerable<Label> LinePlaces(string id, Pixel end, Pixel next, bool shared)
+    {
+        var length = Math.Max(end.DistanceTo(next), 1e-9);
+        var (ux, uy) = ((end.X - next.X) / length, (end.Y - next.Y) / length);
+        var (halfWide, halfHigh) = (id.Length * IdSize * 0.3, IdSize * 0.42);
+        if (!shared)
+        {
+            var out_ = 4 + (Math.Abs(ux) * halfWide) + (Math.Abs(uy) * halfHigh);
+            yield return new Label(id, new Pixel(end.X + (out_ * ux), end.Y + (out_ * uy) + halfHigh));
+        }
+
+        var aside = 4 + (Math.Abs(uy) * halfWide) + (Math.Abs(ux) * halfHigh);
+        var back = Math.Min(shared ? 26 : 8, length / 3);
+        foreach (var side in (int[])[1, -1])
+        {
+            yield return new Label(id, new Pixel(end.X - (back * ux) - (side * aside * uy), end.Y - (back * uy) + (side * aside * ux) + halfHigh));
+        }
+    }
+
+    private sealed record Drawn(Layout Layout, Transect Transect, Pixel[][] Pieces)
+    {
+        public Pixel Start => Pieces[0][0];
+
+        public Pixel End => Pieces[^1][^1];
+
+        public string Path => string.Concat(Pieces.Select(piece => new PathData().Polyline(piece).ToString()));
+
+        public string Title => Transect.IsPoint ? Transect.Id : $"{Transect.Id}, {Figures.Distance(Transect.LengthMetres)}";
+    }
+}

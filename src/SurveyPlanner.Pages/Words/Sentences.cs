@@ -1,0 +1,92 @@
+using System.Globalization;
+using SurveyPlanner.Coverage;
+using SurveyPlanner.Layouts;
+using SurveyPlanner.Pages.Maps;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Pages.Words;
+
+/// <summary>The sentences that answer first: what the plan comes to, what a picture shows.</summary>
+internal static class Sentences
+{
+    /// <summary>The plan file's word for a layout kind and its like: lower case with hyphens.</summary>
+    public static string Word(Enum value)
+    {
+        var name = value.ToString();
+        return string.Concat(name.Select((c, i) => i > 0 && char.IsUpper(c) ? "-" + char.ToLowerInvariant(c) : char.ToLowerInvariant(c).ToString()));
+    }
+
+    public static string Seed(SurveyPlan plan) => "seed " + plan.Design.Seed.ToString(CultureInfo.InvariantCulture);
+
+    /// <summary>The answer of the whole report.</summary>
+    public static string OfPlan(SurveyPlan plan)
+    {
+        var coverages = plan.Strata.Select(stratum => stratum.Coverage).OfType<StratumCoverage>().ToArray();
+        var sentence = Effort(plan) + $" survey {Figures.Three(plan.Region.AreaKm2)} km²";
+        if (coverages.Length == 0)
+        {
+            return sentence + ".";
+        }
+
+        var (min, max) = (coverages.Min(c => c.Min), coverages.Max(c => c.Max));
+        return min > 0
+            ? $"{sentence}; every place has a chance of being covered, between {Figures.Three(min)} and {Figures.Three(max)}."
+            : $"{sentence}, but some places can never be covered: no estimate from this survey speaks for them.";
+    }
+
+    /// <summary>What a region is.</summary>
+    public static string OfRegion(Region region)
+    {
+        var (parts, holes) = (region.Strata.Sum(stratum => stratum.Shape.PartCount), region.Strata.Sum(stratum => stratum.Shape.HoleCount));
+        return $"The region has {Figures.Three(region.AreaKm2)} km² in {Figures.Counted(region.Strata.Length, "stratum", "strata")}, "
+            + $"{Figures.Counted(parts, "part", "parts")} and {Figures.Counted(holes, "hole", "holes")}, round {Positions.Rough(region.Projection.Centre)}.";
+    }
+
+    /// <summary>What the map of transects shows.</summary>
+    public static string OfMap(SurveyPlan plan)
+    {
+        var strata = plan.Strata.Select(stratum =>
+            $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Word(stratum.Layout.Design.Kind)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
+        return $"{OfRegion(plan.Region)} {string.Join("; ", strata)}. The table of transects has their positions.";
+    }
+
+    /// <summary>How much coverage differs, by stratum.</summary>
+    public static string OfCoverageRange(IReadOnlyCollection<StratumCoverage> coverages) => string.Join(" ", coverages.Select(coverage =>
+        $"{(coverages.Count == 1 ? "Coverage" : coverage.Stratum + ": coverage")} averages {Figures.Three(coverage.Mean)} and runs from {Figures.Three(coverage.Min)} "
+        + $"to {Figures.Three(coverage.Max)}; its coefficient of variation over the area is {Figures.Percent(coverage.Cv)}."));
+
+    /// <summary>What the map of coverage shows.</summary>
+    public static string OfCoverage(IReadOnlyCollection<StratumCoverage> coverages, IReadOnlyList<CoverageClass> classes)
+    {
+        var even = classes.FirstOrDefault(one => one.Name == "0.9–1.1")?.Share ?? 0;
+        var never = classes.FirstOrDefault(one => one.Index == CoverageClasses.Never);
+        var lowest = coverages.MinBy(coverage => coverage.Nominal > 0 ? coverage.Min / coverage.Nominal : double.MaxValue)!;
+        var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + (lowest.Cells.IsEmpty ? "" : ", near " + Positions.Rough(lowest.Cells.MinBy(cell => cell.Best)!.Position));
+        return $"{Figures.Percent(even)} of the area has a coverage probability within 10 % of nominal. "
+            + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}{where}. "
+            + (never is null ? "No place is without coverage." : $"{Figures.Percent(never.Share)} of the area can never be covered (hatched).");
+    }
+
+    private static string Effort(SurveyPlan plan)
+    {
+        var lines = plan.Strata.Where(stratum => !stratum.Layout.Design.IsPoints).ToArray();
+        var points = plan.Strata.Where(stratum => stratum.Layout.Design.IsPoints).Sum(stratum => stratum.Layout.Transects.Length);
+        var texts = new List<string>();
+        if (lines.Length > 0)
+        {
+            var kilometres = lines.Sum(stratum => stratum.Layout.TotalLengthMetres) / 1000;
+            texts.Add($"{Figures.Counted(lines.Sum(stratum => stratum.Layout.Transects.Length), "line", "lines")} with {Figures.Three(kilometres)} km in all");
+        }
+
+        if (points > 0 || lines.Length == 0)
+        {
+            texts.Add(Figures.Counted(points, "point", "points"));
+        }
+
+        return string.Join(" and ", texts);
+    }
+
+    private static string Transects(Layout layout) => layout.Design.IsPoints
+        ? Figures.Counted(layout.Transects.Length, "point", "points")
+        : $"{Figures.Counted(layout.Transects.Length, "line", "lines")} of {Figures.Three(layout.TotalLengthMetres / 1000)} km in all";
+}

@@ -1,0 +1,30 @@
+using SurveyPlanner.Pages.Tests.Fixtures;
+
+namespace SurveyPlanner.Pages.Tests;
+
+/// <summary>Writes pages to a folder to be looked at; does nothing unless SURVEY_PLANNER_PICTURES names one.</summary>
+public class PictureBook
+{
+    [Fact]
+    public void Pages_of_real_regions_to_look_at()
+    {
+        if (Environment.GetEnvironmentVariable("SURVEY_PLANNER_PICTURES") is not { Length: > 0 } folder)
+        {
+            Assert.Skip("SURVEY_PLANNER_PICTURES names no folder");
+            return;
+        }
+
+        Directory.CreateDirectory(folder);
+        foreach (var (file, field, spacing) in ((string, string?, double)[])
+                 [
+                     ("marine_archipelago_sea", null, 10_000), ("strata_maine_counties", "name", 15_000), ("antimeridian_fiji", null, 20_000),
+                     ("polar_svalbard", null, 25_000), ("lake_caspian_with_islands", null, 40_000), ("island_iceland", null, 20_000),
+                 ])
+        {
+            var plan = SamplePlan.Of(SampleBoundary.Read(file), SamplePlan.Parallel(spacing), field);
+            File.WriteAllText(Path.Combine(folder, file + ".html"), ReportRenderer.Render(plan, SamplePlan.Context));
+            File.WriteAllText(Path.Combine(folder, file + ".svg"), MapRenderer.RenderSvg(plan, SamplePlan.Context));
+            File.WriteAllText(Path.Combine(folder, file + "-region.svg"), MapRenderer.RenderSvg(plan.Region, file));
+        }
+    }
+}

@@ -1,0 +1,150 @@
+using System.Globalization;
+using System.Security.Cryptography;
+using System.Text;
+using System.Text.RegularExpressions;
+using System.Xml;
+using SurveyPlanner.Pages.Tests.Fixtures;
+
+namespace SurveyPlanner.Pages.Tests;
+
+public partial class ReportTests
+{
+    // Everything that can go wrong in a name: markup, ends of CDATA and comments, control characters, half a surrogate pair, turned reading direction.
+    private const string Hostile = "<script>alert(1)</script>]]>--><img src=x onerror=y>\"'&\u0000\u0001\u0085\ud800\u202e\u2066;</style></title>{}";
+
+    [Fact]
+    public void Equal_plans_give_equal_bytes_whatever_the_culture()
+    {
+        var expected = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
+        var culture = (CultureInfo)CultureInfo.InvariantCulture.Clone();
+        culture.NumberFormat.NumberDecimalSeparator = ",";
+        culture.NumberFormat.NumberGroupSeparator = "'";
+        culture.NumberFormat.NegativeSign = "minus ";
+        var before = CultureInfo.CurrentCulture;
+        try
+        {
+            CultureInfo.CurrentCulture = culture;
+            Assert.Equal(expected, ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context));
+        }
+        finally
+        {
+            CultureInfo.CurrentCulture = before;
+        }
+    }
+
+    [Fact]
+    public void Text_of_unknown_origin_is_harmless_wherever_it_stands()
+    {
+        var context = new ReportContext(Hostile, Hostile, Hostile)
+        {
+            Inputs = [new InputFile(Hostile, Hostile)],
+            LayoutSha256 = Hostile,
+            RecordFileName = Hostile,
+        };
+        var plan = SamplePlan.Of(
+            SampleBoundary.Boxes((Hostile, 20, 60, 21, 61), (Hostile + "2", 21, 60, 22, 61)), SamplePlan.Parallel(20_000), stratumField: "name", name: Hostile);
+        plan = plan with { Region = plan.Region with { CoordinateSystem = Hostile }, Notices = [new Notice(NoticeKind.Warning, Hostile), new Notice(NoticeKind.Repair, Hostile)] };
+
+        var page = ReportRenderer.Render(plan, context);
+        Assert.DoesNotContain("<script", page, StringComparison.OrdinalIgnoreCase);
+        Assert.DoesNotContain("<img", page, StringComparison.OrdinalIgnoreCase);
+        Assert.Single(StyleElement().Matches(page));
+        Assert.Contains("&lt;script&gt;alert(1)&lt;/script&gt;]]&gt;--&gt;&lt;img", page, StringComparison.Ordinal);
+        Assert.DoesNotContain(page, c => char.IsControl(c) && c != '\n');
+        Assert.DoesNotContain(page, c => c is '\u202e' or '\u2066');
+        Assert.DoesNotMatch(ForbiddenReference(), page);
+
+        // An SVG file must also be XML: the parser refuses control characters and loose markup.
+        XmlDocument svg = new() { XmlResolver = null };
+        svg.LoadXml(MapRenderer.RenderSvg(plan, context));
+        Assert.Equal("svg", svg.DocumentElement!.LocalName);
+    }
+
+    [Fact]
+    public void The_page_needs_no_network_and_allows_nothing_but_its_own_style()
+    {
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
+        Assert.DoesNotContain("http://", page, StringComparison.Ordinal);
+        Assert.DoesNotContain("https://", page, StringComparison.Ordinal);
+        Assert.DoesNotContain(" src=", page, StringComparison.Ordinal);
+        Assert.DoesNotContain(" style=", page, StringComparison.Ordinal);
+        Assert.DoesNotMatch(OutsideUrl(), page);
+
+        // Content Security Policy Level 3: the hash is of the exact content of the element.
+        var style = StyleElement().Match(page).Groups[1].Value;
+        var hash = Convert.ToBase64String(SHA256.HashData(Encoding.UTF8.GetBytes(style))).Replace("+", "&#x2B;", StringComparison.Ordinal);
+        Assert.Contains($"default-src 'none'; style-src 'sha256-{hash}'", page.Replace("&#x27;", "'", StringComparison.Ordinal), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Every_picture_has_a_title_and_a_description_and_every_id_is_unique()
+    {
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
+        var ids = Id().Matches(page).Select(match => match.Groups[1].Value).ToArray();
+        Assert.Equal(ids.Length, ids.Distinct().Count());
+        Assert.Equal(2, Picture().Count(page));
+        foreach (Match match in Picture().Matches(page))
+        {
+            Assert.All(match.Groups[1].Value.Split(' '), id => Assert.Contains(id, ids));
+        }
+
+        Assert.All(InnerLink().Matches(page), match => Assert.Contains(match.Groups[1].Value, ids));
+    }
+
+    [Fact]
+    public void Every_heading_cell_says_what_it_heads()
+    {
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
+        var headings = HeadingCell().Matches(page);
+        Assert.NotEmpty(headings);
+        Assert.All(headings, match => Assert.Contains("scope=", match.Value, StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Every_transect_stands_in_the_table()
+    {
+        var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
+        Assert.All(
+            SamplePlan.Archipelago.Strata.SelectMany(stratum => stratum.Layout.Transects),
+            transect => Assert.Contains($"<th scope=\"row\" data-label=\"Id\">{transect.Id}</th>", page, StringComparison.Ordinal));
+    }
+
+    [Theory]
+    [InlineData("antimeridian_fiji", null)]
+    [InlineData("polar_svalbard", null)]
+    [InlineData("strata_maine_counties", "name")]
+    [InlineData("lake_caspian_with_islands", null)]
+    [InlineData("island_iceland", null)]
+    public void A_real_region_gives_a_map_that_is_xml_without_a_missing_number(string file, string? stratumField)
+    {
+        var plan = SamplePlan.Of(SampleBoundary.Read(file), SamplePlan.Parallel(20_000), stratumField, cells: 500);
+        foreach (var svg in (string[])[MapRenderer.RenderSvg(plan.Region, file), MapRenderer.RenderSvg(plan, SamplePlan.Context)])
+        {
+            new XmlDocument { XmlResolver = null }.LoadXml(svg);
+            Assert.DoesNotContain("NaN", svg, StringComparison.Ordinal);
+            Assert.DoesNotContain("∞", svg, StringComparison.Ordinal);
+            Assert.DoesNotContain("E+", svg, StringComparison.Ordinal);
+        }
+    }
+
+    [GeneratedRegex("<style>(.*?)</style>", RegexOptions.Singleline)]
+    private static partial Regex StyleElement();
+
+    [GeneratedRegex("&#x(0?[0-9A-F]|1[0-9A-F]|7F|[89][0-9A-F]|D[89A-F]..);")]
+    private static partial Regex ForbiddenReference();
+
+    [GeneratedRegex(@"url\((?!#)")]
+    private static partial Regex OutsideUrl();
+
+    [GeneratedRegex(" id=\"([^\"]*)\"")]
+    private static partial Regex Id();
+
+    [GeneratedRegex("<svg [^>]*role=\"img\" aria-labelledby=\"([^\"]*)\"")]
+    private static partial Regex Picture();
+
+    [GeneratedRegex("href=\"#([^\"]*)\"")]
+    private static partial Regex InnerLink();
+
+    [GeneratedRegex("<th[ >][^>]*>")]
+    private static partial Regex HeadingCell();
+}
