@@ -68,7 +68,7 @@ def sound():
 
 def sound_pilot(folder):
     """Eider-like flocks: 0.55 and 0.95 flocks/km, thinning out westward; dispersion about 2.2; sigma 140 m within 300 m; mean flock 4.5."""
-    pilot = Pilot(2027_01)
+    pilot = Pilot(51)
     for k in range(10):
         trend = 0.6 + 0.8 * k / 9
         length = round(pilot.between(5, 11), 1)
@@ -94,11 +94,11 @@ def hills():
 
 
 def hills_pilot(folder):
-    """Plover-like birds alone or in pairs counted as one: 0.85 a visit, dispersion about 1.4; sigma 70 m within 150 m; one to three visits."""
-    pilot = Pilot(2027_02)
+    """Plover-like birds alone or in pairs counted as one: 0.9 a visit, dispersion about 1.6; sigma 70 m within 150 m; one to three visits."""
+    pilot = Pilot(110)
     for k in range(32):
         visits = 1 + (k % 4 > 0) + (k % 4 == 2)
-        pilot.transect("", f"H{k + 1:02}", visits, 0.85 * visits, 1.4, lambda: pilot.point_distance(70, 150), None)
+        pilot.transect("", f"H{k + 1:02}", visits, 0.9 * visits, 1.6, lambda: pilot.point_distance(70, 150), None)
     pilot.write(folder, "visits", with_strata=False)
 
 
@@ -117,12 +117,12 @@ def shelf():
 
 
 def shelf_pilot(folder):
-    """Porpoise-like groups: 0.13 a km, fewer in the east; dispersion about 2; sigma 160 m within 400 m; mean group 1.6."""
-    pilot = Pilot(2027_03)
+    """Porpoise-like groups: 0.14 a km, fewer in the east; dispersion about 2.8; sigma 160 m within 400 m; mean group 1.6."""
+    pilot = Pilot(216)
     for k in range(12):
         trend = 1.35 - 0.7 * k / 11
         length = round(pilot.between(20, 38), 1)
-        pilot.transect("", f"Z{k + 1:02}", length, 0.13 * trend * length, 2.0, lambda: pilot.line_distance(160, 400), 1.6)
+        pilot.transect("", f"Z{k + 1:02}", length, 0.14 * trend * length, 2.8, lambda: pilot.line_distance(160, 400), 1.6)
     pilot.write(folder, "length_km", with_strata=False)
 
 
