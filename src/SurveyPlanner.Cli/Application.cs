@@ -1,7 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Help;
 using System.CommandLine.Invocation;
-using System.CommandLine.Parsing;
 using SurveyPlanner.Cli.Commands;
 
 namespace SurveyPlanner.Cli;
@@ -57,7 +56,6 @@ internal static class Application
             """);
         root.Options.OfType<HelpOption>().Single().Description = "Show help and usage";
         root.Options.OfType<VersionOption>().Single().Description = "Show the version";
-        root.Subcommands.Add(NewCommand.Build(terminal));
         root.Subcommands.Add(CheckCommand.Build(terminal));
         root.Subcommands.Add(PlanCommand.Build(terminal));
         root.Subcommands.Add(LayoutCommand.Build(terminal));

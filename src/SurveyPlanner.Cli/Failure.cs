@@ -25,7 +25,7 @@ internal sealed record Failure(int ExitCode, IReadOnlyList<Problem> Problems)
     {
         if (json)
         {
-            terminal.Out.WriteLine(JsonText.ToText(writer => failure.Write(writer)));
+            terminal.Out.WriteLine(JsonDocumentText.Of(writer => failure.Write(writer)));
         }
 
         foreach (var problem in failure.Problems)

@@ -1,5 +1,4 @@
 using System.CommandLine;
-using System.CommandLine.Parsing;
 using SurveyPlanner.Files.Plans;
 
 namespace SurveyPlanner.Cli;
@@ -11,7 +10,7 @@ internal static class Usage
     {
         var command = parsed.CommandResult.Command;
         var name = command is RootCommand ? "survey-planner" : $"survey-planner {command.Name}";
-        var unknown = parsed.UnmatchedTokens.FirstOrDefault(token => token.StartsWith('-')) ?? parsed.UnmatchedTokens.FirstOrDefault();
+        var unknown = parsed.UnmatchedTokens.OrderBy(token => token.StartsWith('-') ? 0 : 1).FirstOrDefault();
         if (unknown is not null)
         {
             return Unknown(unknown, command, name);

@@ -35,7 +35,7 @@ internal static class CheckCommand
             CommandFrame.Tell(terminal, plan.Notices, parsed.GetValue(options.Quiet));
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonText.ToText(json => SummaryWriter.WriteCheck(json, plan.Region, plan.Notices)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteCheck(json, plan.Region, plan.Notices)));
             }
             else
             {

@@ -8,12 +8,12 @@ internal static class CommandFrame
     /// <summary>Makes the command do its work off the main thread, so that Ctrl-C is answered at once.</summary>
     public static Command Runs(this Command command, CommonOptions options, Terminal terminal, Func<ParseResult, CancellationToken, int> work)
     {
-        command.SetAction((parsed, stop) => Task.Run(() => Guarded(parsed, options, terminal, stop, work), CancellationToken.None));
+        command.SetAction((parsed, stop) => Task.Run(() => Guarded(parsed, options, terminal, work, stop), CancellationToken.None));
         return command;
     }
 
     private static int Guarded(
-        ParseResult parsed, CommonOptions options, Terminal terminal, CancellationToken stop, Func<ParseResult, CancellationToken, int> work)
+        ParseResult parsed, CommonOptions options, Terminal terminal, Func<ParseResult, CancellationToken, int> work, CancellationToken stop)
     {
         try
         {

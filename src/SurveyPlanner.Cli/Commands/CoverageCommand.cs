@@ -42,7 +42,7 @@ internal static class CoverageCommand
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonText.ToText(json => SummaryWriter.WriteTo(json, plan, draw: null)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteTo(json, plan, draw: null)));
             }
             else
             {

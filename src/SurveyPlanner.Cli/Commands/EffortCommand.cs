@@ -31,7 +31,7 @@ internal static class EffortCommand
             CommandFrame.Tell(terminal, region.Notices, parsed.GetValue(options.Quiet));
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonText.ToText(json => SummaryWriter.WriteEffortDocument(json, effort)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => json.WriteNullValue()));
             }
             else
             {

@@ -43,7 +43,7 @@ internal static class LayoutCommand
             CommandFrame.Tell(terminal, plan.Notices, parsed.GetValue(options.Quiet));
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonText.ToText(json => SummaryWriter.WriteTo(json, plan, draws.Number.Number)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteTo(json, plan, draws.Number.Number)));
             }
             else
             {

@@ -1,8 +1,6 @@
-using System.Collections.Immutable;
 using System.CommandLine;
 using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
-using SurveyPlanner.Files.Records;
 
 namespace SurveyPlanner.Cli.Commands;
 
@@ -42,7 +40,7 @@ internal static class PlanCommand
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonText.ToText(json => SummaryWriter.WriteTo(json, plan, draws.Number.Number)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteTo(json, plan, draws.Number.Number)));
             }
             else
             {

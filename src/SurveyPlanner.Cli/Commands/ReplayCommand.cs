@@ -60,7 +60,7 @@ internal static class ReplayCommand
     {
         if (json)
         {
-            terminal.Out.WriteLine(JsonText.ToText(writer =>
+            terminal.Out.WriteLine(JsonDocumentText.Of(writer =>
             {
                 writer.WriteStartObject();
                 writer.WriteNumber("format_version", SummaryWriter.FormatVersion);

@@ -1,7 +1,7 @@
 namespace SurveyPlanner.Files.Plans;
 
 /// <summary>The nearest right spelling of a word that is none.</summary>
-internal static class Spelling
+public static class Spelling
 {
     /// <summary>The candidate that was probably meant, or null when none is near.</summary>
     public static string? Nearest(string word, IEnumerable<string> candidates)

@@ -21,6 +21,9 @@ public sealed record Region(
     string CoordinateSystem,
     ImmutableArray<Notice> Notices)
 {
+    /// <summary>Bounding box in degrees.</summary>
+    public GeographicExtent Extent => GeographicExtent.Of(Strata.Select(stratum => stratum.Shape), Projection);
+
     /// <summary>Area of all strata in the plane, square kilometres.</summary>
     public double AreaKm2 => Strata.Sum(stratum => stratum.AreaKm2);
 
