@@ -101,12 +101,12 @@ internal static class PlanText
         var parts = new List<string>();
         if (lines > 0 || points == 0)
         {
-            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{lines} transects, {km:#,0.#} km"));
+            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{lines} {(lines == 1 ? "transect" : "transects")}, {km:#,0.#} km"));
         }
 
         if (points > 0)
         {
-            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{points} points"));
+            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{points} {(points == 1 ? "point" : "points")}"));
         }
 
         return string.Join(" and ", parts);

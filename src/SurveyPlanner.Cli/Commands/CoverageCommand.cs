@@ -1,5 +1,4 @@
 using System.CommandLine;
-using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli.Commands;
@@ -24,20 +23,13 @@ internal static class CoverageCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var force = parsed.GetValue(options.Force);
+            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
             var quiet = parsed.GetValue(options.Quiet);
-            if (folder is not null)
-            {
-                OutputFolder.Check(folder, force);
-            }
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             var progress = quiet ? null : terminal.Progress("simulating");
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, new RunOptions(options.ThreadsOf(parsed), progress, stop));
-            if (folder is not null)
-            {
-                OutputFolder.Write(folder, [CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)], force, stop);
-            }
+            target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)], stop);
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))

@@ -1,5 +1,4 @@
 using System.CommandLine;
-using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli.Commands;
@@ -24,20 +23,13 @@ internal static class LayoutCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var force = parsed.GetValue(options.Force);
-            if (folder is not null)
-            {
-                OutputFolder.Check(folder, force);
-            }
+            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             CommandFrame.TellSeed(terminal, loaded);
             var plan = PlanSurvey.DrawOnly(loaded.Design, loaded.Inputs);
             using var draws = DrawnPlan.Count(plan, loaded);
-            if (folder is not null)
-            {
-                OutputFolder.Write(folder, DrawnPlan.Files(plan, loaded, draws.Number, folder, withReport: false), force, stop);
-            }
+            target?.Write(DrawnPlan.Files(plan, loaded, draws.Number, folder!, withReport: false), stop);
 
             draws.Keep();
             CommandFrame.Tell(terminal, plan.Notices, parsed.GetValue(options.Quiet));

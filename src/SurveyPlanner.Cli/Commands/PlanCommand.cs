@@ -1,5 +1,4 @@
 using System.CommandLine;
-using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli.Commands;
@@ -25,16 +24,15 @@ internal static class PlanCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetRequiredValue(options.Out)!;
-            var force = parsed.GetValue(options.Force);
+            var target = new OutputTarget(folder, parsed.GetValue(options.Force));
             var quiet = parsed.GetValue(options.Quiet);
-            OutputFolder.Check(folder, force);
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             CommandFrame.TellSeed(terminal, loaded);
             var progress = quiet ? null : terminal.Progress("simulating");
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, new RunOptions(options.ThreadsOf(parsed), progress, stop));
             using var draws = DrawnPlan.Count(plan, loaded);
             var files = DrawnPlan.Files(plan, loaded, draws.Number, folder, withReport: true);
-            OutputFolder.Write(folder, files, force, stop);
+            target.Write(files, stop);
             draws.Keep();
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);

@@ -1,5 +1,4 @@
 using System.CommandLine;
-using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 using SurveyPlanner.Files.Records;
 
@@ -28,11 +27,7 @@ internal static class ReplayCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var force = parsed.GetValue(options.Force);
-            if (folder is not null)
-            {
-                OutputFolder.Check(folder, force);
-            }
+            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
 
             var file = parsed.GetValue(record)!;
             var recorded = RecordReader.Read(file);
@@ -42,10 +37,7 @@ internal static class ReplayCommand
             var withReport = recorded.Outputs.Any(output => output.Name == OutputNames.Report);
             var files = DrawnPlan.Files(plan, loaded, draw, folder ?? Path.GetDirectoryName(Path.GetFullPath(file))!, withReport);
             var result = Replay.Compare(recorded, plan, files);
-            if (folder is not null)
-            {
-                OutputFolder.Write(folder, files, force, stop);
-            }
+            target?.Write(files, stop);
 
             return Say(result, recorded, terminal, parsed.GetValue(options.Json));
         });
