@@ -39,17 +39,15 @@ public static class SummaryWriter
         json.WriteEndObject();
     }
 
-    /// <summary>What <c>effort --json</c> prints: survey, region, strata with their effort, and the effort as a whole, in the same form.</summary>
-    public static void WriteEffort(Utf8JsonWriter json, SurveyDesign design, Region region, EffortPlan effort)
+    /// <summary>What <c>effort --json</c> prints: the effort of each stratum and as a whole, in the same form.</summary>
+    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort)
     {
         json.WriteStartObject();
         json.WriteNumber("format_version", FormatVersion);
-        json.Object("survey", () => WriteSurvey(json, design, draw: null));
-        json.Object("region", () => WriteRegion(json, region));
-        json.Array("strata", region.Strata, stratum =>
+        json.Array("strata", effort.Strata, stratum =>
         {
             json.WriteStartObject();
-            WriteArea(json, stratum);
+            json.Text("name", stratum.Name);
             WriteEffort(json, stratum.Name, effort);
             json.WriteEndObject();
         });
@@ -139,7 +137,7 @@ public static class SummaryWriter
 
     private static void WriteLayout(Utf8JsonWriter json, Layout layout)
     {
-        json.WriteString("kind", Words.Kebab(layout.Design.Kind));
+        json.WriteString("kind", LayoutKindNames.Of(layout.Design.Kind));
         json.Figure("bearing_deg", Figures.Bearing(layout.BearingDegrees, fullTurn: 180));
         json.Figure("spacing_m", Figures.Metres(layout.SpacingMetres));
         json.Figure("half_width_m", Figures.Metres(layout.Design.HalfWidthMetres));

@@ -92,18 +92,17 @@ public sealed class SummaryWriterTests
     [Fact]
     public void Effort_alone_has_the_same_form()
     {
-        var plan = WithEffort();
-        using var document = ParseWritten(json => SummaryWriter.WriteEffort(json, plan.Design, plan.Region, plan.Effort!));
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, WithEffort().Effort!)));
 
-        Assert.Equal(["format_version", "survey", "region", "strata", "effort"], Keys(document.RootElement));
-        Assert.Equal(["name", "area_km2", "geodesic_area_km2", "effort"], Keys(document.RootElement.GetProperty("strata")[0]));
+        Assert.Equal(["format_version", "strata", "effort"], Keys(document.RootElement));
+        Assert.Equal(["name", "effort"], Keys(document.RootElement.GetProperty("strata")[0]));
     }
 
     [Fact]
     public void A_check_has_the_same_form_with_repairs_and_warnings()
     {
         var plan = TestPlans.TwoStrata();
-        using var document = ParseWritten(json => SummaryWriter.WriteCheck(json, plan.Region, plan.Notices));
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteCheck(json, plan.Region, plan.Notices)));
         var root = document.RootElement;
         Assert.Equal(["format_version", "projection", "region", "strata", "repairs", "warnings"], Keys(root));
         Assert.Equal("A ring was closed.", root.GetProperty("repairs")[0].GetString());
@@ -128,17 +127,6 @@ public sealed class SummaryWriterTests
         var strata = plan.Strata.Select(stratum =>
             new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
         return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata]) };
-    }
-
-    private static JsonDocument ParseWritten(Action<Utf8JsonWriter> write)
-    {
-        using var stream = new MemoryStream();
-        using (var json = new Utf8JsonWriter(stream))
-        {
-            write(json);
-        }
-
-        return JsonDocument.Parse(stream.ToArray());
     }
 
     private static IEnumerable<string> Keys(JsonElement element) => element.EnumerateObject().Select(member => member.Name);
