@@ -28,6 +28,7 @@ internal static class DiskTrouble
         var reason = trouble switch
         {
             UnauthorizedAccessException => "there is no permission to write there; choose a folder of your own",
+            DirectoryNotFoundException => "the folder it should be in does not exist; make it first",
             { HResult: NoSpace or WindowsDiskFull } => "the disk is full; make room or choose another disk",
             { HResult: OverQuotaLinux or OverQuotaMac } => "your share of the disk is used up; make room or choose another disk",
             { HResult: FileTooBig } => "the system does not allow a file of that size",

@@ -7,6 +7,8 @@ internal sealed record PlannedTransect(StratumPlan Stratum, Transect Transect)
 {
     public string StratumName => Stratum.Stratum.Name;
 
+    public double HalfWidthMetres => Stratum.Layout.Design.HalfWidthMetres;
+
     /// <summary>All transects of the survey in order of visit.</summary>
     public static IReadOnlyList<PlannedTransect> InOrder(SurveyPlan plan) =>
     [

@@ -12,17 +12,20 @@ internal static class RoutePoints
     /// <summary>Most points that receivers hold in a route.</summary>
     public const int MaxCount = 250;
 
-    /// <summary>How far from the path the course may run, metres: about the error of a handheld receiver under trees (common practice, no source).</summary>
-    private const double ToleranceMetres = 10;
+    /// <summary>How far from the path the course may run, in half-widths: less than anyone steers (common practice, no source).</summary>
+    private const double TolerancePerHalfWidth = 0.05;
+
+    /// <summary>The least of it, metres: less than a receiver errs.</summary>
+    private const double LeastToleranceMetres = 1;
 
     /// <summary>Mean radius of the Earth, metres (IUGG R1, from memory): a sphere is near enough for a tolerance.</summary>
     private const double EarthRadiusMetres = 6_371_009;
 
     /// <summary>At least two points, at most <see cref="MaxCount"/>; beyond that the tolerance is doubled until they suffice.</summary>
-    public static ImmutableArray<LonLat> Of(ImmutableArray<LonLat> path)
+    public static ImmutableArray<LonLat> Of(ImmutableArray<LonLat> path, double halfWidthMetres)
     {
         var unit = path.Select(Unit).ToArray();
-        var tolerance = ToleranceMetres / EarthRadiusMetres;
+        var tolerance = Math.Max(LeastToleranceMetres, TolerancePerHalfWidth * halfWidthMetres) / EarthRadiusMetres;
         while (true)
         {
             var kept = Keep(unit, tolerance);

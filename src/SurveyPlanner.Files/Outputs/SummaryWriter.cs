@@ -1,5 +1,6 @@
 using System.Text.Json;
 using SurveyPlanner.Coverage;
+using SurveyPlanner.Effort;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
 
@@ -29,7 +30,28 @@ public static class SummaryWriter
         json.Object("survey", () => WriteSurvey(json, plan.Design, draw));
         json.Object("projection", () => WriteProjection(json, plan.Region));
         json.Object("region", () => WriteRegion(json, plan.Region));
-        json.Array("strata", plan.Strata, stratum => WriteStratum(json, stratum));
+        json.Array("strata", plan.Strata, stratum => WriteStratum(json, stratum, plan.Effort));
+        if (plan.Effort is { } effort)
+        {
+            json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(plan.Delivered));
+        }
+
+        json.WriteEndObject();
+    }
+
+    /// <summary>What <c>effort --json</c> prints: the effort of each stratum and as a whole, in the same form.</summary>
+    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort)
+    {
+        json.WriteStartObject();
+        json.WriteNumber("format_version", FormatVersion);
+        json.Array("strata", effort.Strata, stratum =>
+        {
+            json.WriteStartObject();
+            json.Text("name", stratum.Name);
+            WriteEffort(json, stratum.Name, effort);
+            json.WriteEndObject();
+        });
+        json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(delivered: null));
         json.WriteEndObject();
     }
 
@@ -91,7 +113,15 @@ public static class SummaryWriter
         json.Figure("geodesic_area_km2", Figures.Area(stratum.GeodesicAreaKm2));
     }
 
-    private static void WriteStratum(Utf8JsonWriter json, StratumPlan stratum)
+    private static void WriteEffort(Utf8JsonWriter json, string stratum, EffortPlan? effort)
+    {
+        if (effort?.Strata.FirstOrDefault(one => one.Name == stratum) is { } own)
+        {
+            json.Object("effort", () => new EffortSummary(json, effort).WriteStratum(own));
+        }
+    }
+
+    private static void WriteStratum(Utf8JsonWriter json, StratumPlan stratum, EffortPlan? effort)
     {
         json.WriteStartObject();
         WriteArea(json, stratum.Stratum);
@@ -101,27 +131,41 @@ public static class SummaryWriter
             json.Object("coverage", () => WriteCoverage(json, coverage));
         }
 
+        WriteEffort(json, stratum.Stratum.Name, effort);
         json.WriteEndObject();
     }
 
     private static void WriteLayout(Utf8JsonWriter json, Layout layout)
     {
-        json.WriteString("kind", KindWord(layout.Design.Kind));
+        json.WriteString("kind", LayoutKindNames.Of(layout.Design.Kind));
         json.Figure("bearing_deg", Figures.Bearing(layout.BearingDegrees, fullTurn: 180));
         json.Figure("spacing_m", Figures.Metres(layout.SpacingMetres));
         json.Figure("half_width_m", Figures.Metres(layout.Design.HalfWidthMetres));
         if (layout.Design.IsPoints)
         {
             json.WriteNumber("points", layout.Transects.Length);
+            json.Figure("expected_points", Figures.Significant(layout.ExpectedCount, Digits));
+            json.Object("points_over_draws", () => WriteSpread(json, layout.Spread, count => Figures.Significant(count, Digits)));
             return;
         }
 
         json.WriteNumber("transects", layout.Transects.Length);
+        json.Figure("expected_transects", Figures.Significant(layout.ExpectedCount, Digits));
         json.Figure("total_length_km", Figures.KilometresOf(layout.TotalLengthMetres));
         if (layout.ExpectedLengthMetres is { } expected)
         {
             json.Figure("expected_length_km", Figures.KilometresOf(expected));
         }
+
+        json.Object("length_km_over_draws", () => WriteSpread(json, layout.Spread, Figures.KilometresOf));
+    }
+
+    private static void WriteSpread(Utf8JsonWriter json, EffortSpread spread, Func<double, string> figure)
+    {
+        json.Figure("mean", figure(spread.Mean));
+        json.Figure("standard_deviation", figure(spread.StandardDeviation));
+        json.Figure("smallest", figure(spread.Smallest));
+        json.Figure("largest", figure(spread.Largest));
     }
 
     private static void WriteCoverage(Utf8JsonWriter json, StratumCoverage coverage)
@@ -137,7 +181,4 @@ public static class SummaryWriter
             json.Figure("max_abs_z", Figures.Significant(z, Digits));
         }
     }
-
-    /// <summary>The plan file's word for a kind: its name in lower case with hyphens.</summary>
-    private static string KindWord(LayoutKind kind) => JsonNamingPolicy.KebabCaseLower.ConvertName(kind.ToString());
 }

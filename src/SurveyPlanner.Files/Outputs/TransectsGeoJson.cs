@@ -1,7 +1,6 @@
 using System.Buffers;
 using System.Collections.Immutable;
 using System.Text.Json;
-using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Files.Outputs;
@@ -24,7 +23,7 @@ public static class TransectsGeoJson
     {
         var coverage = withCoverage ? CoverageAlong.Of(plan) : CoverageAlong.None;
         var transects = PlannedTransect.InOrder(plan);
-        var shapes = transects.Select(planned => Parts(planned.Transect)).ToList();
+        var shapes = transects.Select(planned => Parts(planned, plan.Region.Projection)).ToList();
         var buffer = new ArrayBufferWriter<byte>();
         buffer.Write("{\"type\":\"FeatureCollection\","u8);
         if (BoundingBox.Round(shapes.SelectMany(parts => parts.Select(part => (IReadOnlyList<LonLat>)part))) is { } box)
@@ -45,8 +44,8 @@ public static class TransectsGeoJson
         return buffer.WrittenMemory;
     }
 
-    private static ImmutableArray<ImmutableArray<LonLat>> Parts(Transect transect) =>
-        [.. transect.Pieces.SelectMany(piece => AntimeridianCut.Cut(piece.Positions))];
+    private static ImmutableArray<ImmutableArray<LonLat>> Parts(PlannedTransect planned, EqualAreaProjection projection) =>
+        [.. planned.Transect.Pieces.SelectMany(piece => AntimeridianCut.Cut(LonLatPath.Of(piece, projection, planned.HalfWidthMetres)))];
 
     private static void WriteFeature(
         Utf8JsonWriter json, PlannedTransect planned, ImmutableArray<ImmutableArray<LonLat>> parts, CoverageAlong coverage)

@@ -58,7 +58,7 @@ public static class TransectsGpx
             xml.WriteStartElement("rte", Namespace);
             Element(xml, "name", stretch.Name);
             Element(xml, "cmt", stretch.Description);
-            foreach (var position in RoutePoints.Of(stretch.Piece.Positions))
+            foreach (var position in RoutePoints.Of(stretch.Piece.Positions, stretch.Planned.HalfWidthMetres))
             {
                 StartPosition(xml, "rtept", position);
                 xml.WriteEndElement();
@@ -78,7 +78,7 @@ public static class TransectsGpx
             foreach (var piece in planned.Transect.Pieces)
             {
                 xml.WriteStartElement("trkseg", Namespace);
-                foreach (var position in piece.Positions)
+                foreach (var position in LonLatPath.Of(piece, plan.Region.Projection, planned.HalfWidthMetres))
                 {
                     StartPosition(xml, "trkpt", position);
                     xml.WriteEndElement();

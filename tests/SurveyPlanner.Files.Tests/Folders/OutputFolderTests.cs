@@ -1,4 +1,3 @@
-using System.Text;
 using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 
@@ -260,11 +259,7 @@ public sealed class OutputFolderTests : IDisposable
         Assert.Contains(expected, sentence, StringComparison.Ordinal);
     }
 
-    private static OutputFile[] Files(string content) =>
-    [
-        .. new[] { OutputNames.Summary, OutputNames.Waypoints, OutputNames.TransectsGpx }
-            .Select(name => new OutputFile(name, Encoding.UTF8.GetBytes(content))),
-    ];
+    private static OutputFile[] Files(string content) => EndlessWriter.Files(content);
 
     private string Content() => File.ReadAllText(Path.Combine(Target, "summary.json"));
 

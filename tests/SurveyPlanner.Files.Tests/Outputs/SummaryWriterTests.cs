@@ -1,5 +1,7 @@
 using System.Text.Json;
+using SurveyPlanner.Effort;
 using SurveyPlanner.Files.Outputs;
+using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Files.Tests.Outputs;
 
@@ -16,11 +18,14 @@ public sealed class SummaryWriterTests
         Assert.Equal(["method", "wkt", "max_scale_error_percent"], Keys(root.GetProperty("projection")));
         Assert.Equal(["area_km2", "geodesic_area_km2"], Keys(root.GetProperty("region")));
         Assert.Equal(
-            ["name", "area_km2", "geodesic_area_km2", "kind", "bearing_deg", "spacing_m", "half_width_m", "transects", "total_length_km", "expected_length_km", "coverage"],
+            [
+                "name", "area_km2", "geodesic_area_km2", "kind", "bearing_deg", "spacing_m", "half_width_m",
+                "transects", "expected_transects", "total_length_km", "expected_length_km", "length_km_over_draws", "coverage",
+            ],
             Keys(root.GetProperty("strata")[0]));
         Assert.Equal(["nominal", "mean", "min", "max", "cv", "simulated_mean"], Keys(root.GetProperty("strata")[0].GetProperty("coverage")));
         Assert.Equal(
-            ["name", "area_km2", "geodesic_area_km2", "kind", "bearing_deg", "spacing_m", "half_width_m", "points"],
+            ["name", "area_km2", "geodesic_area_km2", "kind", "bearing_deg", "spacing_m", "half_width_m", "points", "expected_points", "points_over_draws"],
             Keys(root.GetProperty("strata")[1]));
     }
 
@@ -49,16 +54,55 @@ public sealed class SummaryWriterTests
     }
 
     [Fact]
+    public void Effort_has_its_figures_with_units_and_leaves_out_what_does_not_apply()
+    {
+        using var document = JsonDocument.Parse(SummaryWriter.Write(WithEffort(), draw: 1).Content);
+        var effort = document.RootElement.GetProperty("effort");
+
+        Assert.Equal(
+            ["encounter_rate_per_km", "variance_estimator", "variance_estimator_reason", "b", "pilot", "required", "delivered", "advice"],
+            Keys(effort));
+        Assert.Equal("random-lines", effort.GetProperty("variance_estimator").GetString());
+        Assert.Equal("pilot", effort.GetProperty("b").GetProperty("origin").GetString());
+        Assert.Equal(["target_cv", "length_km", "expected_detections", "cv", "degrees_of_freedom", "interval_factor_95", "components"], Keys(effort.GetProperty("required")));
+        Assert.Equal("encounter-rate", effort.GetProperty("required").GetProperty("components")[0].GetProperty("source").GetString());
+        Assert.Equal(
+            ["transects", "length_km", "detections", "encounter_rate_per_km", "variance", "cv", "degrees_of_freedom", "dispersion", "density"],
+            Keys(effort.GetProperty("pilot")));
+        Assert.Equal(
+            ["encounter_rate_per_km", "share", "length_km", "expected_detections", "cv", "length_km_for_own_target"],
+            Keys(document.RootElement.GetProperty("strata")[0].GetProperty("effort")));
+        Assert.False(document.RootElement.GetProperty("strata")[1].TryGetProperty("effort", out _));
+    }
+
+    [Fact]
+    public void Effort_figures_are_those_of_the_plan()
+    {
+        var plan = WithEffort();
+        using var document = JsonDocument.Parse(SummaryWriter.Write(plan, draw: 1).Content);
+        var effort = document.RootElement.GetProperty("effort");
+
+        // Counts 4, 6, 8 on 2 km each: 18 detections on 6 km.
+        Assert.Equal(3, effort.GetProperty("encounter_rate_per_km").GetDouble(), 1e-8);
+        Assert.Equal(plan.Effort!.Required!.Effort, effort.GetProperty("required").GetProperty("length_km").GetDouble(), plan.Effort.Required.Effort * 1e-8);
+        Assert.Equal(66.86837, effort.GetProperty("delivered").GetProperty("length_km").GetDouble(), 1e-6);
+        Assert.Equal(plan.Delivered!.Cv, effort.GetProperty("delivered").GetProperty("cv").GetDouble(), 1e-8);
+    }
+
+    [Fact]
+    public void Effort_alone_has_the_same_form()
+    {
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, WithEffort().Effort!)));
+
+        Assert.Equal(["format_version", "strata", "effort"], Keys(document.RootElement));
+        Assert.Equal(["name", "effort"], Keys(document.RootElement.GetProperty("strata")[0]));
+    }
+
+    [Fact]
     public void A_check_has_the_same_form_with_repairs_and_warnings()
     {
         var plan = TestPlans.TwoStrata();
-        using var stream = new MemoryStream();
-        using (var json = new Utf8JsonWriter(stream))
-        {
-            SummaryWriter.WriteCheck(json, plan.Region, plan.Notices);
-        }
-
-        using var document = JsonDocument.Parse(stream.ToArray());
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteCheck(json, plan.Region, plan.Notices)));
         var root = document.RootElement;
         Assert.Equal(["format_version", "projection", "region", "strata", "repairs", "warnings"], Keys(root));
         Assert.Equal("A ring was closed.", root.GetProperty("repairs")[0].GetString());
@@ -73,6 +117,16 @@ public sealed class SummaryWriterTests
         Assert.Equal(["transects.geojson", "transects.gpx", "waypoints.csv", "coverage.csv", "summary.json"], files.Select(file => file.Name));
         Assert.All(files, file => Assert.Contains(file.Name, OutputNames.All));
         Assert.Equal(files.Select(file => file.Sha256), SurveyFiles.Of(TestPlans.TwoStrata(), draw: 1).Select(file => file.Sha256));
+    }
+
+    /// <summary>A pilot of three lines over the strata with lines, and a target of 20 %.</summary>
+    private static SurveyPlan WithEffort()
+    {
+        var plan = TestPlans.TwoStrata();
+        var pilot = new PilotTable(false, [new("", "1", 2, 4), new("", "2", 2, 6), new("", "3", 2, 8)], []);
+        var strata = plan.Strata.Select(stratum =>
+            new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
+        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata]) };
     }
 
     private static IEnumerable<string> Keys(JsonElement element) => element.EnumerateObject().Select(member => member.Name);

@@ -79,15 +79,15 @@ public sealed class TransectsGeoJsonTests
     [Fact]
     public void A_line_across_180_becomes_a_multi_line_and_the_box_reaches_over_it()
     {
-        var plan = TestPlans.OneStratum(new LonLat(180, -18), TestPlans.Line("F1", 1, 90, TestPlans.Path(179.5, -18, -179.5, -17)));
+        var plan = TestPlans.OneStratum(new LonLat(180, -18), TestPlans.Line("F1", 1, 90, TestPlans.Path(179.99, -18, -179.99, -17.999)));
 
         using var document = Parse(plan);
 
         var root = document.RootElement;
-        Assert.Equal("[179.5,-18,-179.5,-17]", root.GetProperty("bbox").GetRawText());
+        Assert.Equal("[179.99,-18,-179.99,-17.999]", root.GetProperty("bbox").GetRawText());
         var geometry = root.GetProperty("features")[0].GetProperty("geometry");
         Assert.Equal("MultiLineString", geometry.GetProperty("type").GetString());
-        Assert.Equal("[[[179.5,-18],[180,-17.5]],[[-180,-17.5],[-179.5,-17]]]", geometry.GetProperty("coordinates").GetRawText());
+        Assert.Equal("[[[179.99,-18],[180,-17.9995]],[[-180,-17.9995],[-179.99,-17.999]]]", geometry.GetProperty("coordinates").GetRawText());
     }
 
     [Fact]

@@ -85,7 +85,7 @@ public sealed class TransectsGpxTests
         // From 20°E to 30°E along 60°N the great circle runs 7.6 km north of the parallel (second method below: its sagitta on the sphere).
         ImmutableArray<LonLat> path = [.. Enumerable.Range(0, 1001).Select(i => new LonLat(20 + (i * 0.01), 60))];
 
-        var route = RoutePoints.Of(path);
+        var route = RoutePoints.Of(path, halfWidthMetres: 200);
 
         Assert.InRange(route.Length, 20, RoutePoints.MaxCount);
         Assert.Equal((path[0], path[^1]), (route[0], route[^1]));
@@ -103,7 +103,7 @@ public sealed class TransectsGpxTests
         // A saw of 1,000 teeth of about 1 km: every vertex matters.
         ImmutableArray<LonLat> saw = [.. Enumerable.Range(0, 1000).Select(i => new LonLat(i * 0.01, i % 2 * 0.01))];
 
-        Assert.InRange(RoutePoints.Of(saw).Length, 2, 250);
+        Assert.InRange(RoutePoints.Of(saw, halfWidthMetres: 20).Length, 2, 250);
         Assert.Empty(SchemaTrouble(TestPlans.OneStratum(new LonLat(5, 0), TestPlans.Line("SAW", 1, 90, saw))));
     }
 
