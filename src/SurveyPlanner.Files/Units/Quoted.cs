@@ -16,17 +16,19 @@ internal static class Quoted
     public static string Text(string text)
     {
         var quoted = new StringBuilder(text.Length + 2).Append('"');
-        foreach (var character in text)
+
+        // Half a surrogate pair, which no text file can hold, comes out of the enumeration as U+FFFD.
+        foreach (var rune in text.EnumerateRunes())
         {
-            quoted.Append(character switch
+            quoted.Append(rune.Value switch
             {
                 '"' => "\\\"",
                 '\\' => @"\\",
                 '\n' => "\\n",
                 '\r' => "\\r",
                 '\t' => "\\t",
-                _ when IsInvisible(character) => "\\u" + ((int)character).ToString("X4", CultureInfo.InvariantCulture),
-                _ => character.ToString(),
+                _ when IsInvisible(rune) => "\\u" + rune.Value.ToString("X4", CultureInfo.InvariantCulture),
+                _ => rune.ToString(),
             });
         }
 
@@ -34,8 +36,8 @@ internal static class Quoted
     }
 
     /// <summary>Control characters, and the marks that turn the direction of writing: either could disguise a message.</summary>
-    private static bool IsInvisible(char character)
-        => char.IsControl(character) || character is '\u2028' or '\u2029' or (>= '\u202A' and <= '\u202E') or (>= '\u2066' and <= '\u2069');
+    private static bool IsInvisible(Rune rune)
+        => Rune.IsControl(rune) || rune.Value is 0x2028 or 0x2029 or (>= 0x202A and <= 0x202E) or (>= 0x2066 and <= 0x2069);
 
     private static int WholeCharacters(string text, int length) => char.IsHighSurrogate(text[length - 1]) ? length - 1 : length;
 }
