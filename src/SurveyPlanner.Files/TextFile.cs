@@ -1,4 +1,5 @@
 using System.Text;
+using SurveyPlanner.Files.Boundaries;
 
 namespace SurveyPlanner.Files;
 
@@ -47,8 +48,8 @@ internal static class TextFile
         }
         catch (DecoderFallbackException exception)
         {
-            var line = 1 + bytes.Take(exception.Index).Count(b => b == (byte)'\n');
-            throw new InputException(new Problem("holds a character that is not UTF-8: save the file as UTF-8", path, line, 1));
+            var (line, column) = FileBytes.LineAndColumn(bytes, exception.Index);
+            throw new InputException(new Problem("holds a character that is not UTF-8: save the file as UTF-8", path, line, column));
         }
     }
 }

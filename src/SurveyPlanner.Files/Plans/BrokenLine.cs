@@ -34,14 +34,15 @@ internal static partial class BrokenLine
         }
 
         var (key, mark, value) = (match.Groups["key"].Value, match.Groups["mark"].Value, match.Groups["value"].Value);
+        var shown = Quoted.Plain(key);
         if (mark != "=")
         {
-            return ($"write {key} = …: a key and its value are joined by one =", $"{key} = {value}");
+            return ($"write {shown} = …: a key and its value are joined by one =", $"{key} = {value}");
         }
 
         var (complaint, mended) = value.Length == 0
-            ? ($"{key} has no value", "")
-            : value[0] is '"' or '\'' or '[' or '{' ? ExplainDelimited(key, value) : ExplainBare(key, value);
+            ? ($"{shown} has no value", "")
+            : value[0] is '"' or '\'' or '[' or '{' ? ExplainDelimited(shown, value) : ExplainBare(shown, value);
         return (complaint, mended.Length == 0 ? line : $"{key} = {mended}");
     }
 
@@ -55,11 +56,11 @@ internal static partial class BrokenLine
         {
             var stratum = name["stratum.".Length..].Trim('"', '\'', ' ');
             var header = $"[stratum.{Quoted.Text(stratum)}]";
-            return ($"write {header}: the name of a stratum stands in quotes", header);
+            return ($"write {Quoted.Plain(header)}: the name of a stratum stands in quotes", header);
         }
 
         return KeyPath.IsBare(name)
-            ? ($"write [{name}], one bracket on each side, alone on its line", $"[{name}]")
+            ? ($"write [{Quoted.Plain(name)}], one bracket on each side, alone on its line", $"[{name}]")
             : ("this table name cannot be read: write it as [layout] or [stratum.\"name\"]", line);
     }
 
@@ -81,7 +82,7 @@ internal static partial class BrokenLine
         }
 
         return quote == '"' && value.Contains('\\', StringComparison.Ordinal)
-            ? ($@"a backslash between double quotes means something else: write {key} = '{value[1..end]}' in single quotes, or / instead of \", $"'{value[1..end]}'")
+            ? ($@"a backslash between double quotes means something else: write {key} = '{Quoted.Plain(value[1..end])}' in single quotes, or / instead of \", $"'{value[1..end]}'")
             : ($"something stands after the closing {quote} of {key}: take it out, or put it behind a #", value[..(end + 1)]);
     }
 
@@ -123,7 +124,7 @@ internal static partial class BrokenLine
             : ($"the value of {key} cannot be read: text stands between quotes, a number stands alone", "");
     }
 
-    private static (string Complaint, string Mended) Write(string key, string mended, string why) => ($"write {key} = {mended}: {why}", mended);
+    private static (string Complaint, string Mended) Write(string key, string mended, string why) => ($"write {key} = {Quoted.Plain(mended)}: {why}", mended);
 
     [GeneratedRegex(@"^\s*(?<key>[^=:\s""'](?:[^=:]*[^=:\s])?)\s*(?<mark>=+|:=?)\s*(?<value>.*?)\s*$")]
     private static partial Regex KeyAndValue();

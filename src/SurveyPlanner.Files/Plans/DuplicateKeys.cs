@@ -1,3 +1,5 @@
+using SurveyPlanner.Files.Units;
+
 namespace SurveyPlanner.Files.Plans;
 
 /// <summary>Keys and tables that stand twice: the first counts, the others are reported.</summary>
@@ -21,7 +23,7 @@ internal static class DuplicateKeys
             if (!tables.TryAdd(table.Path, table))
             {
                 var first = tables[table.Path].Place.Line;
-                problems.Add(table.Place.Problem($"[{table.Path}] stands twice, first on line {first}: join the two", table.Path.ToString()));
+                problems.Add(table.Place.Problem($"[{Quoted.Plain(table.Path.ToString())}] stands twice, first on line {first}: join the two", table.Path.ToString()));
             }
         }
 

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using SurveyPlanner.Files.Units;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Files.Plans;
@@ -59,6 +60,6 @@ internal static class LayoutBuilder
         var why = inherited is null ? "is missing" : "is missing: what [layout] says does not suit the kind of this stratum";
         var place = table.EntryOf(PlanKeys.Kind)?.KeyPlace ?? table.Place;
         return place.Problem(
-            $"{why}: write {keys[0].Name} = {keys[0].Example}{others} under [{table.Path}]", table.Path.Add([keys[0].Name]).ToString());
+            $"{why}: write {keys[0].Name} = {keys[0].Example}{others} under [{Quoted.Plain(table.Path.ToString())}]", table.Path.Add([keys[0].Name]).ToString());
     }
 }

@@ -1,3 +1,5 @@
+using SurveyPlanner.Files.Units;
+
 namespace SurveyPlanner.Files.Plans;
 
 /// <summary>Where something stands: in the plan file, or in a <c>--set</c> on the command line (which has no lines).</summary>
@@ -9,5 +11,5 @@ internal sealed record Place(string File, int? Line = null, int? Column = null)
 
     public bool IsSet => File == CommandLine;
 
-    public Problem Problem(string message, string? key = null) => new(message, File, Line, Column, key);
+    public Problem Problem(string message, string? key = null) => new(message, File, Line, Column, key is null ? null : Quoted.Plain(key));
 }

@@ -19,6 +19,10 @@ internal static class PlanKeys
     private static readonly TextReader Text = new();
     private static readonly PathReader File = new();
     private static readonly LengthReader Length = new();
+    private static readonly QuantityReader<Money> Money = new(
+        "a sum of money with its currency, more than 0", QuantityText.ReadMoney, money => money.Amount, money => $"{DecimalText.Write(money.Amount)} {money.Currency}");
+    private static readonly QuantityReader<GivenRate> Rate = new(
+        "detections per length (or per visit), more than 0", QuantityText.ReadEncounterRate, rate => rate.Value, rate => DecimalText.Write(rate.Value) + (rate.PerVisit ? " /visit" : " /km"));
     private static readonly List<PlanKey> Listed = [];
 
     // [survey]
@@ -50,8 +54,8 @@ internal static class PlanKeys
     public static readonly PlanKey<ZigzagTurning> Turning = Layout("turning", new ChoiceReader<ZigzagTurning>(), "\"adjusted-angle\"", "How the zigzag turns.", KindFilter.Only(LayoutKind.Zigzag), ZigzagTurning.EqualSpaced);
 
     // [stratum."name"] only
-    public static readonly PlanKey<Money> CostPerKm = Add("stratum", "cost_per_km", new MoneyReader(), "\"35 EUR\"", "What a kilometre of line costs in this stratum, for the optimal allocation.", kinds: KindFilter.Lines);
-    public static readonly PlanKey<Money> CostPerPoint = Add("stratum", "cost_per_point", new MoneyReader(), "\"20 EUR\"", "What a visit to a point costs in this stratum, for the optimal allocation.", kinds: KindFilter.Points);
+    public static readonly PlanKey<Money> CostPerKm = Add("stratum", "cost_per_km", Money, "\"35 EUR\"", "What a kilometre of line costs in this stratum, for the optimal allocation.", kinds: KindFilter.Lines);
+    public static readonly PlanKey<Money> CostPerPoint = Add("stratum", "cost_per_point", Money, "\"20 EUR\"", "What a visit to a point costs in this stratum, for the optimal allocation.", kinds: KindFilter.Points);
 
     // [coverage]
     public static readonly PlanKey<long> Cells = Add("coverage", "cells", new WholeReader(1, int.MaxValue), "10000", "Number of cells over the whole region; without it so many that the smallest stratum has at least 500.");
@@ -67,7 +71,7 @@ internal static class PlanKeys
     // [pilot]
     public static readonly PlanKey<string> Transects = Add("pilot", "transects", File, "\"pilot-transects.csv\"", "Table of the pilot's transects.");
     public static readonly PlanKey<string> Detections = Add("pilot", "detections", File, "\"pilot-detections.csv\"", "Table of its detections, where distances or cluster sizes were noted.");
-    public static readonly PlanKey<GivenRate> EncounterRate = Add("pilot", "encounter_rate", new EncounterRateReader(), "\"0.8 /km\"", "Detections per length of line (at points: \"1.5 /visit\"), where there is no table.");
+    public static readonly PlanKey<GivenRate> EncounterRate = Add("pilot", "encounter_rate", Rate, "\"0.8 /km\"", "Detections per length of line (at points: \"1.5 /visit\"), where there is no table.");
     public static readonly PlanKey<EncounterRateEstimator> Estimator = Add("pilot", "estimator", new ChoiceReader<EncounterRateEstimator>(), "\"random-lines\"", "Variance estimator of the encounter rate; without it the one that suits the layout.");
     public static readonly PlanKey<double> ClusterSize = Add("pilot", "cluster_size", new NumberReader("a number from 1 on", value => value >= 1), "2.4", "Mean cluster size, where no detections give it.");
     public static readonly PlanKey<double> ClusterSizeSd = Add("pilot", "cluster_size_sd", new NumberReader("a number from 0 on", value => value >= 0), "1.7", "Standard deviation of cluster size; without it 0.", 0.0);

@@ -85,38 +85,24 @@ internal sealed class BearingReader : ValueReader<Layouts.Bearing>
     }
 }
 
-/// <summary>A sum of money.</summary>
-internal sealed class MoneyReader : ValueReader<Money>
+/// <summary>A quantity above 0 that is written as text, with its unit.</summary>
+/// <param name="takes">What it takes, in words.</param>
+/// <param name="read">Reads the text; its second argument is a sample for messages.</param>
+/// <param name="amount">The figure in it, for the test that it is above 0.</param>
+/// <param name="write">The text of one fixed form.</param>
+internal sealed class QuantityReader<T>(string takes, Func<string, string, Parsed<T>> read, Func<T, double> amount, Func<T, string> write) : ValueReader<T>
 {
-    public override string Takes => "a sum of money with its currency, more than 0";
+    public override string Takes => takes;
 
     public override bool IsText => true;
 
-    public override Parsed<Money> Read(SettingValue value, Sample sample) => value switch
+    public override Parsed<T> Read(SettingValue value, Sample sample) => value switch
     {
-        SettingValue.Text text => QuantityText.ReadMoney(text.Value, sample.ToString()).Then(money => money.Amount > 0
-            ? Parsed.Ok(money)
-            : Parsed.Bad<Money>($"{value.Shown} is not more than 0: write {sample}")),
+        SettingValue.Text text => read(text.Value, sample.ToString()).Then(quantity => amount(quantity) > 0
+            ? Parsed.Ok(quantity)
+            : Parsed.Bad<T>($"{value.Shown} is not more than 0: write {sample}")),
         _ => WrongType(value, sample),
     };
 
-    public override string Write(Money value) => Quoted.Text($"{DecimalText.Write(value.Amount)} {value.Currency}");
-}
-
-/// <summary>An encounter rate.</summary>
-internal sealed class EncounterRateReader : ValueReader<GivenRate>
-{
-    public override string Takes => "detections per length (or per visit), more than 0";
-
-    public override bool IsText => true;
-
-    public override Parsed<GivenRate> Read(SettingValue value, Sample sample) => value switch
-    {
-        SettingValue.Text text => QuantityText.ReadEncounterRate(text.Value, sample.ToString()).Then(rate => rate.Value > 0
-            ? Parsed.Ok(rate)
-            : Parsed.Bad<GivenRate>($"{value.Shown} is not more than 0: write {sample}")),
-        _ => WrongType(value, sample),
-    };
-
-    public override string Write(GivenRate value) => Quoted.Text($"{DecimalText.Write(value.Value)} {(value.PerVisit ? "/visit" : "/km")}");
+    public override string Write(T value) => Quoted.Text(write(value));
 }

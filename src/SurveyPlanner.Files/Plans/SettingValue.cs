@@ -8,7 +8,7 @@ namespace SurveyPlanner.Files.Plans;
 internal abstract record SettingValue(string Raw)
 {
     /// <summary>How a message shows it.</summary>
-    public virtual string Shown => Quoted.Short(Raw).Trim('"');
+    public virtual string Shown => Quoted.Plain(Raw);
 
     internal sealed record Text(string Value, string Raw) : SettingValue(Raw)
     {

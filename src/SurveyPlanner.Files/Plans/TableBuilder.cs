@@ -65,7 +65,7 @@ internal sealed class TableBuilder(List<Problem> problems)
             {
                 1 => null,
                 2 => string.IsNullOrWhiteSpace(segments[1]) ? "a stratum needs a name: write [stratum.\"inner bay\"]" : null,
-                _ => $"a name with a dot stands in quotes: write [stratum.{Quoted.Text(string.Join('.', segments[1..]))}]",
+                _ => $"a name with a dot stands in quotes: write [stratum.{Quoted.Short(string.Join('.', segments[1..]))}]",
             };
         }
 

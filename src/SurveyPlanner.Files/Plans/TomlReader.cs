@@ -99,8 +99,9 @@ internal sealed class TomlReader(string file, List<Problem> problems)
     {
         if (document is null)
         {
-            // Nested too deep: the library does not say where.
-            return (Array.IndexOf(lines, lines.MaxBy(line => line.Count(c => c is '[' or '{'))), 1);
+            // The library does not say where: the first line that defeats it by itself, else the one nested deepest.
+            var defeating = Array.FindIndex(lines, line => TryParse(line) is null);
+            return (defeating >= 0 ? defeating : Array.IndexOf(lines, lines.MaxBy(line => line.Count(c => c is '[' or '{'))), 1);
         }
 
         var start = document.Diagnostics
@@ -136,13 +137,14 @@ internal sealed class TomlReader(string file, List<Problem> problems)
 
     private static int LastLine(string[] lines) => Math.Max(1, lines[^1].Length == 0 ? lines.Length - 1 : lines.Length);
 
+    /// <summary>Null where the library gives up: on nesting too deep, and (a fault of it) on the escape of half a surrogate pair.</summary>
     private static DocumentSyntax? TryParse(string text)
     {
         try
         {
             return SyntaxParser.Parse(text, validate: false);
         }
-        catch (TomlException)
+        catch (Exception exception) when (exception is TomlException or ArgumentOutOfRangeException)
         {
             return null;
         }

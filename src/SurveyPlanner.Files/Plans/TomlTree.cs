@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using SurveyPlanner.Files.Units;
 using Tomlyn.Syntax;
 
 namespace SurveyPlanner.Files.Plans;
@@ -23,7 +24,7 @@ internal sealed class TomlTree(string file, List<Problem> problems)
             var header = new TableHeader(new KeyPath(Segments(table.Name)), At(table.Span));
             if (table is TableArraySyntax)
             {
-                problems.Add(header.Place.Problem($"write [{header.Path}] in single brackets: there is only one such table", header.Path.ToString()));
+                problems.Add(header.Place.Problem($"write [{Quoted.Plain(header.Path.ToString())}] in single brackets: there is only one such table", header.Path.ToString()));
             }
 
             Tables.Add(header);

@@ -141,7 +141,7 @@ public sealed class PilotTableReaderTests : IDisposable
         var missing = Assert.Throws<InputException>(() => PilotTableReader.Read(Path.Combine(folder, "none.csv"), null));
         Assert.EndsWith("none.csv: there is no table of transects of this name", missing.Message);
         var latin = Assert.Throws<InputException>(() => PilotTableReader.Read(Write("l.csv", Encoding.Latin1.GetBytes("transect,length_km,count\nBjørn,1,1\n")), null));
-        Assert.EndsWith("l.csv:2:1: holds a character that is not UTF-8: save the file as UTF-8", latin.Message);
+        Assert.EndsWith("l.csv:2:3: holds a character that is not UTF-8: save the file as UTF-8", latin.Message);
         var wide = Assert.Throws<InputException>(() => PilotTableReader.Read(Write("w.csv", Encoding.Unicode.GetPreamble()), null));
         Assert.EndsWith("w.csv:1:1: is saved as UTF-16: save it as UTF-8", wide.Message);
     }

@@ -1,0 +1,86 @@
+using System.Text.RegularExpressions;
+using CsCheck;
+using SurveyPlanner.Files.Boundaries;
+using SurveyPlanner.Files.Plans;
+using SurveyPlanner.Layouts;
+using SurveyPlanner.Regions;
+
+namespace SurveyPlanner.Files.Tests.Plans;
+
+public partial class StarterPlanTests
+{
+    private static readonly StarterFacts Sound = new("sound", 1234.5, 56, 30, [new StratumFieldCandidate("zone", ["inner bay", "outer sound"])]);
+
+    [Fact]
+    public void It_reads_without_a_problem_and_fits_the_region()
+    {
+        var plan = PlanFileReader.Parse(StarterPlan.For("sound.geojson", Sound), "sound.toml", []);
+
+        Assert.Equal(("sound", "sound.geojson", false), (plan.Design.Name, plan.BoundaryPath, plan.SeedGiven));
+        Assert.Equal(new LayoutDesign(LayoutKind.Parallel, new Sizing.Spacing(3000), new Bearing.ShortAxis(), 300), plan.Design.Layout);
+    }
+
+    [Fact]
+    public void Its_notes_read_too_once_their_marks_are_taken_away()
+    {
+        var text = CommentedToml().Replace(StarterPlan.For("sound.geojson", Sound), "");
+        var plan = PlanFileReader.Parse(text, "sound.toml", []);
+
+        Assert.Equal((20270401UL, "zone", 0.2), (plan.Design.Seed, plan.Design.StratumField, plan.Design.Effort.TargetCv));
+        Assert.Equal(new Sizing.Spacing(1500), plan.Design.LayoutOf("inner bay").Sizing);
+        Assert.Equal("pilot-detections.csv", plan.PilotDetectionsPath);
+        Assert.Equal(500, plan.Design.ExclusionBufferMetres);
+    }
+
+    [Fact]
+    public void Whatever_the_region_it_gives_about_twenty_lines_with_strips_far_apart()
+        => Gen.Double[-3, 4].Check(
+            500,
+            exponent =>
+            {
+                var longAxisKm = Math.Pow(10, exponent);
+                var design = PlanFileReader.Parse(StarterPlan.For("a.geojson", new StarterFacts("a", 1, longAxisKm, longAxisKm, [])), "a.toml", []).Design.Layout;
+                var spacing = Assert.IsType<Sizing.Spacing>(design.Sizing).Metres;
+
+                // The widest step between round lengths is a third: half of it, on a ratio scale, is 15.5 percent.
+                Assert.InRange(longAxisKm * 1000 / spacing, 20 / 1.156, 20 * 1.156);
+                Assert.InRange(design.HalfWidthMetres, Math.Min(240, spacing * 0.079), Math.Min(300, spacing * 0.1) * (1 + 1e-12));
+            });
+
+    [Fact]
+    public void Whatever_the_names_it_reads_and_says_them_back()
+        => Gen.Select(Gen.String, Gen.String, Gen.String.Array[0, 3]).Check(
+            500,
+            names =>
+            {
+                var (survey, field, values) = names;
+                var facts = new StarterFacts(survey, 1, 10, 5, [new StratumFieldCandidate(field, [.. values]), new StratumFieldCandidate(field + "x", [.. values])]);
+                var design = PlanFileReader.Parse(StarterPlan.For("a.geojson", facts), "a.toml", []).Design;
+                Assert.Equal(string.IsNullOrWhiteSpace(survey) ? "survey" : WholeCharacters(survey), design.Name);
+            });
+
+    [Fact]
+    public void A_file_name_that_no_plan_can_hold_is_refused_in_words()
+        => Assert.Contains("rename the file", Assert.Throws<InputException>(() => StarterPlan.For("a\nb.geojson", Sound)).Message);
+
+    [Fact]
+    public void The_facts_come_from_the_boundary_and_its_region()
+    {
+        var boundary = BoundaryReader.Read(ReferenceData.Path("regions", "strata_maine_counties.geojson"));
+        var region = RegionBuilder.Build(boundary, new RegionDesign(), []);
+        var facts = StarterFacts.Of("counties", boundary, region);
+
+        Assert.Equal(region.AreaKm2, facts.AreaKm2);
+        Assert.Equal((region.Strata[0].LongAxisKm, region.Strata[0].ShortAxisKm), (facts.LongAxisKm, facts.ShortAxisKm));
+        var candidate = facts.StratumFields[0];
+        Assert.Equal(boundary.Features.Select(feature => feature.Attributes[candidate.Field]).Distinct(), candidate.Values);
+        var plan = PlanFileReader.Parse(StarterPlan.For("counties.geojson", facts), "a.toml", [$"region.stratum_field={candidate.Field}"]);
+        Assert.Equal(candidate.Values.Length, RegionBuilder.Build(boundary, new RegionDesign(plan.Design.StratumField), []).Strata.Length);
+    }
+
+    /// <summary>A text file cannot hold half a surrogate pair.</summary>
+    private static string WholeCharacters(string text) => string.Concat(text.EnumerateRunes());
+
+    [GeneratedRegex(@"^# (?=\[[a-z]|[a-z_]+ = )", RegexOptions.Multiline)]
+    private static partial Regex CommentedToml();
+}
