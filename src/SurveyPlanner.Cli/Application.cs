@@ -56,6 +56,7 @@ internal static class Application
             """);
         root.Options.OfType<HelpOption>().Single().Description = "Show help and usage";
         root.Options.OfType<VersionOption>().Single().Description = "Show the version";
+        root.Subcommands.Add(NewCommand.Build(terminal));
         root.Subcommands.Add(CheckCommand.Build(terminal));
         root.Subcommands.Add(PlanCommand.Build(terminal));
         root.Subcommands.Add(LayoutCommand.Build(terminal));
