@@ -1,0 +1,102 @@
+using System.Text.Json;
+
+namespace SurveyPlanner.Cli.Tests;
+
+public class PlanCommandTests
+{
+    private static readonly string[] Files =
+        ["coverage.csv", "record.json", "report.html", "summary.json", "transects.geojson", "transects.gpx", "waypoints.csv"];
+
+    [Theory]
+    [InlineData("island_iceland", "kind = \"parallel\"\nbearing = \"short-axis\"\nspacing = \"20 km\"\nhalf_width = \"500 m\"", 102356.769487)]
+    [InlineData("antimeridian_fiji", "kind = \"parallel\"\nbearing = 30\nspacing = \"10 km\"\nhalf_width = \"500 m\"", 18935.933489)]
+    [InlineData("polar_svalbard", "kind = \"zigzag\"\nbearing = \"short-axis\"\nspacing = \"25 km\"\nhalf_width = \"500 m\"", 61892.324191)]
+    [InlineData("lake_caspian_with_islands", "kind = \"point-grid\"\nbearing = 0\nspacing = \"40 km\"\nradius = \"2 km\"", 396301.311613)]
+    public void The_whole_job_on_a_boundary_that_nobody_here_drew(string region, string layout, double areaKm2)
+    {
+        using var work = new Workspace();
+        var plan = work.Plan(ReferenceData.Path("regions", region + ".geojson"), layout, "[coverage]\nreplicates = 200");
+        var run = ProgramRun.Of("plan", plan, "--out", work.At("out"), "--quiet");
+        Assert.Equal((0, ""), (run.ExitCode, run.Error));
+        Assert.Equal(Files, Directory.EnumerateFiles(work.At("out")).Select(Path.GetFileName).Order(StringComparer.Ordinal));
+
+        using var summary = JsonDocument.Parse(File.ReadAllText(Path.Combine(work.At("out"), "summary.json")));
+        var stratum = summary.RootElement.GetProperty("strata")[0];
+        Assert.Equal(1, stratum.GetProperty("area_km2").GetDouble() / areaKm2, 1e-6);
+
+        // Cells carry the whole area, and coverage stays a probability.
+        var cells = File.ReadLines(Path.Combine(work.At("out"), "coverage.csv")).Skip(1).Select(line => line.Split(',')).ToList();
+        Assert.Equal(1, cells.Sum(cell => Number(cell[3])) / areaKm2, 1e-5);
+        Assert.All(cells, cell => Assert.InRange(Number(cell[5]), 0, 1));
+    }
+
+    [Fact]
+    public void Strata_by_attribute_each_get_their_layout()
+    {
+        using var work = new Workspace();
+        var plan = work.Plan(
+            ReferenceData.Path("regions", "strata_maine_counties.geojson"),
+            "kind = \"parallel\"\nbearing = \"short-axis\"\nspacing = \"10 km\"\nhalf_width = \"300 m\"",
+            "[stratum.\"York County\"]\nkind = \"zigzag\"\n[coverage]\nreplicates = 50");
+        File.WriteAllText(plan, File.ReadAllText(plan).Replace("[layout]", "stratum_field = \"name\"\n\n[layout]", StringComparison.Ordinal));
+        var run = ProgramRun.Of("plan", plan, "--out", work.At("out"), "--json");
+        Assert.Equal(0, run.ExitCode);
+        using var summary = JsonDocument.Parse(run.Out);
+        var strata = summary.RootElement.GetProperty("strata").EnumerateArray().ToDictionary(
+            stratum => stratum.GetProperty("name").GetString()!, stratum => stratum.GetProperty("kind").GetString());
+        Assert.Equal(16, strata.Count);
+        Assert.Equal("zigzag", strata["York County"]);
+        Assert.Equal("parallel", strata["Knox County"]);
+    }
+
+    [Fact]
+    public void Threads_and_replay_give_the_same_bytes()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        foreach (var threads in new[] { "1", "2", "8" })
+        {
+            Assert.Equal(0, ProgramRun.Of("plan", plan, "--out", work.At("out" + threads), "--threads", threads, "--quiet").ExitCode);
+        }
+
+        var replay = ProgramRun.Of("replay", Path.Combine(work.At("out1"), "record.json"), "--out", work.At("again"));
+        Assert.Equal(0, replay.ExitCode);
+        foreach (var other in new[] { "out2", "out8", "again" })
+        {
+            foreach (var file in Files.Except(["record.json"]))
+            {
+                Assert.Equal(File.ReadAllBytes(Path.Combine(work.At("out1"), file)), File.ReadAllBytes(Path.Combine(work.At(other), file)));
+            }
+        }
+    }
+
+    [Fact]
+    public void A_changed_input_is_named_by_replay()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/ground-birds-hills/plan.toml");
+        Assert.Equal(0, ProgramRun.Of("plan", plan, "--out", work.At("out"), "--quiet", "--set", "coverage.replicates=50").ExitCode);
+        File.AppendAllText(work.At("sample-regions/ground-birds-hills/boundary.geojson"), " ");
+        var replay = ProgramRun.Of("replay", Path.Combine(work.At("out"), "record.json"));
+        Assert.Equal(3, replay.ExitCode);
+        Assert.Contains("boundary.geojson", replay.Error, StringComparison.Ordinal);
+        Assert.Contains("has changed", replay.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Draws_are_counted_and_the_same_seed_is_the_same_draw()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/ground-birds-hills/plan.toml");
+        Assert.Contains("draw 1 of 1", ProgramRun.Of("layout", plan).Out, StringComparison.Ordinal);
+        Assert.Contains("draw 1 of 1", ProgramRun.Of("layout", plan).Out, StringComparison.Ordinal);
+        Assert.Contains("draw 2 of 2", ProgramRun.Of("layout", plan, "--seed", "12").Out, StringComparison.Ordinal);
+        Assert.Equal(0, ProgramRun.Of("coverage", plan, "--seed", "99", "--set", "coverage.replicates=20").ExitCode);
+        Assert.Contains("draw 2 of 2", ProgramRun.Of("layout", plan, "--seed", "12").Out, StringComparison.Ordinal);
+    }
+
+    private static double Number(string text) => double.Parse(text, System.Globalization.CultureInfo.InvariantCulture);
+}
