@@ -15,7 +15,7 @@ public class BadInputTests
     [InlineData("layout.spacing=4", "unit")] // missing unit
     [InlineData("layout.spacing=4,5 km", "comma")]
     [InlineData("layout.spacing=500 km", "larger than stratum")]
-    [InlineData("layout.spacing=1 m", "100000")]
+    [InlineData("layout.spacing=0.5 m", "100000")]
     [InlineData("layout.kind=zigzig", "zigzag")]
     [InlineData("layout.bearing=400", "bearing")]
     [InlineData("region.stratum_field=zone", "zone")]
@@ -23,8 +23,8 @@ public class BadInputTests
     [InlineData("coverage.replicates=0", "replicates")]
     [InlineData("coverage.cells=1000000000", "GB")]
     [InlineData("coverage.cells=\"0\"", "cells")]
-    [InlineData("precision.target_cv=20", "0.20")]
-    [InlineData("layout.size_from=precision", "precision")]
+    [InlineData("precision.target_cv=20", "percent")]
+    [InlineData("layout.kind=parallell", "parallel")]
     public void A_wrong_key_or_value(string set, string expected) => Refused(Square, Lines, expected, set);
 
     [Theory]
@@ -36,8 +36,8 @@ public class BadInputTests
     public void A_boundary_that_cannot_be_one(string boundary, string expected) => Refused(boundary, Lines, expected);
 
     [Theory]
-    [InlineData("stratum,transect,length_km,count\nregion,T1,-4,2\nregion,T2,3,1\n", "T1", "length")]
-    [InlineData("stratum,transect,length_km,count\nregion,T1,4,0\nregion,T2,3,0\n", "detection", "0")]
+    [InlineData("stratum,transect,length_km,count\nregion,T1,-4,2\nregion,T2,3,1\n", "pilot.csv:2", "length")]
+    [InlineData("stratum,transect,length_km,count\nregion,T1,4,0\nregion,T2,3,0\n", "pilot.csv", "detection")]
     [InlineData("stratum,transect,length_km,count\nregion,T1,four,2\n", "four", "length_km")]
     [InlineData("stratum,transect,length_km,count\nelsewhere,T1,4,2\nelsewhere,T2,4,2\n", "elsewhere", "stratum")]
     public void A_pilot_table_that_cannot_be_one(string table, string first, string second)

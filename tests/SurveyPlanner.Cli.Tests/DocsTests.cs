@@ -1,4 +1,3 @@
-using SurveyPlanner.Files.Plans;
 using SurveyPlanner.Pages;
 
 namespace SurveyPlanner.Cli.Tests;
