@@ -15,6 +15,11 @@ public class PictureBook
         }
 
         Directory.CreateDirectory(folder);
+        File.WriteAllText(Path.Combine(folder, "pilot.html"), ReportRenderer.Render(SamplePlan.WithPilot, SamplePlan.Context));
+        var points = SamplePlan.Of(SampleBoundary.Read("inland_county_polygon"), SamplePlan.Grid(4000));
+        File.WriteAllText(Path.Combine(folder, "points.html"), ReportRenderer.Render(points, SamplePlan.Context));
+        var zigzag = SamplePlan.Of(SampleBoundary.Read("lake_caspian_with_islands"), SamplePlan.Zigzag(60_000));
+        File.WriteAllText(Path.Combine(folder, "zigzag.html"), ReportRenderer.Render(zigzag, SamplePlan.Context));
         foreach (var (file, field, spacing) in ((string, string?, double)[])
                  [
                      ("marine_archipelago_sea", null, 10_000), ("strata_maine_counties", "name", 15_000), ("antimeridian_fiji", null, 20_000),

@@ -26,8 +26,4 @@ internal static class Cividis
 
         return "#" + colour.ToString("x6", CultureInfo.InvariantCulture);
     }
-
-    /// <summary>So many colours, evenly spread over the whole scale, dark first.</summary>
-    public static IReadOnlyList<string> Classes(int count)
-        => [.. Enumerable.Range(0, count).Select(i => At(count == 1 ? 1 : i / (count - 1.0)))];
 }

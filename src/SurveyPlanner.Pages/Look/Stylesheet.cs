@@ -36,7 +36,7 @@ internal static class Stylesheet
         $".pic .curve2{{stroke:{Tokens.Ink};stroke-width:2;fill:none;stroke-dasharray:7 4}}",
         $".pic .target{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .bar{{fill:{Tokens.Action}}}",
-        $".pic .axis-title{{fill:{Tokens.Muted}}}");
+        $".pic .dot{{fill:{Tokens.Ink};stroke:{Tokens.Ground};stroke-width:2}}");
 
     /// <summary>The page.</summary>
     public static readonly string Page = string.Join('\n',
@@ -54,26 +54,26 @@ internal static class Stylesheet
         "nav ul{list-style:none;padding:0;display:flex;flex-wrap:wrap;gap:4px 20px;font-size:14px}nav a{display:inline-block;padding:2px 0;min-height:24px}",
         "figure{margin:16px 0}figcaption{font-size:14px;max-width:70ch;margin-top:8px}",
         ".scroll{overflow-x:auto}.scroll svg{display:block;width:100%;min-width:600px;height:auto}",
-        ".chart svg{display:block;width:100%;height:auto}",
+        ".chart svg{display:block;width:100%;max-width:680px;height:auto}",
         $"table{{border-collapse:collapse;font-size:14px;margin:12px 0 20px;font-variant-numeric:tabular-nums}}",
         "caption{text-align:left;font-weight:600;padding-bottom:4px}",
         $"th,td{{padding:4px 12px 4px 0;text-align:left;vertical-align:top;border-bottom:1px solid {Tokens.Hairline}}}",
         $"thead th{{color:{Tokens.Muted};font-weight:400;vertical-align:bottom;border-bottom:1px solid {Tokens.Muted}}}",
         "tbody th{font-weight:600}",
-        ".num{text-align:right}th:last-child,td:last-child{padding-right:0}",
+        "td span{display:inline-block;white-space:nowrap}.num{text-align:right}th:last-child,td:last-child{padding-right:0}",
         "code{font:14px/1.4 ui-monospace,'SF Mono',Consolas,monospace;overflow-wrap:anywhere}",
         $".warning{{border-left:3px solid {Tokens.Signal};padding-left:12px}}.warning b{{color:{Tokens.Signal}}}",
         "dl{display:grid;grid-template-columns:max-content 1fr;gap:4px 20px}dt{font-weight:600}dd{margin:0;min-width:0;overflow-wrap:anywhere}",
-        ".swatch{display:inline-block;vertical-align:-2px;margin-right:8px}",
+        $"details{{margin:12px 0;font-size:14px}}summary{{cursor:pointer;color:{Tokens.Action};min-height:24px}}summary:focus-visible{{outline:2px solid {Tokens.Action};outline-offset:2px}}",
         // On a narrow screen a row becomes a small list, each figure with its own heading: nothing has to be scrolled sideways.
-        "@media screen and (max-width:720px){thead,td.empty{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}"
-            + "table,tbody,tr,caption{display:block;width:100%}tr{padding:8px 0;border-bottom:1px solid " + Tokens.Hairline + "}"
+        "@media screen and (max-width:720px){thead{position:absolute;width:1px;height:1px;overflow:hidden;clip-path:inset(50%)}"
+            + "td:empty{display:none!important}table,tbody,tr,caption{display:block;width:100%}tr{padding:8px 0;border-bottom:1px solid " + Tokens.Hairline + "}"
             + "th[scope=row],td{display:flex;justify-content:space-between;gap:16px;border:0;padding:1px 0;text-align:right}"
             + "td::before,th[scope=row]::before{content:attr(data-label);color:" + Tokens.Muted + ";font-weight:400;text-align:left}"
             + "dl{display:block}dd{margin-bottom:8px}body{padding:20px 12px}}",
         "@page{margin:15mm 14mm 16mm;@bottom-right{content:\"page \" counter(page) \" of \" counter(pages);font:9pt " + Tokens.Sans + "}}",
         "@media print{html{font-size:10.5pt;-webkit-print-color-adjust:exact;print-color-adjust:exact}body{max-width:none;padding:0}"
             + "nav{display:none}h1{font-size:20pt}h2{font-size:14pt;margin-top:20pt;break-after:avoid}h3,caption{break-after:avoid}"
-            + "thead{display:table-header-group}tr,figure,li,.together{break-inside:avoid}table{font-size:8.5pt}th,td{padding:2pt 8pt 2pt 0}"
-            + ".scroll{overflow:visible}.scroll svg{min-width:0;max-height:235mm}a{color:inherit;text-decoration:none}}");
+            + "thead{display:table-header-group}tr,figure,li,table{break-inside:avoid}table.long{break-inside:auto}table{font-size:8.5pt}th,td{padding:2pt 7pt 2pt 0}"
+            + ".scroll{overflow:visible}.scroll svg{min-width:0;max-height:160mm}.chart svg{max-width:130mm}a{color:inherit;text-decoration:none}}");
 }

@@ -5,12 +5,19 @@ using SurveyPlanner.Pages.Words;
 namespace SurveyPlanner.Pages.Maps;
 
 /// <summary>
-/// Classes of coverage relative to nominal: the same on every map, so that "even" looks even whatever the design, and strata of different effort can be compared.
+/// Classes of coverage relative to nominal, with the same colours on every map: "as planned" looks the same whatever the design, and strata
+/// of different effort and reports of different surveys can be compared.
 /// </summary>
 internal static class CoverageClasses
 {
-    // Fifths round 1: under 0.5, …, over 1.5. Seven, the most that a legend's colours can be told apart by.
-    private static readonly double[] Bounds = [0.5, 0.7, 0.9, 1.1, 1.3, 1.5];
+    // Fifths round 1. Six and the hatch are seven, the most that can be told apart by.
+    private static readonly double[] Bounds = [0.5, 0.7, 0.9, 1.1, 1.3];
+
+    // Shares of the way along cividis: lightness rises evenly from class to class, and what is as planned gets a quiet colour.
+    private static readonly double[] ColourShares = [0, 0.19, 0.4, 0.64, 0.83, 1];
+
+    /// <summary>The class round 1.</summary>
+    public const int AsPlanned = 3;
 
     /// <summary>The class of a place that can never be covered; it is hatched, not coloured.</summary>
     public const int Never = -1;
@@ -27,7 +34,10 @@ internal static class CoverageClasses
         return Bounds.Count(bound => relative >= bound);
     }
 
-    /// <summary>The classes from the lowest to the highest that occur, with colours spread over them and the area of each.</summary>
+    /// <summary>The colour of a class as <c>#rrggbb</c>.</summary>
+    public static string ColourOf(int index) => Cividis.At(ColourShares[index]);
+
+    /// <summary>All classes with the area of each; the hatched one only where it occurs.</summary>
     public static IReadOnlyList<CoverageClass> Tally(IEnumerable<StratumCoverage> coverages)
     {
         var areas = new double[Bounds.Length + 1];
@@ -47,21 +57,9 @@ internal static class CoverageClasses
             }
         }
 
-        var (total, lowest, highest) = (areas.Sum() + never, Array.FindIndex(areas, area => area > 0), Array.FindLastIndex(areas, area => area > 0));
-        var classes = new List<CoverageClass>();
-        if (never > 0)
-        {
-            classes.Add(new CoverageClass(Never, "none", null, never, never / total));
-        }
-
-        if (lowest >= 0)
-        {
-            var colours = Cividis.Classes(highest - lowest + 1);
-            classes.AddRange(colours.Select((colour, i) =>
-                new CoverageClass(lowest + i, Name(lowest + i), colour, areas[lowest + i], areas[lowest + i] / total)));
-        }
-
-        return classes;
+        var total = areas.Sum() + never;
+        var classes = areas.Select((area, i) => new CoverageClass(i, Name(i), ColourOf(i), area, area / total));
+        return never > 0 ? [new CoverageClass(Never, "none", null, never, never / total), .. classes] : [.. classes];
     }
 
     private static string Name(int index)

@@ -152,12 +152,13 @@ public sealed record Graticule(string Path, IReadOnlyList<Label> Labels)
             var window = new Window(
                 projection, frame, centre.Lon, centre.Lat,
                 Math.Max(minLon - padLon, -180), Math.Min(maxLon + padLon, 180), Math.Max(minLat - padLat, -90), Math.Min(maxLat + padLat, 90));
-            return window.Shows(90) || window.Shows(-90)
-                ? window with { MinRelLon = -180, MaxRelLon = 180, MinLat = window.Shows(-90) ? -90 : window.MinLat, MaxLat = window.Shows(90) ? 90 : window.MaxLat }
+            return window.ShowsPole
+                ? window with { MinRelLon = -180, MaxRelLon = 180, MinLat = centre.Lat < 0 ? -90 : window.MinLat, MaxLat = centre.Lat < 0 ? window.MaxLat : 90 }
                 : window;
         }
 
-        private bool Shows(double pole) => At(CentreLon, pole) is { } place && Frame.Contains(place);
+        // The pole of the other half of the Earth is on no map of a region, and may have no place in its plane.
+        private bool ShowsPole => At(CentreLon, CentreLat < 0 ? -90 : 90) is { } place && Frame.Contains(place);
 
         // Towards the equator: a latitude beyond the pole is none.
         private double Inward(double degrees) => CentreLat > 0 ? CentreLat - degrees : CentreLat + degrees;

@@ -17,7 +17,9 @@ public sealed record Label(string Text, Pixel Place, Anchor Anchor = Anchor.Midd
 /// <summary>Places labels one after the other and refuses those that would cover one placed before, or leave the drawing.</summary>
 internal sealed class LabelPlacer(double width, double height)
 {
-    private readonly List<(double Left, double Top, double Right, double Bottom)> _taken = [];
+    // Boxes by the squares of a coarse grid that they touch: ten thousand points are no slower to label than ten.
+    private const double Square = 64;
+    private readonly Dictionary<(int, int), List<Box>> _taken = [];
 
     /// <summary>Whether there is room; if so it is taken. Width of text is estimated: 0.6 of its size a character (the map's text is short and mostly digits).</summary>
     public bool TryPlace(Label label, double sizePixels)
@@ -26,29 +28,61 @@ internal sealed class LabelPlacer(double width, double height)
     }
 
     /// <summary>The same for a mark in a square of twice the half-side.</summary>
-    public bool TryPlaceBox(Pixel centre, double half) => TryTake((centre.X - half, centre.Y - half, centre.X + half, centre.Y + half));
+    public bool TryPlaceBox(Pixel centre, double half) => TryTake(Around(centre, half));
 
-    private bool TryTake((double Left, double Top, double Right, double Bottom) box)
+    /// <summary>Takes the room whatever lies there.</summary>
+    public void Place(Label label, double sizePixels) => Take(BoxOf(label, sizePixels));
+
+    /// <summary>The same for a mark in a square of twice the half-side.</summary>
+    public void PlaceBox(Pixel centre, double half) => Take(Around(centre, half));
+
+    private bool TryTake(Box box)
     {
-        if (box.Left < 2 || box.Top < 2 || box.Right > width - 2 || box.Bottom > height - 2 || _taken.Any(other => Overlap(box, other)))
+        if (box.Left < 2 || box.Top < 2 || box.Right > width - 2 || box.Bottom > height - 2
+            || Squares(box).Any(square => _taken.TryGetValue(square, out var boxes) && boxes.Any(box.Overlaps)))
         {
             return false;
         }
 
-        _taken.Add(box);
+        Take(box);
         return true;
     }
 
-    /// <summary>Takes the room whatever lies there.</summary>
-    public void Place(Label label, double sizePixels) => _taken.Add(BoxOf(label, sizePixels));
+    private void Take(Box box)
+    {
+        foreach (var square in Squares(box))
+        {
+            if (!_taken.TryGetValue(square, out var boxes))
+            {
+                _taken[square] = boxes = [];
+            }
 
-    private static (double Left, double Top, double Right, double Bottom) BoxOf(Label label, double size)
+            boxes.Add(box);
+        }
+    }
+
+    private static IEnumerable<(int, int)> Squares(Box box)
+    {
+        for (var x = (int)Math.Floor(box.Left / Square); x <= box.Right / Square; x++)
+        {
+            for (var y = (int)Math.Floor(box.Top / Square); y <= box.Bottom / Square; y++)
+            {
+                yield return (x, y);
+            }
+        }
+    }
+
+    private static Box Around(Pixel centre, double half) => new(centre.X - half, centre.Y - half, centre.X + half, centre.Y + half);
+
+    private static Box BoxOf(Label label, double size)
     {
         var length = label.Text.Length * size * 0.6;
         var left = label.Anchor switch { Anchor.Start => label.Place.X, Anchor.End => label.Place.X - length, _ => label.Place.X - (length / 2) };
-        return (left - 2, label.Place.Y - (0.85 * size), left + length + 2, label.Place.Y + (0.25 * size));
+        return new Box(left - 2, label.Place.Y - (0.85 * size), left + length + 2, label.Place.Y + (0.25 * size));
     }
 
-    private static bool Overlap((double L, double T, double R, double B) a, (double L, double T, double R, double B) b)
-        => a.L < b.R && b.L < a.R && a.T < b.B && b.T < a.B;
+    private readonly record struct Box(double Left, double Top, double Right, double Bottom)
+    {
+        public bool Overlaps(Box other) => Left < other.Right && other.Left < Right && Top < other.Bottom && other.Top < Bottom;
+    }
 }

@@ -30,6 +30,7 @@ public sealed record TransectsDrawing(
         var rings = new PathData();
         foreach (var point in all.Where(drawn => drawn.Transect.IsPoint))
         {
+            placer.PlaceBox(point.Start, 4);
             if (point.Layout.Design.HalfWidthMetres / frame.MetresPerPixel is var radius && radius >= LeastRingRadius)
             {
                 rings.Circle(point.Start, radius);
@@ -38,9 +39,8 @@ public sealed record TransectsDrawing(
 
         var chevrons = all.Select(ChevronOf).OfType<(Pixel Place, double Turn)>()
             .Where(chevron => placer.TryPlaceBox(chevron.Place, 6)).ToArray();
-        var shared = all.SelectMany(drawn => new[] { Rounded(drawn.Start), Rounded(drawn.End) })
-            .GroupBy(place => place).Where(group => group.Count() > 1).Select(group => group.Key).ToHashSet();
-        var ids = all.Select(drawn => IdLabels(drawn, shared, placer)).ToArray();
+        var meetings = Meetings(all);
+        var ids = all.Select(drawn => IdLabels(drawn, meetings, placer)).ToArray();
         return new TransectsDrawing(
             [.. all.Select(drawn => (drawn.Path, drawn.Title))],
             rings.ToString(),
@@ -89,15 +89,15 @@ public sealed record TransectsDrawing(
         return length;
     }
 
-    private static List<Label> IdLabels(Drawn drawn, HashSet<(int, int)> shared, LabelPlacer placer)
+    private static List<Label> IdLabels(Drawn drawn, Dictionary<(int, int), (double X, double Y)> meetings, LabelPlacer placer)
     {
         var id = drawn.Transect.Id;
         IEnumerable<IEnumerable<Label>> ends = drawn.Transect.IsPoint
             ? [PointPlaces(id, drawn.Start)]
             :
             [
-                LinePlaces(id, drawn.Start, drawn.Pieces[0][1], shared.Contains(Rounded(drawn.Start))),
-                LinePlaces(id, drawn.End, drawn.Pieces[^1][^2], shared.Contains(Rounded(drawn.End))),
+                LinePlaces(id, drawn.Start, drawn.Pieces[0][1], meetings),
+                LinePlaces(id, drawn.End, drawn.Pieces[^1][^2], meetings),
             ];
         return [.. ends.Select(places => places.FirstOrDefault(label => placer.TryPlace(label, IdSize))).OfType<Label>()];
     }
@@ -110,24 +110,41 @@ public sealed record TransectsDrawing(
         new Label(id, new Pixel(at.X - 6, at.Y + 13), Anchor.End),
     ];
 
-    // Beyond the end; where two lines meet (the turns of a zigzag) that would not tell which is which: beside the line instead, a little way in.
-    private static IEnumerable<Label> LinePlaces(string id, Pixel end, Pixel next, bool shared)
+    // Beyond the end of the line, else beside it.
+    private static IEnumerable<Label> LinePlaces(string id, Pixel end, Pixel next, Dictionary<(int, int), (double X, double Y)> meetings)
     {
-        var length = Math.Max(end.DistanceTo(next), 1e-9);
-        var (ux, uy) = ((end.X - next.X) / length, (end.Y - next.Y) / length);
+        var (ux, uy) = Direction(next, end);
         var (halfWide, halfHigh) = (id.Length * IdSize * 0.3, IdSize * 0.42);
-        if (!shared)
+        var aside = 4 + (Math.Abs(uy) * halfWide) + (Math.Abs(ux) * halfHigh);
+        if (meetings.TryGetValue(Rounded(end), out var inward))
         {
-            var out_ = 4 + (Math.Abs(ux) * halfWide) + (Math.Abs(uy) * halfHigh);
-            yield return new Label(id, new Pixel(end.X + (out_ * ux), end.Y + (out_ * uy) + halfHigh));
+            // Where lines meet (the turns of a zigzag) a label beyond the end would not tell which is which:
+            // along the line instead, a little way in, on the side away from the other.
+            yield return Beside(Math.Sign((uy * inward.X) - (ux * inward.Y)), Math.Min(28, end.DistanceTo(next) / 3));
+            yield break;
         }
 
-        var aside = 4 + (Math.Abs(uy) * halfWide) + (Math.Abs(ux) * halfHigh);
-        var back = Math.Min(shared ? 26 : 8, length / 3);
-        foreach (var side in (int[])[1, -1])
-        {
-            yield return new Label(id, new Pixel(end.X - (back * ux) - (side * aside * uy), end.Y - (back * uy) + (side * aside * ux) + halfHigh));
-        }
+        var beyond = 4 + (Math.Abs(ux) * halfWide) + (Math.Abs(uy) * halfHigh);
+        yield return new Label(id, new Pixel(end.X + (beyond * ux), end.Y + (beyond * uy) + halfHigh));
+        yield return Beside(1, Math.Min(8, end.DistanceTo(next) / 3));
+        yield return Beside(-1, Math.Min(8, end.DistanceTo(next) / 3));
+
+        Label Beside(int side, double back)
+            => new(id, new Pixel(end.X - (back * ux) - (side * aside * uy), end.Y - (back * uy) + (side * aside * ux) + halfHigh));
+    }
+
+    // Places where ends of more than one line meet, with the sum of the directions in which the lines leave.
+    private static Dictionary<(int, int), (double X, double Y)> Meetings(IEnumerable<Drawn> all) => all
+        .Where(drawn => !drawn.Transect.IsPoint)
+        .SelectMany(drawn => new[] { (At: drawn.Start, Next: drawn.Pieces[0][1]), (At: drawn.End, Next: drawn.Pieces[^1][^2]) })
+        .GroupBy(end => Rounded(end.At), end => Direction(end.At, end.Next))
+        .Where(group => group.Count() > 1)
+        .ToDictionary(group => group.Key, group => (group.Sum(way => way.X), group.Sum(way => way.Y)));
+
+    private static (double X, double Y) Direction(Pixel from, Pixel to)
+    {
+        var length = Math.Max(from.DistanceTo(to), 1e-9);
+        return ((to.X - from.X) / length, (to.Y - from.Y) / length);
     }
 
     private sealed record Drawn(Layout Layout, Transect Transect, Pixel[][] Pieces)

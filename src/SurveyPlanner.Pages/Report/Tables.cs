@@ -14,23 +14,46 @@ internal static class Tables
         "Layout by stratum",
         [
             new("Stratum", false), new("Kind", false), new("Area, km²"), new("Bearing, ° true"), new("Spacing, m"), new("Half-width or radius, m"),
-            new("Transects"), new("Length, km"), new("Expected length, km"), new("Expected number"),
+            new("Edge", false), new("Transects"), new("Length, km"),
         ],
         [.. plan.Strata.Select(stratum => LayoutRow(stratum.Stratum, stratum.Layout))]);
 
     private static string[] LayoutRow(Stratum stratum, Layout layout) =>
     [
         stratum.Name,
-        Sentences.Word(layout.Design.Kind),
+        Sentences.Kind(layout.Design),
         Figures.Three(stratum.AreaKm2),
         Figures.Bearing(layout.BearingDegrees),
         Figures.Three(layout.SpacingMetres),
         Figures.Three(layout.Design.HalfWidthMetres),
+        Sentences.Word(layout.Design.Edge),
         Figures.Count(layout.Transects.Length),
         layout.Design.IsPoints ? Figures.None : Figures.Three(layout.TotalLengthMetres / 1000),
-        Figures.Three(layout.ExpectedLengthMetres / 1000),
-        Figures.Three(layout.ExpectedCount),
     ];
+
+    public static Table OfSpread(SurveyPlan plan) => new(
+        "Effort over all draws of this design",
+        [
+            new("Stratum", false), new("Counted in", false), new("This draw"), new("Expected"), new("Standard deviation"), new("Least"), new("Greatest"),
+            new("Expected transects"),
+        ],
+        [.. plan.Strata.Select(stratum => SpreadRow(stratum.Layout))]);
+
+    private static string[] SpreadRow(Layout layout)
+    {
+        var (unit, drawn) = layout.Design.IsPoints ? (1, layout.Transects.Length) : (1000, layout.TotalLengthMetres);
+        return
+        [
+            layout.Stratum,
+            layout.Design.IsPoints ? "points" : "km of line",
+            Figures.Three(drawn / unit),
+            Figures.Three((layout.ExpectedLengthMetres ?? layout.ExpectedCount) / unit),
+            Figures.Three(layout.Spread.StandardDeviation / unit),
+            Figures.Three(layout.Spread.Smallest / unit),
+            Figures.Three(layout.Spread.Largest / unit),
+            Figures.Three(layout.ExpectedCount),
+        ];
+    }
 
     public static Table OfCoverage(IEnumerable<StratumCoverage> coverages) => new(
         "Coverage probability by stratum",
@@ -122,10 +145,10 @@ internal static class Tables
                 Figures.Three(stratum.LongAxisKm),
                 Figures.Three(stratum.ShortAxisKm),
                 Figures.Bearing(stratum.LongAxisBearing),
-                stratum.ConvergenceDegrees.ToString("+0.0;-0.0;0.0", CultureInfo.InvariantCulture),
+                stratum.ConvergenceDegrees.ToString("+0.0;−0.0;0.0", CultureInfo.InvariantCulture),
             ]),
         ]);
 
     private static string PartsPerMillion(Stratum stratum)
-        => Figures.Fixed(((stratum.AreaKm2 / stratum.GeodesicAreaKm2) - 1) * 1e6, 3).Replace("-0.000", "0.000", StringComparison.Ordinal);
+        => (((stratum.AreaKm2 / stratum.GeodesicAreaKm2) - 1) * 1e6).ToString("0.000;−0.000;0.000", CultureInfo.InvariantCulture);
 }

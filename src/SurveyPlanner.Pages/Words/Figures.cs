@@ -24,20 +24,14 @@ internal static class Figures
             return "0";
         }
 
-        var decimals = DecimalsForThree(v);
-        if (decimals < 0)
-        {
-            var unit = Math.Pow(10, -decimals);
-            return Grouped(Math.Round(v / unit) * unit);
-        }
-
         // 9.996 rounds to 10.0, which then needs one decimal fewer.
-        var rounded = Math.Round(v, Math.Min(decimals, 15));
-        return rounded == 0 ? "0" : rounded.ToString("F" + Math.Max(0, DecimalsForThree(rounded)), CultureInfo.InvariantCulture);
+        var rounded = RoundTo(v, DecimalsForThree(v));
+        var decimals = DecimalsForThree(rounded);
+        return decimals <= 0 ? Grouped(rounded) : rounded.ToString("F" + decimals, CultureInfo.InvariantCulture);
     }
 
     /// <summary>A share of one as a percentage with three significant figures and its sign.</summary>
-    public static string Percent(double? share) => share is { } s && double.IsFinite(s) ? Three(s * 100) + " %" : None;
+    public static string Percent(double? share) => share is { } s && double.IsFinite(s) ? Three(s * 100) + "\u00a0%" : None;
 
     /// <summary>A count, exact, thousands set off by a narrow space.</summary>
     public static string Count(long value) => Grouped(value);
@@ -58,10 +52,13 @@ internal static class Figures
     public static string Fixed(double value, int decimals) => value.ToString("F" + decimals, CultureInfo.InvariantCulture);
 
     /// <summary>A whole number of metres below one kilometre, kilometres above, three significant figures, with its unit.</summary>
-    public static string Distance(double metres) => Math.Abs(metres) < 1000 ? Three(metres) + " m" : Three(metres / 1000) + " km";
+    public static string Distance(double metres) => Math.Abs(metres) < 1000 ? Three(metres) + "\u00a0m" : Three(metres / 1000) + "\u00a0km";
 
     /// <summary>"1 line", "24 lines".</summary>
-    public static string Counted(long count, string one, string many) => $"{Count(count)} {(count == 1 ? one : many)}";
+    public static string Counted(long count, string one, string many) => $"{Count(count)}\u00a0{(count == 1 ? one : many)}";
+
+    private static double RoundTo(double v, int decimals)
+        => decimals >= 0 ? Math.Round(v, Math.Min(decimals, 15)) : Math.Round(v / Math.Pow(10, -decimals)) * Math.Pow(10, -decimals);
 
     private static int DecimalsForThree(double v) => 2 - (int)Math.Floor(Math.Log10(Math.Abs(v)));
 

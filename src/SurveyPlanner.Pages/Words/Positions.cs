@@ -37,6 +37,6 @@ internal static class Positions
         var units = (long)Math.Round(Math.Abs(degrees) * perDegree);
         var whole = (units / perDegree).ToString("D" + width, CultureInfo.InvariantCulture);
         var minutes = (units % perDegree / Math.Pow(10, MinuteDecimals)).ToString("00.000", CultureInfo.InvariantCulture);
-        return $"{whole}° {minutes}′ {(degrees < 0 ? negative : positive)}";
+        return $"{whole}°{minutes}′ {(degrees < 0 ? negative : positive)}";
     }
 }

@@ -16,29 +16,46 @@ internal static class Sentences
         return string.Concat(name.Select((c, i) => i > 0 && char.IsUpper(c) ? "-" + char.ToLowerInvariant(c) : char.ToLowerInvariant(c).ToString()));
     }
 
+    /// <summary>A layout kind with what tells it from others of its kind: <c>zigzag, equal-spaced</c>.</summary>
+    public static string Kind(LayoutDesign design) => design.Kind switch
+    {
+        LayoutKind.Zigzag => $"{Word(design.Kind)}, {Word(design.Turning)}",
+        LayoutKind.PointGrid => $"{Word(design.Kind)}, {Word(design.Grid)}",
+        _ => Word(design.Kind),
+    };
+
     public static string Seed(SurveyPlan plan) => "seed " + plan.Design.Seed.ToString(CultureInfo.InvariantCulture);
 
     /// <summary>The answer of the whole report.</summary>
     public static string OfPlan(SurveyPlan plan)
     {
         var coverages = plan.Strata.Select(stratum => stratum.Coverage).OfType<StratumCoverage>().ToArray();
-        var sentence = Effort(plan) + $" survey {Figures.Three(plan.Region.AreaKm2)} km²";
+        var sentence = Effort(plan) + $" survey {Figures.Three(plan.Region.AreaKm2)} km²";
         if (coverages.Length == 0)
         {
             return sentence + ".";
         }
 
         var (min, max) = (coverages.Min(c => c.Min), coverages.Max(c => c.Max));
-        return min > 0
-            ? $"{sentence}; every place has a chance of being covered, between {Figures.Three(min)} and {Figures.Three(max)}."
-            : $"{sentence}, but some places can never be covered: no estimate from this survey speaks for them.";
+        if (min > 0)
+        {
+            return $"{sentence}; every place has a chance of being covered, between {Figures.Three(min)} and {Figures.Three(max)}.";
+        }
+
+        return IsCertain(coverages)
+            ? $"{sentence}, but some places can never be covered: no estimate from this survey speaks for them."
+            : $"{sentence}; some places were covered by none of the simulated draws, so that their coverage is not known to be above 0.";
     }
+
+    // A closed form knows that a place can never be covered; a simulation only that it never saw it.
+    private static bool IsCertain(IEnumerable<StratumCoverage> coverages)
+        => coverages.SelectMany(coverage => coverage.Cells).Any(cell => cell.Exact <= 0);
 
     /// <summary>What a region is.</summary>
     public static string OfRegion(Region region)
     {
         var (parts, holes) = (region.Strata.Sum(stratum => stratum.Shape.PartCount), region.Strata.Sum(stratum => stratum.Shape.HoleCount));
-        return $"The region has {Figures.Three(region.AreaKm2)} km² in {Figures.Counted(region.Strata.Length, "stratum", "strata")}, "
+        return $"The region has {Figures.Three(region.AreaKm2)} km² in {Figures.Counted(region.Strata.Length, "stratum", "strata")}, "
             + $"{Figures.Counted(parts, "part", "parts")} and {Figures.Counted(holes, "hole", "holes")}, round {Positions.Rough(region.Projection.Centre)}.";
     }
 
@@ -46,7 +63,7 @@ internal static class Sentences
     public static string OfMap(SurveyPlan plan)
     {
         var strata = plan.Strata.Select(stratum =>
-            $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Word(stratum.Layout.Design.Kind)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
+            $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
         return $"{OfRegion(plan.Region)} {string.Join("; ", strata)}. The table of transects has their positions.";
     }
 
@@ -58,13 +75,28 @@ internal static class Sentences
     /// <summary>What the map of coverage shows.</summary>
     public static string OfCoverage(IReadOnlyCollection<StratumCoverage> coverages, IReadOnlyList<CoverageClass> classes)
     {
-        var even = classes.FirstOrDefault(one => one.Name == "0.9–1.1")?.Share ?? 0;
+        var even = classes.First(one => one.Index == CoverageClasses.AsPlanned).Share;
         var never = classes.FirstOrDefault(one => one.Index == CoverageClasses.Never);
         var lowest = coverages.MinBy(coverage => coverage.Nominal > 0 ? coverage.Min / coverage.Nominal : double.MaxValue)!;
         var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + (lowest.Cells.IsEmpty ? "" : ", near " + Positions.Rough(lowest.Cells.MinBy(cell => cell.Best)!.Position));
         return $"{Figures.Percent(even)} of the area has a coverage probability within 10 % of nominal. "
             + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}{where}. "
-            + (never is null ? "No place is without coverage." : $"{Figures.Percent(never.Share)} of the area can never be covered (hatched).");
+            + (never is null ? "No place is without coverage."
+                : $"{Figures.Percent(never.Share)} of the area {(IsCertain(coverages) ? "can never be covered" : "was covered by none of the simulated draws")} (hatched).");
+    }
+
+    /// <summary>How much of what a map of simulated coverage shows is the simulation's own noise; null where all coverage is exact.</summary>
+    public static string? OfNoise(IReadOnlyCollection<StratumCoverage> coverages)
+    {
+        var simulated = coverages.Where(coverage => coverage.Cells.Any(cell => cell.Exact is null) && coverage.Nominal > 0).ToArray();
+        if (simulated.Length == 0)
+        {
+            return null;
+        }
+
+        var noise = simulated.Max(coverage => coverage.Cells.Average(cell => cell.StandardError) / coverage.Nominal);
+        return $"Simulated coverage has a standard error of about {Figures.Percent(noise)} of nominal in a cell: differences of that size between cells are noise, "
+            + "and the least and greatest figures lie too far out by some of it. More replicates in [coverage] bring it down.";
     }
 
     private static string Effort(SurveyPlan plan)
@@ -75,7 +107,7 @@ internal static class Sentences
         if (lines.Length > 0)
         {
             var kilometres = lines.Sum(stratum => stratum.Layout.TotalLengthMetres) / 1000;
-            texts.Add($"{Figures.Counted(lines.Sum(stratum => stratum.Layout.Transects.Length), "line", "lines")} with {Figures.Three(kilometres)} km in all");
+            texts.Add($"{Figures.Counted(lines.Sum(stratum => stratum.Layout.Transects.Length), "line", "lines")} with {Figures.Three(kilometres)} km in all");
         }
 
         if (points > 0 || lines.Length == 0)
@@ -88,5 +120,5 @@ internal static class Sentences
 
     private static string Transects(Layout layout) => layout.Design.IsPoints
         ? Figures.Counted(layout.Transects.Length, "point", "points")
-        : $"{Figures.Counted(layout.Transects.Length, "line", "lines")} of {Figures.Three(layout.TotalLengthMetres / 1000)} km in all";
+        : $"{Figures.Counted(layout.Transects.Length, "line", "lines")} of {Figures.Three(layout.TotalLengthMetres / 1000)} km in all";
 }
