@@ -46,7 +46,7 @@ public sealed class InputException : Exception
     }
 
     public InputException(params Problem[] problems)
-        : base(string.Join(Environment.NewLine, problems.Select(problem => problem.ToString())))
+        : base(string.Join('\n', problems.Select(problem => problem.ToString())))
         => Problems = problems;
 
     public InputException(string message)
