@@ -1,7 +1,7 @@
 using NetTopologySuite.Geometries;
 using NetTopologySuite.Geometries.Prepared;
-using NetTopologySuite.Operation.OverlayNG;
 using NetTopologySuite.Operation.Overlay;
+using NetTopologySuite.Operation.OverlayNG;
 using NetTopologySuite.Operation.Union;
 using NetTopologySuite.Operation.Valid;
 

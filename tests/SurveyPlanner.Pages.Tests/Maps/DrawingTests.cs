@@ -1,8 +1,8 @@
 using System.Globalization;
 using System.Text.RegularExpressions;
 using CsCheck;
-using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Coverage;
+using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Pages.Maps;
 using SurveyPlanner.Pages.Tests.Fixtures;
 using SurveyPlanner.Regions;

@@ -1,7 +1,7 @@
 using CsCheck;
-using SurveyPlanner.Files.Tests;
 using NetTopologySuite.Geometries;
 using NetTopologySuite.Simplify;
+using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Pages.Maps;
 
 namespace SurveyPlanner.Pages.Tests.Maps;

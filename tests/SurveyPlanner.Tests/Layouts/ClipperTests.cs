@@ -11,10 +11,13 @@ public class ClipperTests
 {
     private const string Seed = "0000KOIPe036";
 
-    /// <summary>Second method: NetTopologySuite's OverlayNG on the same line and polygons.</summary>
+    /// <summary>
+    /// Second method: NetTopologySuite's OverlayNG on the same line and polygons. Lines keep off the bounding box, where one may run along an
+    /// edge and length is a matter of the last digit.
+    /// </summary>
     [Fact]
     public void Any_line_is_cut_as_general_overlay_cuts_it() =>
-        Gen.Select(RandomShapes.Strata, Gen.Double[0, 1].Array[4]).Sample(
+        Gen.Select(RandomShapes.Strata, Gen.Double[0.001, 0.999].Array[4]).Sample(
             (stratum, ends) =>
             {
                 var shape = stratum.Shape;
