@@ -27,8 +27,18 @@ internal sealed class BoundaryAssembly
     {
         log.Add(raw.Notices);
         var (system, origin) = ChosenSystem.Of(raw, source, options);
-        CoordinateCheck.Demand(raw, system, source);
-        return new BoundaryAssembly(source, log, system, origin).Assemble(raw.Features);
+        var inDegrees = system.DegreesPerUnit == 1 ? raw : InDegrees(raw, system.DegreesPerUnit);
+        CoordinateCheck.Demand(inDegrees, system, source);
+        return new BoundaryAssembly(source, log, system, origin).Assemble(inDegrees.Features);
+    }
+
+    private static RawBoundary InDegrees(RawBoundary raw, double degreesPerUnit)
+    {
+        return raw with { Features = [.. raw.Features.Select(feature => feature with { Polygons = [.. feature.Polygons.Select(Turn)] })] };
+
+        RawPolygon Turn(RawPolygon polygon) => new(TurnRing(polygon.Shell), [.. polygon.Holes.Select(TurnRing)]);
+
+        RawRing TurnRing(RawRing ring) => ring with { Points = [.. ring.Points.Select(point => new FilePoint(point.X * degreesPerUnit, point.Y * degreesPerUnit))] };
     }
 
     private Boundary Assemble(IReadOnlyList<RawFeature> raw)
@@ -153,9 +163,9 @@ internal sealed class BoundaryAssembly
         var parts = features.SelectMany(feature => feature.Parts).ToList();
         var perimeter = parts.Sum(part => part.Holes.Prepend(part.Shell).Sum(outline => _frame.Perimeter(outline.Points)));
 
-        // An edge of length l that bends by h cuts off 2/3 h·l: with this h all edges together cut off less than half a millionth, even if all
-        // bend the same way. Never above half a metre, so that no edge strays by a metre.
-        return Math.Clamp(0.75e-6 * parts.Sum(_frame.Area) / perimeter, 0.0005, 0.5);
+        // An edge of length l that bends by h cuts off 2/3 h·l: with this h all edges together cut off less than 2e-7 of the area, even if all
+        // bend the same way, which leaves room for the core to do the same under the promised 1e-6. Never above a quarter of a metre.
+        return Math.Clamp(2e-7 * parts.Sum(_frame.Area) / perimeter, 0.0005, 0.25);
     }
 
     private Boundary Finish(List<WorkFeature> features)
@@ -169,7 +179,7 @@ internal sealed class BoundaryAssembly
         return new Boundary(
             _source,
             [.. inDegrees.Select(feature => new BoundaryFeature(feature.Raw.Number, feature.Raw.Attributes, [.. feature.Parts.Select(ToPolygon)]))],
-            $"{_system.Name}, from {_systemOrigin}",
+            $"{_system.Name}, from {_systemOrigin}" + (_system.DatumShift is { } shift ? $"; {shift}" : ""),
             _log.ToNotices());
     }
 

@@ -8,7 +8,7 @@ namespace SurveyPlanner.Files.Boundaries;
 public static class BoundaryReader
 {
     /// <summary>
-    /// Reads a boundary file.
+    /// Reads a boundary file: GeoJSON, shapefile (.shp, folder or zip), GeoPackage, KML, KMZ, or a CSV list of vertices.
     /// </summary>
     /// <param name="path">The file, or the folder of a shapefile.</param>
     /// <param name="options">What the user says that the file does not.</param>
@@ -19,6 +19,7 @@ public static class BoundaryReader
     /// </returns>
     /// <exception cref="InputException">The file cannot be understood without a guess, or is missing: one plain sentence each.</exception>
     /// <exception cref="IOException">The file is there but cannot be read.</exception>
+    /// <exception cref="UnauthorizedAccessException">The file is there but may not be read.</exception>
     /// <remarks>
     /// Accuracy: edges that are straight in the file's own projection stray by less than 1 m and change the area by less than 1e-6.
     /// Cost is bounded: at most 300 MB and 2 million vertices.
@@ -26,14 +27,41 @@ public static class BoundaryReader
     public static Boundary Read(string path, BoundaryOptions? options = null)
     {
         options ??= BoundaryOptions.Default;
-        var source = options.Name ?? Path.GetFileName(path);
-        if (!File.Exists(path) && !Directory.Exists(path))
+        var source = options.Name ?? Path.GetFileName(Path.TrimEndingDirectorySeparator(path));
+        var log = new RepairLog();
+        if (Directory.Exists(path))
+        {
+            return ReadShapefile(ShapefileFolder.Find(path, source, options), source, options, log);
+        }
+
+        if (!File.Exists(path))
         {
             throw FileBytes.Refusal(source, "there is no such boundary file; correct its name or path");
         }
 
-        var log = new RepairLog();
-        var raw = GeoJsonBoundary.Read(FileBytes.Read(path, source), source, log);
+        var bytes = FileBytes.Read(path, source);
+        var format = FormatOf.Find(bytes, path, source);
+        if (format == BoundaryFormat.Shapefile)
+        {
+            return ReadShapefile(path, source, options, log);
+        }
+
+        if (options.Layer is not null && format is BoundaryFormat.GeoJson or BoundaryFormat.Csv)
+        {
+            throw FileBytes.Refusal(source, "the file has no layers; leave layer out", "region.layer");
+        }
+
+        var raw = format switch
+        {
+            BoundaryFormat.GeoJson => GeoJsonBoundary.Read(bytes, source, log),
+            BoundaryFormat.Zip => ZipBoundary.Read(bytes, source, options, log),
+            BoundaryFormat.GeoPackage => GeoPackageBoundary.Read(path, bytes, source, options, log),
+            BoundaryFormat.Kml => KmlBoundary.Read(bytes, source, log, options.Layer),
+            _ => CsvBoundary.Read(bytes, source, log),
+        };
         return BoundaryAssembly.Assemble(raw, source, options, log);
     }
+
+    private static Boundary ReadShapefile(string shp, string source, BoundaryOptions options, RepairLog log)
+        => BoundaryAssembly.Assemble(ShapefileBoundary.Read(ShapefileFolder.Parts(shp, source), source, log), source, options, log);
 }

@@ -8,6 +8,7 @@ internal static class Wording
 {
     public static string Length(double metres) => metres switch
     {
+        double.PositiveInfinity => "a world",
         >= 1000 => Invariant($"{metres / 1000:0.##} km"),
         >= 1 => Invariant($"{metres:0.#} m"),
         _ => Invariant($"{metres * 1000:0.##} mm"),

@@ -14,12 +14,15 @@ public abstract class CoordinateSystem
     /// <summary>Metres in one unit of a plane system; 1 for a geographic one.</summary>
     public virtual double MetresPerUnit => 1;
 
+    /// <summary>Degrees in one unit of a geographic system, which is nearly always 1.</summary>
+    public virtual double DegreesPerUnit => 1;
+
     /// <summary>How the datum is brought to WGS 84 and how well, for the user to read; null when it is WGS 84.</summary>
     public virtual string? DatumShift => null;
 
     /// <summary>True when coordinates are WGS 84 degrees already.</summary>
     public virtual bool IsWgs84Degrees => false;
 
-    /// <summary>To WGS 84 degrees. NaN when the point lies outside what the system can hold.</summary>
+    /// <summary>To WGS 84 degrees, from the file's units, or from degrees if the system is geographic. NaN when the point lies outside what the system can hold.</summary>
     public abstract LonLat ToWgs84(double x, double y);
 }

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Text.RegularExpressions;
 
 namespace SurveyPlanner.Files.CoordinateSystems;
@@ -20,17 +19,14 @@ internal static partial class SystemNames
 
         return authority switch
         {
-            "OGC" when code is "CRS84" or "84" => Wgs84Degrees.Instance,
-            "EPSG" or "" when int.TryParse(code, NumberStyles.None, CultureInfo.InvariantCulture, out var number) => FindEpsg(number),
+            "OGC" or "" when code is "CRS84" or "84" or "WGS84" => Wgs84Degrees.Instance,
+            "OGC" when code == "CRS83" => Register.Find("4269"),
+            "EPSG" => Register.Find(code),
+            "" => Register.Find(code) ?? Register.Find("ESRI:" + code),
+            "ESRI" => Register.Find("ESRI:" + code) ?? Register.Find(code),
             _ => null,
         };
     }
-
-    private static Wgs84Degrees? FindEpsg(int code) => code switch
-    {
-        4326 or 4979 => Wgs84Degrees.Instance,
-        _ => null,
-    };
 
     private static (string Authority, string Code)? Split(string name)
     {
