@@ -57,7 +57,7 @@ public partial class ReportTests
         // An SVG file must also be XML: the parser refuses control characters and loose markup.
         XmlDocument svg = new() { XmlResolver = null };
         svg.LoadXml(MapRenderer.RenderSvg(plan, context));
-        Assert.Equal("svg", svg.DocumentElement!.LocalName);
+        Assert.Equal(("svg", "http://www.w3.org/2000/svg"), (svg.DocumentElement!.LocalName, svg.DocumentElement.NamespaceURI));
     }
 
     [Fact]

@@ -39,27 +39,24 @@ internal static class Tables
         ],
         [.. plan.Strata.Select(stratum => SpreadRow(stratum.Layout))]);
 
-    private static string[] SpreadRow(Layout layout)
-    {
-        var (unit, drawn) = layout.Design.IsPoints ? (1, layout.Transects.Length) : (1000, layout.TotalLengthMetres);
-        return
+    private static string[] SpreadRow(Layout layout) => layout.Design.IsPoints
+        ?
         [
-            layout.Stratum,
-            layout.Design.IsPoints ? "points" : "km of line",
-            Figures.Three(drawn / unit),
-            Figures.Three((layout.ExpectedLengthMetres ?? layout.ExpectedCount) / unit),
-            Figures.Three(layout.Spread.StandardDeviation / unit),
-            Figures.Three(layout.Spread.Smallest / unit),
-            Figures.Three(layout.Spread.Largest / unit),
+            layout.Stratum, "points", Figures.Count(layout.Transects.Length), Figures.Three(layout.ExpectedCount), Figures.Three(layout.Spread.StandardDeviation),
+            Figures.Count((long)layout.Spread.Smallest), Figures.Count((long)layout.Spread.Largest), Figures.Three(layout.ExpectedCount),
+        ]
+        :
+        [
+            layout.Stratum, "km of line", Figures.Three(layout.TotalLengthMetres / 1000), Figures.Three(layout.ExpectedLengthMetres / 1000),
+            Figures.Three(layout.Spread.StandardDeviation / 1000), Figures.Three(layout.Spread.Smallest / 1000), Figures.Three(layout.Spread.Largest / 1000),
             Figures.Three(layout.ExpectedCount),
         ];
-    }
 
     public static Table OfCoverage(IEnumerable<StratumCoverage> coverages) => new(
         "Coverage probability by stratum",
         [
             new("Stratum", false), new("Nominal"), new("Mean"), new("Least"), new("Greatest"), new("CV, %"), new("Cells"), new("Simulated draws"),
-            new("Simulated mean"), new("Largest |z|, simulated against exact"),
+            new("Simulated mean"), new("Largest |z|"),
         ],
         [.. coverages.Select(CoverageRow)]);
 

@@ -9,6 +9,9 @@ namespace SurveyPlanner.Pages.Words;
 /// <summary>The sentences that answer first: what the plan comes to, what a picture shows.</summary>
 internal static class Sentences
 {
+    // More strata than this are a list, not a sentence: the tables have them.
+    private const int MostStrata = 4;
+
     /// <summary>The plan file's word for a layout kind and its like: lower case with hyphens.</summary>
     public static string Word(Enum value)
     {
@@ -30,7 +33,7 @@ internal static class Sentences
     public static string OfPlan(SurveyPlan plan)
     {
         var coverages = plan.Strata.Select(stratum => stratum.Coverage).OfType<StratumCoverage>().ToArray();
-        var sentence = Effort(plan) + $" survey {Figures.Three(plan.Region.AreaKm2)} km²";
+        var sentence = Effort(plan) + $" survey a region of {Figures.Three(plan.Region.AreaKm2)} km²";
         if (coverages.Length == 0)
         {
             return sentence + ".";
@@ -45,6 +48,18 @@ internal static class Sentences
         return IsCertain(coverages)
             ? $"{sentence}, but some places can never be covered: no estimate from this survey speaks for them."
             : $"{sentence}; some places were covered by none of the simulated draws, so that their coverage is not known to be above 0.";
+    }
+
+    /// <summary>The precision to expect, with the target beside it; null where nothing is known of it.</summary>
+    public static string? OfPrecision(SurveyPlan plan)
+    {
+        if (plan.Delivered is not { } delivered)
+        {
+            return null;
+        }
+
+        var target = plan.Effort?.Required is { } required ? $"; the target is {Figures.Percent(required.TargetCv)}" : "";
+        return $"It is expected to estimate density with a coefficient of variation of {Figures.Percent(delivered.Cv)}{target}.";
     }
 
     // A closed form knows that a place can never be covered; a simulation only that it never saw it.
@@ -62,15 +77,20 @@ internal static class Sentences
     /// <summary>What the map of transects shows.</summary>
     public static string OfMap(SurveyPlan plan)
     {
-        var strata = plan.Strata.Select(stratum =>
-            $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true");
-        return $"{OfRegion(plan.Region)} {string.Join("; ", strata)}. The table of transects has their positions.";
+        var strata = plan.Strata.Length > MostStrata
+            ? $"Its layout has {Effort(plan).TrimEnd(',')}; the table of the layout has the strata one by one"
+            : string.Join("; ", plan.Strata.Select(stratum =>
+                $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true"));
+        return $"{OfRegion(plan.Region)} {strata}. The table of transects has their positions.";
     }
 
     /// <summary>How much coverage differs, by stratum.</summary>
-    public static string OfCoverageRange(IReadOnlyCollection<StratumCoverage> coverages) => string.Join(" ", coverages.Select(coverage =>
-        $"{(coverages.Count == 1 ? "Coverage" : coverage.Stratum + ": coverage")} averages {Figures.Three(coverage.Mean)} and runs from {Figures.Three(coverage.Min)} "
-        + $"to {Figures.Three(coverage.Max)}; its coefficient of variation over the area is {Figures.Percent(coverage.Cv)}."));
+    public static string OfCoverageRange(IReadOnlyCollection<StratumCoverage> coverages) => coverages.Count > MostStrata
+        ? $"Coverage runs from {Figures.Three(coverages.Min(c => c.Min))} to {Figures.Three(coverages.Max(c => c.Max))} over {coverages.Count} strata; "
+            + $"its coefficient of variation within a stratum is at most {Figures.Percent(coverages.Max(c => c.Cv))}."
+        : string.Join(" ", coverages.Select(coverage =>
+            $"{(coverages.Count == 1 ? "Coverage" : coverage.Stratum + ": coverage")} averages {Figures.Three(coverage.Mean)} and runs from {Figures.Three(coverage.Min)} "
+            + $"to {Figures.Three(coverage.Max)}; its coefficient of variation over the area is {Figures.Percent(coverage.Cv)}."));
 
     /// <summary>What the map of coverage shows.</summary>
     public static string OfCoverage(IReadOnlyCollection<StratumCoverage> coverages, IReadOnlyList<CoverageClass> classes)
@@ -107,7 +127,7 @@ internal static class Sentences
         if (lines.Length > 0)
         {
             var kilometres = lines.Sum(stratum => stratum.Layout.TotalLengthMetres) / 1000;
-            texts.Add($"{Figures.Counted(lines.Sum(stratum => stratum.Layout.Transects.Length), "line", "lines")} with {Figures.Three(kilometres)} km in all");
+            texts.Add($"{Figures.Counted(lines.Sum(stratum => stratum.Layout.Transects.Length), "line", "lines")}, {Figures.Three(kilometres)} km in all,");
         }
 
         if (points > 0 || lines.Length == 0)
