@@ -3,18 +3,16 @@ using SurveyPlanner.Files.Boundaries;
 
 namespace SurveyPlanner.Files;
 
-/// <summary>Text files of a size that a person writes: strictly UTF-8, with or without a byte-order mark.</summary>
+/// <summary>Text files: strictly UTF-8, with or without a byte-order mark.</summary>
 internal static class TextFile
 {
-    /// <summary>A plan or a table that is larger is something else under the wrong name.</summary>
-    private const long MostBytes = 64L << 20;
-
     private static readonly UTF8Encoding Strict = new(encoderShouldEmitUTF8Identifier: false, throwOnInvalidBytes: true);
 
     /// <param name="path">The file.</param>
     /// <param name="noun">What it should be, for messages: <c>plan file</c>.</param>
+    /// <param name="mostKilobytes">What is larger is something else under the wrong name.</param>
     /// <exception cref="InputException">No such file, too large, or not UTF-8 (with the line).</exception>
-    public static string Read(string path, string noun)
+    public static string Read(string path, string noun, int mostKilobytes)
     {
         if (Directory.Exists(path))
         {
@@ -26,9 +24,9 @@ internal static class TextFile
             throw new InputException(new Problem($"there is no {noun} of this name", path));
         }
 
-        if (new FileInfo(path).Length > MostBytes)
+        if (new FileInfo(path).Length > mostKilobytes * 1024L)
         {
-            throw new InputException(new Problem($"is larger than {MostBytes >> 20} MB: no {noun} is so large", path));
+            throw new InputException(new Problem($"is larger than {mostKilobytes} kB: no {noun} is so large", path));
         }
 
         return Decode(File.ReadAllBytes(path), path);

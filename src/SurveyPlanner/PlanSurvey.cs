@@ -40,7 +40,7 @@ public static class PlanSurvey
         var layouts = LayoutDrawer.Draw(generators, region.Projection, design.Seed);
         var coverage = ComputeCoverage(design, region, generators, options);
         var strata = region.Strata.Select((stratum, i) => new StratumPlan(stratum, layouts[i], coverage[i]));
-        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, layouts));
+        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, inputs.Pilot, layouts));
     }
 
     /// <summary>The plan without coverage: region, effort and the drawn layout.</summary>
@@ -50,7 +50,7 @@ public static class PlanSurvey
         var effort = PlanEffort(design, region, inputs.Pilot);
         var layouts = LayoutDrawer.Draw(Prepare(design, region, effort), region.Projection, design.Seed);
         var strata = region.Strata.Select((stratum, i) => new StratumPlan(stratum, layouts[i], Coverage: null));
-        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, layouts));
+        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, inputs.Pilot, layouts));
     }
 
     /// <summary>The region alone, as the boundary and the plan describe it.</summary>
@@ -126,6 +126,6 @@ public static class PlanSurvey
         }
     }
 
-    private static ImmutableArray<Notice> Notices(Region region, ImmutableArray<Layout> layouts)
-        => [.. region.Notices, .. layouts.SelectMany(layout => layout.Notices)];
+    private static ImmutableArray<Notice> Notices(Region region, PilotTable? pilot, ImmutableArray<Layout> layouts)
+        => [.. region.Notices, .. pilot?.Notices ?? [], .. layouts.SelectMany(layout => layout.Notices)];
 }

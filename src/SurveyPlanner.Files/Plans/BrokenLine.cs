@@ -37,7 +37,7 @@ internal static partial class BrokenLine
         var shown = Quoted.Plain(key);
         if (mark != "=")
         {
-            return ($"write {shown} = …: a key and its value are joined by one =", $"{key} = {value}");
+            return ($"write {shown} = {Quoted.Plain(value)}: a key and its value are joined by one =", $"{key} = {value}");
         }
 
         var (complaint, mended) = value.Length == 0

@@ -36,7 +36,7 @@ internal sealed class LayoutLayers(List<Problem> problems)
             }
         }
 
-        ReportContradictions(own with { Entries = entries.ToImmutable() });
+        ReportContradictions(own with { Entries = entries.ToImmutable() }, kind);
         if (inherited is not null)
         {
             Inherit(inherited, own, kind, entries);
@@ -75,9 +75,11 @@ internal sealed class LayoutLayers(List<Problem> problems)
         }
     }
 
-    private void ReportContradictions(PlanTable table)
+    private void ReportContradictions(PlanTable table, LayoutKind? kind)
     {
-        foreach (var group in table.Entries.Where(pair => pair.Key.Group != KeyGroup.None).GroupBy(pair => pair.Key.Group))
+        // One that does not belong to the kind has been told already.
+        var answers = table.Entries.Where(pair => pair.Key.Group != KeyGroup.None && (kind is null || pair.Key.BelongsTo(kind.Value)));
+        foreach (var group in answers.GroupBy(pair => pair.Key.Group))
         {
             var ordered = group.OrderBy(pair => pair.Value.KeyPlace.Line).ThenBy(pair => pair.Value.KeyPlace.Column).ThenBy(pair => pair.Key.Name, StringComparer.Ordinal).ToArray();
             foreach (var (key, _) in ordered.Skip(1))

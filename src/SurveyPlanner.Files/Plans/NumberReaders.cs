@@ -40,16 +40,18 @@ internal class NumberReader(string takes, Func<double, bool> isAllowed) : ValueR
         return text.AsSpan().ContainsAny(".E") ? text : text + ".0";
     }
 
+    protected bool IsAllowed(double number) => isAllowed(number);
+
     /// <summary>What to say of a finite number that is not allowed.</summary>
     protected virtual string OutOfRange(double number, SettingValue value, Sample sample) => $"{value.Shown} is not {Takes}: write {sample}";
 
     private Parsed<double> InRange(double number, SettingValue value, Sample sample)
-        => isAllowed(number) ? Parsed.Ok(number) : Parsed.Bad<double>(OutOfRange(number, value, sample));
+        => IsAllowed(number) ? Parsed.Ok(number) : Parsed.Bad<double>(OutOfRange(number, value, sample));
 
     private Parsed<double> InQuotes(SettingValue.Text text, Sample sample)
     {
         var number = DecimalText.Read(text.Value);
-        if (number.IsGood && isAllowed(number.Good))
+        if (number.IsGood && IsAllowed(number.Good))
         {
             return Parsed.Bad<double>($"write {sample.With(Write(number.Good))} without quotes: it is a plain number");
         }
@@ -59,18 +61,17 @@ internal class NumberReader(string takes, Func<double, bool> isAllowed) : ValueR
 }
 
 /// <summary>A share of one: coefficients of variation, probabilities. Percent is the slip that everybody makes.</summary>
-/// <param name="noun">What it is.</param>
-/// <param name="oneIsAllowed">Whether the whole is a possible value.</param>
+/// <param name="noun">What it is, with its article.</param>
+/// <param name="range">What is allowed, in words.</param>
+/// <param name="isAllowed">What is allowed.</param>
 /// <param name="zeroAdvice">Why it cannot be 0.</param>
-internal sealed class ShareReader(string noun, bool oneIsAllowed, string zeroAdvice)
-    : NumberReader(
-        $"{noun}: a number above 0 and {(oneIsAllowed ? "at most" : "below")} 1",
-        value => value > 0 && (value < 1 || (oneIsAllowed && value == 1)))
+internal sealed class ShareReader(string noun, string range, Func<double, bool> isAllowed, string zeroAdvice = "")
+    : NumberReader($"{noun}: a number {range}", isAllowed)
 {
     protected override string OutOfRange(double number, SettingValue value, Sample sample) => number switch
     {
         0 => $"0 is no {noun[2..]} to ask for: {zeroAdvice}; write {sample}",
-        >= 2 and <= 100 => $"{value.Shown} is not {Takes}: percent meant? write {sample.With(DecimalText.Write(number / 100))}",
+        >= 2 and <= 100 when IsAllowed(number / 100) => $"{value.Shown} is not {Takes}: percent meant? write {sample.With(DecimalText.Write(number / 100))}",
         > 100 => $"{value.Shown} is not {Takes}: percent meant? even then it is more than 1, a usual one is {sample}",
         _ => base.OutOfRange(number, value, sample),
     };

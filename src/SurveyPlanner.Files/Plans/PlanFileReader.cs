@@ -5,13 +5,19 @@ namespace SurveyPlanner.Files.Plans;
 /// <summary>Reads plan files strictly. See docs/plan-file.md for the keys.</summary>
 public static class PlanFileReader
 {
+    /// <summary>A plan of a thousand strata has about 100 kB.</summary>
+    private const int MostKilobytes = 512;
+
+    /// <summary>A file with more is wrong as a whole; the others are counted, not listed.</summary>
+    private const int MostProblems = 200;
+
     /// <summary>Reads a plan file and looks whether the files it names exist.</summary>
     /// <param name="path">The plan file.</param>
     /// <param name="sets">Overrides of the command line, such as <c>layout.spacing=4 km</c>; they count more than the file.</param>
     /// <exception cref="InputException">Everything that is wrong with the file and the overrides.</exception>
     /// <exception cref="IOException">The file is there and cannot be read.</exception>
     public static PlanFile Read(string path, IEnumerable<string> sets)
-        => Understand(TextFile.Read(path, "plan file"), path, sets, path => File.Exists(path) || Directory.Exists(path));
+        => Understand(TextFile.Read(path, "plan file", MostKilobytes), path, sets, path => File.Exists(path) || Directory.Exists(path));
 
     /// <summary>Reads the text of a plan file without touching the disk: the files it names are not looked for.</summary>
     /// <param name="text">The text.</param>
@@ -62,6 +68,16 @@ public static class PlanFileReader
     }
 
     /// <summary>In the order of the file, what the command line said last.</summary>
-    private static InputException Refusal(IEnumerable<Problem> problems)
-        => new(problems.OrderBy(problem => problem.Line ?? int.MaxValue).ThenBy(problem => problem.Column ?? 0));
+    private static InputException Refusal(List<Problem> problems)
+    {
+        var ordered = problems.OrderBy(problem => problem.Line ?? int.MaxValue).ThenBy(problem => problem.Column ?? 0).ToList();
+        if (ordered.Count > MostProblems)
+        {
+            var last = ordered[MostProblems];
+            ordered[MostProblems] = last with { Message = $"and {ordered.Count - MostProblems} more problems from here on", Key = null };
+            ordered.RemoveRange(MostProblems + 1, ordered.Count - MostProblems - 1);
+        }
+
+        return new InputException(ordered);
+    }
 }

@@ -62,9 +62,9 @@ internal static class PlanKeys
     public static readonly PlanKey<long> Replicates = Add("coverage", "replicates", new WholeReader(2, 1_000_000), "1000", "Number of simulated draws of the layout.", (long)CoverageDesign.DefaultReplicates);
 
     // [precision]
-    public static readonly PlanKey<double> TargetCv = Add("precision", "target_cv", new ShareReader("a coefficient of variation", oneIsAllowed: true, "it would take endless effort"), "0.20", "The coefficient of variation of density that the decision needs.");
-    public static readonly PlanKey<double> Assurance = Add("precision", "assurance", new ShareReader("a probability", oneIsAllowed: false, "even odds are 0.5"), "0.80", "How sure to be of reaching it, given how little the pilot knows; without it the plain estimate.");
-    public static readonly PlanKey<double> B = Add("precision", "b", new NumberReader("a number above 0", value => value > 0), "3.0", "The constant b of the rule of thumb for effort, where no pilot gives it.");
+    public static readonly PlanKey<double> TargetCv = Add("precision", "target_cv", new ShareReader("a coefficient of variation", "above 0 and at most 1", value => value is > 0 and <= 1, "it would take endless effort"), "0.20", "The coefficient of variation of density that the decision needs.");
+    public static readonly PlanKey<double> Assurance = Add("precision", "assurance", new ShareReader("a probability", "from 0.5 to below 1", value => value is >= 0.5 and < 1, "even odds are 0.5"), "0.80", "How sure to be of reaching it, given how little the pilot knows; without it the plain estimate.");
+    public static readonly PlanKey<double> B = Add("precision", "b", new NumberReader("a number above 0", value => value > 0), "3.0", "The constant b of the rule of thumb for effort; without it the pilot gives it, and where there is no pilot it is 3.");
     public static readonly PlanKey<Allocation> Allocation = Add("precision", "allocation", new ChoiceReader<Allocation>(), "\"optimal\"", "How effort is shared among strata: by area, the same to each, or for the least variance (Neyman), with costs where given.", Effort.Allocation.Proportional);
     public static readonly PlanKey<long> MinLines = Add("precision", "min_lines", new WholeReader(1, 100_000), "10", "Least number of lines (or points) a stratum gets.", (long)EffortDesign.DefaultMinLines);
 
@@ -74,13 +74,13 @@ internal static class PlanKeys
     public static readonly PlanKey<GivenRate> EncounterRate = Add("pilot", "encounter_rate", Rate, "\"0.8 /km\"", "Detections per length of line (at points: \"1.5 /visit\"), where there is no table.");
     public static readonly PlanKey<EncounterRateEstimator> Estimator = Add("pilot", "estimator", new ChoiceReader<EncounterRateEstimator>(), "\"random-lines\"", "Variance estimator of the encounter rate; without it the one that suits the layout.");
     public static readonly PlanKey<double> ClusterSize = Add("pilot", "cluster_size", new NumberReader("a number from 1 on", value => value >= 1), "2.4", "Mean cluster size, where no detections give it.");
-    public static readonly PlanKey<double> ClusterSizeSd = Add("pilot", "cluster_size_sd", new NumberReader("a number from 0 on", value => value >= 0), "1.7", "Standard deviation of cluster size; without it 0.", 0.0);
+    public static readonly PlanKey<double> ClusterSizeSd = Add("pilot", "cluster_size_sd", new NumberReader("a number from 0 on", value => value >= 0), "1.7", "Standard deviation of cluster size.", 0.0);
 
     // [detection]
     public static readonly PlanKey<ImmutableArray<DetectionModel>> Models = Add("detection", "models", new ListReader<DetectionModel>(new ChoiceReader<DetectionModel>()), "[\"half-normal\", \"hazard-rate\"]", "Detection models to fit to the pilot's distances.");
     public static readonly PlanKey<double> Truncation = Add("detection", "truncation", Length, "\"250 m\"", "Distance beyond which detections are left out; without it the half-width or radius.");
-    public static readonly PlanKey<double> DetectionCv = Add("detection", "cv", new ShareReader("a coefficient of variation", oneIsAllowed: true, "leave the key out if detection adds nothing"), "0.12", "Coefficient of variation of the effective strip half-width (points: of the effective area), where it is given and not fitted.");
-    public static readonly PlanKey<double> DetectionDf = Add("detection", "df", new NumberReader("a number above 0", value => value > 0), "60.0", "Its degrees of freedom; without it as many as you like.");
+    public static readonly PlanKey<double> DetectionCv = Add("detection", "cv", new ShareReader("a coefficient of variation", "from 0 to 1", value => value is >= 0 and <= 1), "0.12", "Coefficient of variation of the effective strip half-width (points: of the effective area), where it is given and not fitted.");
+    public static readonly PlanKey<double> DetectionDf = Add("detection", "df", new NumberReader("a number above 0", value => value > 0), "60.0", "Its degrees of freedom; without it so many that they do not matter.");
     public static readonly PlanKey<double> EffectiveHalfWidth = Add("detection", "effective_half_width", Length, "\"180 m\"", "Effective strip half-width of lines, where it is given and not fitted.");
     public static readonly PlanKey<double> EffectiveRadius = Add("detection", "effective_radius", Length, "\"90 m\"", "Effective radius of points, where it is given and not fitted.");
 

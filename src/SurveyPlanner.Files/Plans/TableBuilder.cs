@@ -87,6 +87,11 @@ internal sealed class TableBuilder(List<Problem> problems)
     private void Add(Setting setting)
     {
         var segments = setting.Path.Segments;
+        if (segments.Length == 1 && setting.Value is SettingValue.Unreadable)
+        {
+            return;
+        }
+
         if (segments.Length == 1)
         {
             problems.Add(setting.KeyPlace.Problem(OutsideTables(segments[0]), setting.Path.ToString()));
@@ -107,6 +112,11 @@ internal sealed class TableBuilder(List<Problem> problems)
 
         if (PlanKeys.Find(segments[0], segments[^1]) is not { } key)
         {
+            if (setting.Value is SettingValue.Unreadable)
+            {
+                return;
+            }
+
             problems.Add(setting.KeyPlace.Problem(UnknownKey(segments[0], segments[^1]), setting.Path.ToString()));
             return;
         }

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using System.Text.Json;
 using SurveyPlanner.Files.Units;
 
 namespace SurveyPlanner.Files.Plans;
@@ -123,5 +124,5 @@ internal static class PlanWord
 {
     public static string Of<T>(T member)
         where T : struct, Enum
-        => string.Concat(member.ToString().Select((c, i) => char.IsUpper(c) ? (i > 0 ? "-" : "") + char.ToLowerInvariant(c) : c.ToString()));
+        => JsonNamingPolicy.KebabCaseLower.ConvertName(member.ToString());
 }

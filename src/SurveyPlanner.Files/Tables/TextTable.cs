@@ -22,6 +22,9 @@ internal sealed class TextTable
     /// <summary>A table with more broken rows is broken as a whole; further rows are counted, not listed.</summary>
     private const int MostRowsListed = 50;
 
+    /// <summary>A million rows.</summary>
+    private const int MostKilobytes = 64 * 1024;
+
     private readonly List<Problem> problems;
     private readonly Dictionary<Column, (int Index, string Header, double Metres)> found = [];
     private readonly HashSet<int> brokenLines = [];
@@ -49,7 +52,7 @@ internal sealed class TextTable
         var table = new TextTable(path, problems);
         try
         {
-            var rows = CsvReader.Read(TextFile.Read(path, noun), path);
+            var rows = CsvReader.Read(TextFile.Read(path, noun, MostKilobytes), path);
             if (rows.Length == 0)
             {
                 problems.Add(new Problem($"is empty: the first line of a {noun} names its columns", path, 1, 1));

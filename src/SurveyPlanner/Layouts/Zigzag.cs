@@ -18,6 +18,10 @@ internal sealed class Zigzag : LayoutGenerator
     {
         SizingRules.RefuseTooCoarse(stratum, SpacingMetres);
         SizingRules.RefuseTooMany(stratum, stratum.ExtentAcross / SpacingMetres);
+        if (design.Turning != ZigzagTurning.EqualSpaced)
+        {
+            throw new InputException(new Problem("only zigzags with equal-spaced turning points are drawn so far; write turning = \"equal-spaced\"", Key: "layout.turning"));
+        }
     }
 
     private Zigzag(StratumFrame stratum, LayoutDesign design, double spacingMetres)

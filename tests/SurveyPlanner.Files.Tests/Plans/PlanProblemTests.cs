@@ -46,8 +46,9 @@ public class PlanProblemTests
     [InlineData("target_cv = nan", "nan is not a coefficient of variation: a number above 0 and at most 1: write precision.target_cv = 0.20")]
     [InlineData("target_cv = \"0.2\"", "write precision.target_cv = 0.2 without quotes: it is a plain number")]
     [InlineData("target_cv = \"0,2\"", "\"0,2\" has a comma: the decimal mark is a point, write 0.2")]
-    [InlineData("assurance = 80", "80 is not a probability: a number above 0 and below 1: percent meant? write precision.assurance = 0.8")]
-    [InlineData("assurance = 1", "1 is not a probability: a number above 0 and below 1: write precision.assurance = 0.80")]
+    [InlineData("assurance = 80", "80 is not a probability: a number from 0.5 to below 1: percent meant? write precision.assurance = 0.8")]
+    [InlineData("assurance = 1", "1 is not a probability: a number from 0.5 to below 1: write precision.assurance = 0.80")]
+    [InlineData("assurance = 20", "20 is not a probability: a number from 0.5 to below 1: write precision.assurance = 0.80")]
     [InlineData("allocation = \"neyman\"", "\"neyman\" is none of proportional, equal and optimal")]
     public void Shares_that_cannot_be_are_answered_as_a_user_would_wish(string line, string expected)
         => Assert.EndsWith(": " + expected, Assert.Single(ProblemsOf(SamplePlans.Least + "\n[precision]\n" + line)));

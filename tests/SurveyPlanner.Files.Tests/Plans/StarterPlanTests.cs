@@ -50,7 +50,7 @@ public partial class StarterPlanTests
     [Fact]
     public void Whatever_the_names_it_reads_and_says_them_back()
         => Gen.Select(Gen.String, Gen.String, Gen.String.Array[0, 3]).Check(
-            500,
+            300,
             names =>
             {
                 var (survey, field, values) = names;

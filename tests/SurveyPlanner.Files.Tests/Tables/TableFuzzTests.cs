@@ -21,7 +21,7 @@ public sealed class TableFuzzTests : IDisposable
     [Fact]
     public void A_damaged_table_is_read_or_refused_with_lines()
         => Mutations.Of(Transects).Check(
-            2000,
+            1000,
             text =>
             {
                 // The text as a file holds it: half surrogate pairs cannot be written.
