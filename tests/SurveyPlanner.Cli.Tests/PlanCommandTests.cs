@@ -71,6 +71,35 @@ public class PlanCommandTests
         }
     }
 
+    /// <summary>The executable itself, where comma is the decimal sign and the day begins elsewhere.</summary>
+    [Fact]
+    public void Locale_and_time_zone_change_nothing()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/marine-mammals-shelf/plan.toml");
+        foreach (var (folder, locale, zone) in new[] { ("a", "C", "UTC"), ("b", "de_DE.UTF-8", "Asia/Tokyo") })
+        {
+            var start = new System.Diagnostics.ProcessStartInfo("dotnet", [typeof(Application).Assembly.Location, "plan", plan, "--out", work.At(folder)])
+            {
+                RedirectStandardOutput = true,
+                RedirectStandardError = true,
+            };
+            start.Environment["LC_ALL"] = locale;
+            start.Environment["TZ"] = zone;
+            using var process = System.Diagnostics.Process.Start(start)!;
+            var error = process.StandardError.ReadToEndAsync(TestContext.Current.CancellationToken);
+            process.StandardOutput.ReadToEnd();
+            process.WaitForExit();
+            Assert.True(process.ExitCode == 0, error.Result);
+        }
+
+        foreach (var file in Files.Except(["record.json"]))
+        {
+            Assert.Equal(File.ReadAllBytes(Path.Combine(work.At("a"), file)), File.ReadAllBytes(Path.Combine(work.At("b"), file)));
+        }
+    }
+
     [Fact]
     public void A_changed_input_is_named_by_replay()
     {
