@@ -20,6 +20,8 @@ public class PictureBook
         File.WriteAllText(Path.Combine(folder, "points.html"), ReportRenderer.Render(points, SamplePlan.Context));
         var zigzag = SamplePlan.Of(SampleBoundary.Read("lake_caspian_with_islands"), SamplePlan.Zigzag(60_000));
         File.WriteAllText(Path.Combine(folder, "zigzag.html"), ReportRenderer.Render(zigzag, SamplePlan.Context));
+        var pole = SamplePlan.Of(SampleBoundary.Boxes(("west", -60, 80, 60, 89.5), ("east", 60, 80, 150, 89.5)), SamplePlan.Parallel(60_000), stratumField: "name");
+        File.WriteAllText(Path.Combine(folder, "pole.svg"), MapRenderer.RenderSvg(pole, SamplePlan.Context with { UsesNauticalMiles = true }));
         foreach (var (file, field, spacing) in ((string, string?, double)[])
                  [
                      ("marine_archipelago_sea", null, 10_000), ("strata_maine_counties", "name", 15_000), ("antimeridian_fiji", null, 20_000),

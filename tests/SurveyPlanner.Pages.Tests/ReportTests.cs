@@ -109,6 +109,21 @@ public partial class ReportTests
             transect => Assert.Contains($"<th scope=\"row\" data-label=\"Id\">{transect.Id}</th>", page, StringComparison.Ordinal));
     }
 
+    /// <summary>The report repeats the core's figures: those that a director reads first are looked for in the page.</summary>
+    [Fact]
+    public void The_answer_stands_first_with_the_figures_of_the_plan()
+    {
+        var plan = SamplePlan.WithPilot;
+        var page = ReportRenderer.Render(plan, SamplePlan.Context);
+        var answer = Answer().Match(page).Groups[1].Value;
+        var transects = plan.Strata.Sum(stratum => stratum.Layout.Transects.Length);
+        Assert.StartsWith($"{transects}\u00a0lines, ", answer, StringComparison.Ordinal);
+        Assert.Contains($"{Words.FiguresTests.Shown(100 * plan.Delivered!.Cv)}\u00a0%", answer, StringComparison.Ordinal);
+        Assert.Contains("the target is 20.0\u00a0%", answer, StringComparison.Ordinal);
+        Assert.Contains($">{Words.FiguresTests.Shown(plan.Effort!.Required!.Effort)}</th>", page, StringComparison.Ordinal);
+        Assert.Equal(3, Picture().Count(page));
+    }
+
     [Theory]
     [InlineData("antimeridian_fiji", null)]
     [InlineData("polar_svalbard", null)]
@@ -135,6 +150,9 @@ public partial class ReportTests
 
     [GeneratedRegex(@"url\((?!#)")]
     private static partial Regex OutsideUrl();
+
+    [GeneratedRegex("<p class=\"answer\">(.*?)</p>")]
+    private static partial Regex Answer();
 
     [GeneratedRegex(" id=\"([^\"]*)\"")]
     private static partial Regex Id();

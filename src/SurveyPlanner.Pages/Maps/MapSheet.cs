@@ -20,6 +20,9 @@ public sealed record MapSheet(MapFrame Frame, Graticule Graticule, ScaleBar Scal
     /// <summary>Radius of the globe, pixels.</summary>
     public const double GlobeRadius = 40;
 
+    // From here on one arrow does not speak for the whole map, and the note says so.
+    private const double NotableConvergenceDegrees = 5;
+
     public double Width => Frame.Width;
 
     public double FullHeight => Frame.Height + StripHeight;
@@ -39,8 +42,11 @@ public sealed record MapSheet(MapFrame Frame, Graticule Graticule, ScaleBar Scal
             ScaleBar.For(frame.MetresPerPixel, nauticalMiles),
             Globe.Showing(middle, GlobeRadius),
             North(projection, middle),
-            string.Join(" · ", [$"WGS 84 · {projection.Method} centred {Positions.Rough(projection.Centre)}", .. remarks]));
+            string.Join(" · ", [$"WGS 84 · {projection.Method} centred {Positions.Rough(projection.Centre)}", .. remarks, .. NorthRemark(region)]));
     }
+
+    private static IEnumerable<string> NorthRemark(Region region)
+        => region.MaxConvergenceDegrees > NotableConvergenceDegrees ? ["north arrow: middle of the map"] : [];
 
     // By a step of a hundred metres to the north: no formula of the projection is needed.
     private static double? North(EqualAreaProjection projection, LonLat middle)

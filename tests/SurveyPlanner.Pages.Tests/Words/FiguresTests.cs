@@ -7,6 +7,14 @@ namespace SurveyPlanner.Pages.Tests.Words;
 
 public class FiguresTests
 {
+    /// <summary>A figure as the pages should show it, by another way than theirs: the framework's general format of three digits.</summary>
+    internal static string Shown(double value)
+    {
+        var text = ((decimal)value).ToString("G3", System.Globalization.CultureInfo.InvariantCulture);
+        var digits = text.Count(char.IsDigit);
+        return digits >= 3 ? text : text + (text.Contains('.', StringComparison.Ordinal) ? "" : ".") + new string('0', 3 - digits);
+    }
+
     [Theory]
     [InlineData(0.0, "0")]
     [InlineData(1e-12, "0")]
