@@ -13,38 +13,29 @@ internal static class LayoutBuilder
     public static IEnumerable<Problem> Missing(PlanTable table, PlanTable? inherited)
     {
         var kind = table.Value(PlanKeys.Kind);
-        var required = new List<PlanKey[]> { new PlanKey[] { PlanKeys.Kind }, SizingKeys(kind) };
-        if (kind is not null)
-        {
-            required.Add([PlanKeys.ReachOf(kind.Value)]);
-        }
-
-        return required.Select(keys => Missing(table, inherited, keys)).OfType<Problem>();
+        return PlanKeys.Of("layout")
+            .Where(key => key.Group != KeyGroup.None || key.IsRequired)
+            .Where(key => kind is null ? key.Group != KeyGroup.Reach : key.BelongsTo(kind.Value))
+            .GroupBy(key => key.Group == KeyGroup.None ? key.Name : key.Group.ToString())
+            .Select(question => Missing(table, inherited, [.. question]))
+            .OfType<Problem>();
     }
 
     /// <param name="table">All keys that hold, none of them missing or unreadable.</param>
     public static LayoutDesign Build(PlanTable table)
     {
         var kind = table.Value(PlanKeys.Kind)!.Value;
-        return new LayoutDesign(
-            kind,
-            SizingOf(table),
-            table.Text(PlanKeys.Bearing)!,
-            table.Value(PlanKeys.ReachOf(kind))!.Value,
-            table.Value(PlanKeys.Edge)!.Value,
-            table.Value(PlanKeys.Grid)!.Value,
-            table.Value(PlanKeys.Turning)!.Value);
+        var design = new LayoutDesign(kind, new Sizing.Precision(), new Bearing.ShortAxis(), HalfWidthMetres: 0);
+        foreach (var key in PlanKeys.Of("layout").Where(key => key.BelongsTo(kind)))
+        {
+            if ((table.EntryOf(key)?.Value ?? key.Default) is { } value)
+            {
+                design = key.Apply(value, design);
+            }
+        }
+
+        return design;
     }
-
-    private static Sizing SizingOf(PlanTable table)
-        => table.Value(PlanKeys.Spacing) is { } spacing ? new Sizing.Spacing(spacing)
-            : table.Value(PlanKeys.Lines) is { } lines ? new Sizing.Number((int)lines)
-            : table.Value(PlanKeys.Points) is { } points ? new Sizing.Number((int)points)
-            : table.Value(PlanKeys.TotalLength) is { } length ? new Sizing.TotalLength(length)
-            : new Sizing.Precision();
-
-    private static PlanKey[] SizingKeys(LayoutKind? kind)
-        => [.. PlanKeys.Of("layout").Where(key => key.Group == KeyGroup.Sizing && (kind is null || key.BelongsTo(kind.Value)))];
 
     /// <summary>The problem that none of these keys, which answer one question, is given; null when one is.</summary>
     private static Problem? Missing(PlanTable table, PlanTable? inherited, PlanKey[] keys)

@@ -3,7 +3,7 @@ using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Files.Plans;
 
-/// <summary>Keys of one group answer the same question: only one of them stands in a table, and a stratum's answer replaces the common one.</summary>
+/// <summary>Keys of one group answer the same question: exactly one of them is needed, and a stratum's answer replaces the common one.</summary>
 internal enum KeyGroup
 {
     None,
@@ -33,12 +33,18 @@ internal abstract class PlanKey(string table, string name, string example, strin
 
     public KeyGroup Group { get; init; }
 
+    /// <summary>Whether a layout of its kinds must have it, in <c>[layout]</c> or in the stratum.</summary>
+    public bool IsRequired { get; init; }
+
     public abstract string Takes { get; }
 
     public abstract bool IsText { get; }
 
-    /// <summary>What holds when the key is absent, as TOML; null when nothing does.</summary>
-    public abstract string? DefaultText { get; }
+    /// <summary>What holds when the key is absent, boxed; null when nothing does.</summary>
+    public object? Default { get; init; }
+
+    /// <summary>The same as TOML.</summary>
+    public string? DefaultText => Default is { } value ? Write(value) : null;
 
     public bool BelongsTo(LayoutKind kind) => Kinds is null || Kinds.Holds(kind);
 
@@ -48,6 +54,9 @@ internal abstract class PlanKey(string table, string name, string example, strin
     public abstract Parsed<object> Read(SettingValue value, Sample sample);
 
     public abstract string Write(object value);
+
+    /// <summary>A layout design with the value of this key in its place; keys of other tables leave it as it is.</summary>
+    public abstract LayoutDesign Apply(object value, LayoutDesign design);
 }
 
 /// <summary>A key whose value is a <typeparamref name="T"/>.</summary>
@@ -55,19 +64,19 @@ internal sealed class PlanKey<T>(string table, string name, ValueReader<T> reade
     : PlanKey(table, name, example, doc)
     where T : notnull
 {
-    /// <summary>What holds when the key is absent, boxed; null when nothing does.</summary>
-    public object? Default { get; init; }
+    /// <summary>Where the value belongs in a layout design.</summary>
+    public Func<LayoutDesign, T, LayoutDesign>? Into { get; init; }
 
     public override string Takes => reader.Takes;
 
     public override bool IsText => reader.IsText;
 
-    public override string? DefaultText => Default is T value ? reader.Write(value) : null;
-
     public override Parsed<object> Read(SettingValue value, Sample sample)
         => reader.Read(value, sample).Then(good => Parsed.Ok<object>(good));
 
     public override string Write(object value) => reader.Write((T)value);
+
+    public override LayoutDesign Apply(object value, LayoutDesign design) => Into?.Invoke(design, (T)value) ?? design;
 }
 
 /// <summary>What follows from a kind alone, as the core's design knows it.</summary>

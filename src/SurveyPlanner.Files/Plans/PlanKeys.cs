@@ -8,8 +8,8 @@ using SurveyPlanner.Pilots;
 namespace SurveyPlanner.Files.Plans;
 
 /// <summary>
-/// Every key of the plan file. To add one: a line here, a row in docs/plan-file.md (a test compares the two), and a use in the
-/// builder of its part of the design.
+/// Every key of the plan file. To add one of a layout: a line here and a row in docs/plan-file.md (a test compares the two); of another
+/// table: also a use in <see cref="DesignBuilder"/>. A new kind of layout needs nothing but the keys that are its own.
 /// </summary>
 internal static class PlanKeys
 {
@@ -26,63 +26,184 @@ internal static class PlanKeys
     private static readonly List<PlanKey> Listed = [];
 
     // [survey]
-    public static readonly PlanKey<string> Name = Add("survey", "name", Text, "\"Example sound, sea ducks by boat\"", "Name of the survey; without it, the name of the plan file.");
-    public static readonly PlanKey<long> Seed = Add("survey", "seed", new WholeReader(0, long.MaxValue), "20270401", "The number that everything random comes from; without it one is taken from the system, shown and recorded.");
+    public static readonly PlanKey<string> Name = Add(
+        "survey", "name", Text, "\"Example sound, sea ducks by boat\"",
+        doc: "Name of the survey; without it, the name of the plan file.");
+
+    public static readonly PlanKey<long> Seed = Add(
+        "survey", "seed", new WholeReader(0, long.MaxValue), "20270401",
+        doc: "The number that everything random comes from; without it one is taken from the system, shown and recorded.");
 
     // [region]
-    public static readonly PlanKey<string> Boundary = Add("region", "boundary", File, "\"sound.geojson\"", "The boundary file. Required.");
-    public static readonly PlanKey<string> Layer = Add("region", "layer", Text, "\"zones\"", "The layer of it, where the file holds several.");
-    public static readonly PlanKey<string> Crs = Add("region", "crs", Text, "\"EPSG:25832\"", "Its coordinate system, where the file does not say.");
-    public static readonly PlanKey<string> StratumField = Add("region", "stratum_field", Text, "\"zone\"", "The attribute of the boundary that names the strata; without it the region is one stratum.");
-    public static readonly PlanKey<ImmutableArray<string>> Strata = Add("region", "strata", new ListReader<string>(Text), "[\"inner bay\", \"outer sound\"]", "The strata to survey, in this order; without it all that the boundary holds.");
-    public static readonly PlanKey<ImmutableArray<string>> Exclusions = Add("region", "exclusions", new ListReader<string>(File), "\"closed-areas.geojson\"", "Files of areas that are cut out of the region.");
-    public static readonly PlanKey<double> ExclusionBuffer = Add("region", "exclusion_buffer", new LengthReader(zeroIsAllowed: true), "\"500 m\"", "How far to keep away from the exclusions.", 0.0);
-    public static readonly PlanKey<string> Projection = Add("region", "projection", Text, "\"azimuthal\"", "The equal-area projection to plan in; without it the one that distorts least.");
+    public static readonly PlanKey<string> Boundary = Add(
+        "region", "boundary", File, "\"sound.geojson\"",
+        doc: "The boundary file. Required.");
+
+    public static readonly PlanKey<string> Layer = Add(
+        "region", "layer", Text, "\"zones\"",
+        doc: "The layer of it, where the file holds several.");
+
+    public static readonly PlanKey<string> Crs = Add(
+        "region", "crs", Text, "\"EPSG:25832\"",
+        doc: "Its coordinate system, where the file does not say.");
+
+    public static readonly PlanKey<string> StratumField = Add(
+        "region", "stratum_field", Text, "\"zone\"",
+        doc: "The attribute of the boundary that names the strata; without it the region is one stratum.");
+
+    public static readonly PlanKey<ImmutableArray<string>> Strata = Add(
+        "region", "strata", new ListReader<string>(Text), "[\"inner bay\", \"outer sound\"]",
+        doc: "The strata to survey, in this order; without it all that the boundary holds.");
+
+    public static readonly PlanKey<ImmutableArray<string>> Exclusions = Add(
+        "region", "exclusions", new ListReader<string>(File), "\"closed-areas.geojson\"",
+        doc: "Files of areas that are cut out of the region.");
+
+    public static readonly PlanKey<double> ExclusionBuffer = Add(
+        "region", "exclusion_buffer", new LengthReader(zeroIsAllowed: true), "\"500 m\"", @default: 0.0,
+        doc: "How far to keep away from the exclusions.");
+
+    public static readonly PlanKey<string> Projection = Add(
+        "region", "projection", Text, "\"azimuthal\"",
+        doc: "The equal-area projection to plan in; without it the one that distorts least.");
 
     // [layout] and [stratum."name"]
-    public static readonly PlanKey<LayoutKind> Kind = Layout("kind", new ChoiceReader<LayoutKind>(), "\"parallel\"", "The kind of layout. Required.", KindFilter.Any);
-    public static readonly PlanKey<Bearing> Bearing = Layout("bearing", new BearingReader(), "\"short-axis\"", "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum. A zigzag swings about it.", KindFilter.Any, new Bearing.ShortAxis());
-    public static readonly PlanKey<double> Spacing = Layout("spacing", Length, "\"5 km\"", "Distance between neighbouring lines or points; of a zigzag, between its turning points along the axis.", KindFilter.Any, group: KeyGroup.Sizing);
-    public static readonly PlanKey<long> Lines = Layout("lines", new WholeReader(1, 100_000), "20", "Instead of a spacing: expected number of lines, or of legs of a zigzag, in the stratum.", KindFilter.Lines, group: KeyGroup.Sizing);
-    public static readonly PlanKey<long> Points = Layout("points", new WholeReader(1, 100_000), "60", "Instead of a spacing: expected number of points in the stratum.", KindFilter.Points, group: KeyGroup.Sizing);
-    public static readonly PlanKey<double> TotalLength = Layout("total_length", Length, "\"400 km\"", "Instead of a spacing: expected total length of line in the stratum.", KindFilter.Lines, group: KeyGroup.Sizing);
-    public static readonly PlanKey<SizeFrom> SizeFrom = Layout("size_from", new ChoiceReader<SizeFrom>(), "\"precision\"", "Instead of a spacing: whatever the target precision asks for.", KindFilter.Any, group: KeyGroup.Sizing);
-    public static readonly PlanKey<double> HalfWidth = Layout("half_width", Length, "\"300 m\"", "Strip half-width: how far out from a line animals count. Required for lines.", KindFilter.Lines, group: KeyGroup.Reach);
-    public static readonly PlanKey<double> Radius = Layout("radius", Length, "\"150 m\"", "How far out from a point animals count. Required for points.", KindFilter.Points, group: KeyGroup.Reach);
-    public static readonly PlanKey<EdgeRule> Edge = Layout("edge", new ChoiceReader<EdgeRule>(), "\"minus\"", "Whether transects stop at the boundary (minus) or run on past it by the half-width or radius (plus).", KindFilter.Any, EdgeRule.Minus);
-    public static readonly PlanKey<GridShape> Grid = Layout("grid", new ChoiceReader<GridShape>(), "\"triangular\"", "Shape of the grid.", KindFilter.Only(LayoutKind.PointGrid), GridShape.Square);
-    public static readonly PlanKey<ZigzagTurning> Turning = Layout("turning", new ChoiceReader<ZigzagTurning>(), "\"adjusted-angle\"", "How the zigzag turns.", KindFilter.Only(LayoutKind.Zigzag), ZigzagTurning.EqualSpaced);
+    public static readonly PlanKey<LayoutKind> Kind = Layout(
+        "kind", new ChoiceReader<LayoutKind>(), "\"parallel\"", KindFilter.Any, (design, kind) => design with { Kind = kind }, isRequired: true,
+        doc: "The kind of layout. Required.");
+
+    public static readonly PlanKey<Bearing> Bearing = Layout(
+        "bearing", new BearingReader(), "\"short-axis\"", KindFilter.Any, (design, bearing) => design with { Bearing = bearing }, @default: new Bearing.ShortAxis(),
+        doc: "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum. A zigzag swings about it.");
+
+    public static readonly PlanKey<double> Spacing = Layout(
+        "spacing", Length, "\"5 km\"", KindFilter.Any, (design, metres) => design with { Sizing = new Sizing.Spacing(metres) }, group: KeyGroup.Sizing,
+        doc: "Distance between neighbouring lines or points; of a zigzag, between its turning points along the axis.");
+
+    public static readonly PlanKey<long> Lines = Layout(
+        "lines", new WholeReader(1, 100_000), "20", KindFilter.Lines, (design, count) => design with { Sizing = new Sizing.Number((int)count) }, group: KeyGroup.Sizing,
+        doc: "Instead of a spacing: expected number of lines, or of legs of a zigzag, in the stratum.");
+
+    public static readonly PlanKey<long> Points = Layout(
+        "points", new WholeReader(1, 100_000), "60", KindFilter.Points, (design, count) => design with { Sizing = new Sizing.Number((int)count) }, group: KeyGroup.Sizing,
+        doc: "Instead of a spacing: expected number of points in the stratum.");
+
+    public static readonly PlanKey<double> TotalLength = Layout(
+        "total_length", Length, "\"400 km\"", KindFilter.Lines, (design, metres) => design with { Sizing = new Sizing.TotalLength(metres) }, group: KeyGroup.Sizing,
+        doc: "Instead of a spacing: expected total length of line in the stratum.");
+
+    public static readonly PlanKey<SizeFrom> SizeFrom = Layout(
+        "size_from", new ChoiceReader<SizeFrom>(), "\"precision\"", KindFilter.Any, (design, _) => design with { Sizing = new Sizing.Precision() }, group: KeyGroup.Sizing,
+        doc: "Instead of a spacing: whatever the target precision asks for.");
+
+    public static readonly PlanKey<double> HalfWidth = Layout(
+        "half_width", Length, "\"300 m\"", KindFilter.Lines, (design, metres) => design with { HalfWidthMetres = metres }, group: KeyGroup.Reach,
+        doc: "Strip half-width: how far out from a line animals count. Required for lines.");
+
+    public static readonly PlanKey<double> Radius = Layout(
+        "radius", Length, "\"150 m\"", KindFilter.Points, (design, metres) => design with { HalfWidthMetres = metres }, group: KeyGroup.Reach,
+        doc: "How far out from a point animals count. Required for points.");
+
+    public static readonly PlanKey<EdgeRule> Edge = Layout(
+        "edge", new ChoiceReader<EdgeRule>(), "\"minus\"", KindFilter.Any, (design, edge) => design with { Edge = edge }, @default: EdgeRule.Minus,
+        doc: "Whether transects stop at the boundary (minus) or run on past it by the half-width or radius (plus).");
+
+    public static readonly PlanKey<GridShape> Grid = Layout(
+        "grid", new ChoiceReader<GridShape>(), "\"triangular\"", KindFilter.Only(LayoutKind.PointGrid), (design, grid) => design with { Grid = grid }, @default: GridShape.Square,
+        doc: "Shape of the grid.");
+
+    public static readonly PlanKey<ZigzagTurning> Turning = Layout(
+        "turning", new ChoiceReader<ZigzagTurning>(), "\"adjusted-angle\"", KindFilter.Only(LayoutKind.Zigzag), (design, turning) => design with { Turning = turning }, @default: ZigzagTurning.EqualSpaced,
+        doc: "How the zigzag turns.");
 
     // [stratum."name"] only
-    public static readonly PlanKey<Money> CostPerKm = Add("stratum", "cost_per_km", Money, "\"35 EUR\"", "What a kilometre of line costs in this stratum, for the optimal allocation.", kinds: KindFilter.Lines);
-    public static readonly PlanKey<Money> CostPerPoint = Add("stratum", "cost_per_point", Money, "\"20 EUR\"", "What a visit to a point costs in this stratum, for the optimal allocation.", kinds: KindFilter.Points);
+    public static readonly PlanKey<Money> CostPerKm = Add(
+        "stratum", "cost_per_km", Money, "\"35 EUR\"", kinds: KindFilter.Lines,
+        doc: "What a kilometre of line costs in this stratum, for the optimal allocation.");
+
+    public static readonly PlanKey<Money> CostPerPoint = Add(
+        "stratum", "cost_per_point", Money, "\"20 EUR\"", kinds: KindFilter.Points,
+        doc: "What a visit to a point costs in this stratum, for the optimal allocation.");
 
     // [coverage]
-    public static readonly PlanKey<long> Cells = Add("coverage", "cells", new WholeReader(1, int.MaxValue), "10000", "Number of cells over the whole region; without it so many that the smallest stratum has at least 500.");
-    public static readonly PlanKey<long> Replicates = Add("coverage", "replicates", new WholeReader(2, 1_000_000), "1000", "Number of simulated draws of the layout.", (long)CoverageDesign.DefaultReplicates);
+    public static readonly PlanKey<long> Cells = Add(
+        "coverage", "cells", new WholeReader(1, int.MaxValue), "10000",
+        doc: "Number of cells over the whole region; without it so many that the smallest stratum has at least 500.");
+
+    public static readonly PlanKey<long> Replicates = Add(
+        "coverage", "replicates", new WholeReader(2, 1_000_000), "1000", @default: (long)CoverageDesign.DefaultReplicates,
+        doc: "Number of simulated draws of the layout.");
 
     // [precision]
-    public static readonly PlanKey<double> TargetCv = Add("precision", "target_cv", new ShareReader("a coefficient of variation", "above 0 and at most 1", value => value is > 0 and <= 1, "it would take endless effort"), "0.20", "The coefficient of variation of density that the decision needs.");
-    public static readonly PlanKey<double> Assurance = Add("precision", "assurance", new ShareReader("a probability", "from 0.5 to below 1", value => value is >= 0.5 and < 1, "even odds are 0.5"), "0.80", "How sure to be of reaching it, given how little the pilot knows; without it the plain estimate.");
-    public static readonly PlanKey<double> B = Add("precision", "b", new NumberReader("a number above 0", value => value > 0), "3.0", "The constant b of the rule of thumb for effort; without it the pilot gives it, and where there is no pilot it is 3.");
-    public static readonly PlanKey<Allocation> Allocation = Add("precision", "allocation", new ChoiceReader<Allocation>(), "\"optimal\"", "How effort is shared among strata: by area, the same to each, or for the least variance (Neyman), with costs where given.", Effort.Allocation.Proportional);
-    public static readonly PlanKey<long> MinLines = Add("precision", "min_lines", new WholeReader(1, 100_000), "10", "Least number of lines (or points) a stratum gets.", (long)EffortDesign.DefaultMinLines);
+    public static readonly PlanKey<double> TargetCv = Add(
+        "precision", "target_cv", new ShareReader("a coefficient of variation", "above 0 and at most 1", value => value is > 0 and <= 1, "it would take endless effort"), "0.20",
+        doc: "The coefficient of variation of density that the decision needs.");
+
+    public static readonly PlanKey<double> Assurance = Add(
+        "precision", "assurance", new ShareReader("a probability", "from 0.5 to below 1", value => value is >= 0.5 and < 1, "even odds are 0.5"), "0.80",
+        doc: "How sure to be of reaching it, given how little the pilot knows; without it the plain estimate.");
+
+    public static readonly PlanKey<double> B = Add(
+        "precision", "b", new NumberReader("a number above 0", value => value > 0), "3.0",
+        doc: "The constant b of the rule of thumb for effort; without it the pilot gives it, and where there is no pilot it is 3.");
+
+    public static readonly PlanKey<Allocation> Allocation = Add(
+        "precision", "allocation", new ChoiceReader<Allocation>(), "\"optimal\"", @default: Effort.Allocation.Proportional,
+        doc: "How effort is shared among strata: by area, the same to each, or for the least variance (Neyman), with costs where given.");
+
+    public static readonly PlanKey<long> MinLines = Add(
+        "precision", "min_lines", new WholeReader(1, 100_000), "10", @default: (long)EffortDesign.DefaultMinLines,
+        doc: "Least number of lines (or points) a stratum gets.");
 
     // [pilot]
-    public static readonly PlanKey<string> Transects = Add("pilot", "transects", File, "\"pilot-transects.csv\"", "Table of the pilot's transects.");
-    public static readonly PlanKey<string> Detections = Add("pilot", "detections", File, "\"pilot-detections.csv\"", "Table of its detections, where distances or cluster sizes were noted.");
-    public static readonly PlanKey<GivenRate> EncounterRate = Add("pilot", "encounter_rate", Rate, "\"0.8 /km\"", "Detections per length of line (at points: \"1.5 /visit\"), where there is no table.");
-    public static readonly PlanKey<EncounterRateEstimator> Estimator = Add("pilot", "estimator", new ChoiceReader<EncounterRateEstimator>(), "\"random-lines\"", "Variance estimator of the encounter rate; without it the one that suits the layout.");
-    public static readonly PlanKey<double> ClusterSize = Add("pilot", "cluster_size", new NumberReader("a number from 1 on", value => value >= 1), "2.4", "Mean cluster size, where no detections give it.");
-    public static readonly PlanKey<double> ClusterSizeSd = Add("pilot", "cluster_size_sd", new NumberReader("a number from 0 on", value => value >= 0), "1.7", "Standard deviation of cluster size.", 0.0);
+    public static readonly PlanKey<string> Transects = Add(
+        "pilot", "transects", File, "\"pilot-transects.csv\"",
+        doc: "Table of the pilot's transects.");
+
+    public static readonly PlanKey<string> Detections = Add(
+        "pilot", "detections", File, "\"pilot-detections.csv\"",
+        doc: "Table of its detections, where distances or cluster sizes were noted.");
+
+    public static readonly PlanKey<GivenRate> EncounterRate = Add(
+        "pilot", "encounter_rate", Rate, "\"0.8 /km\"",
+        doc: "Detections per length of line (at points: \"1.5 /visit\"), where there is no table.");
+
+    public static readonly PlanKey<EncounterRateEstimator> Estimator = Add(
+        "pilot", "estimator", new ChoiceReader<EncounterRateEstimator>(), "\"random-lines\"",
+        doc: "Variance estimator of the encounter rate; without it the one that suits the layout.");
+
+    public static readonly PlanKey<double> ClusterSize = Add(
+        "pilot", "cluster_size", new NumberReader("a number from 1 on", value => value >= 1), "2.4",
+        doc: "Mean cluster size, where no detections give it.");
+
+    public static readonly PlanKey<double> ClusterSizeSd = Add(
+        "pilot", "cluster_size_sd", new NumberReader("a number from 0 on", value => value >= 0), "1.7", @default: 0.0,
+        doc: "Standard deviation of cluster size.");
 
     // [detection]
-    public static readonly PlanKey<ImmutableArray<DetectionModel>> Models = Add("detection", "models", new ListReader<DetectionModel>(new ChoiceReader<DetectionModel>()), "[\"half-normal\", \"hazard-rate\"]", "Detection models to fit to the pilot's distances.");
-    public static readonly PlanKey<double> Truncation = Add("detection", "truncation", Length, "\"250 m\"", "Distance beyond which detections are left out; without it the half-width or radius.");
-    public static readonly PlanKey<double> DetectionCv = Add("detection", "cv", new ShareReader("a coefficient of variation", "from 0 to 1", value => value is >= 0 and <= 1), "0.12", "Coefficient of variation of the effective strip half-width (points: of the effective area), where it is given and not fitted.");
-    public static readonly PlanKey<double> DetectionDf = Add("detection", "df", new NumberReader("a number above 0", value => value > 0), "60.0", "Its degrees of freedom; without it so many that they do not matter.");
-    public static readonly PlanKey<double> EffectiveHalfWidth = Add("detection", "effective_half_width", Length, "\"180 m\"", "Effective strip half-width of lines, where it is given and not fitted.");
-    public static readonly PlanKey<double> EffectiveRadius = Add("detection", "effective_radius", Length, "\"90 m\"", "Effective radius of points, where it is given and not fitted.");
+    public static readonly PlanKey<ImmutableArray<DetectionModel>> Models = Add(
+        "detection", "models", new ListReader<DetectionModel>(new ChoiceReader<DetectionModel>()), "[\"half-normal\", \"hazard-rate\"]",
+        doc: "Detection models to fit to the pilot's distances.");
+
+    public static readonly PlanKey<double> Truncation = Add(
+        "detection", "truncation", Length, "\"250 m\"",
+        doc: "Distance beyond which detections are left out; without it the half-width or radius.");
+
+    public static readonly PlanKey<double> DetectionCv = Add(
+        "detection", "cv", new ShareReader("a coefficient of variation", "from 0 to 1", value => value is >= 0 and <= 1), "0.12",
+        doc: "Coefficient of variation of the effective strip half-width (points: of the effective area), where it is given and not fitted.");
+
+    public static readonly PlanKey<double> DetectionDf = Add(
+        "detection", "df", new NumberReader("a number above 0", value => value > 0), "60.0",
+        doc: "Its degrees of freedom; without it so many that they do not matter.");
+
+    public static readonly PlanKey<double> EffectiveHalfWidth = Add(
+        "detection", "effective_half_width", Length, "\"180 m\"",
+        doc: "Effective strip half-width of lines, where it is given and not fitted.");
+
+    public static readonly PlanKey<double> EffectiveRadius = Add(
+        "detection", "effective_radius", Length, "\"90 m\"",
+        doc: "Effective radius of points, where it is given and not fitted.");
 
     public static IReadOnlyList<PlanKey> All => Listed;
 
@@ -97,14 +218,26 @@ internal static class PlanKeys
     /// <summary>The key that says how far out animals count.</summary>
     public static PlanKey<double> ReachOf(LayoutKind kind) => kind.IsPoints() ? Radius : HalfWidth;
 
-    private static PlanKey<T> Layout<T>(string name, ValueReader<T> reader, string example, string doc, KindFilter kinds, object? @default = null, KeyGroup group = KeyGroup.None)
+    private static PlanKey<T> Layout<T>(
+        string name,
+        ValueReader<T> reader,
+        string example,
+        KindFilter kinds,
+        Func<LayoutDesign, T, LayoutDesign> into,
+        string doc,
+        object? @default = null,
+        KeyGroup group = KeyGroup.None,
+        bool isRequired = false)
         where T : notnull
-        => Add("layout", name, reader, example, doc, @default, kinds, group);
+        => List(new PlanKey<T>("layout", name, reader, example, doc) { Kinds = kinds, Into = into, Default = @default, Group = group, IsRequired = isRequired });
 
-    private static PlanKey<T> Add<T>(string table, string name, ValueReader<T> reader, string example, string doc, object? @default = null, KindFilter? kinds = null, KeyGroup group = KeyGroup.None)
+    private static PlanKey<T> Add<T>(string table, string name, ValueReader<T> reader, string example, string doc, object? @default = null, KindFilter? kinds = null)
+        where T : notnull
+        => List(new PlanKey<T>(table, name, reader, example, doc) { Default = @default, Kinds = kinds });
+
+    private static PlanKey<T> List<T>(PlanKey<T> key)
         where T : notnull
     {
-        var key = new PlanKey<T>(table, name, reader, example, doc) { Default = @default, Kinds = kinds, Group = group };
         Listed.Add(key);
         return key;
     }
