@@ -20,7 +20,7 @@ internal static class CheckText
             $"plane        {region.Projection.Method}, centred on {Position(region.Projection.Centre)}"));
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
-            $"             lengths off by at most {region.MaxScaleErrorPercent:0.###} %; grid north off true north by at most {region.MaxConvergenceDegrees:0.##}°"));
+            $"             lengths off by {AtMost(region.MaxScaleErrorPercent)} %; grid north off true north by at most {region.MaxConvergenceDegrees:0.##}°"));
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
             $"area         {region.AreaKm2:#,0.######} km² in the plane, {region.GeodesicAreaKm2:#,0.######} km² on the ellipsoid"));
@@ -39,10 +39,10 @@ internal static class CheckText
                 (100 * stratum.AreaKm2).ToString("#,0", CultureInfo.InvariantCulture),
                 TextTable.Number(stratum.Shape.PartCount),
                 TextTable.Number(stratum.Shape.HoleCount),
-                TextTable.Number(stratum.Shape.VertexCount),
+                TextTable.Number(stratum.OutlineVertices),
                 TextTable.Figure(stratum.LongAxisKm),
                 TextTable.Figure(stratum.ShortAxisKm),
-                TextTable.Figure(stratum.LongAxisBearing));
+                TextTable.Bearing(stratum.LongAxisBearing, 180));
         }
 
         table.Write(output);
@@ -53,6 +53,9 @@ internal static class CheckText
         var extent = region.Extent;
         return $"{Minutes(extent.South, 'N', 'S')} to {Minutes(extent.North, 'N', 'S')}, {Minutes(extent.West, 'E', 'W')} to {Minutes(extent.East, 'E', 'W')}";
     }
+
+    private static string AtMost(double percent)
+        => percent < 0.001 ? "less than 0.001" : string.Create(CultureInfo.InvariantCulture, $"at most {percent:0.###}");
 
     private static string Position(LonLat position) => $"{Minutes(position.Lat, 'N', 'S')} {Minutes(position.Lon, 'E', 'W')}";
 

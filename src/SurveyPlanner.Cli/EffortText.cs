@@ -54,7 +54,7 @@ internal static class EffortText
     {
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
-            $"Encounter rate {TextTable.Figure(effort.EncounterRate)} per {(effort.IsPoints ? "visit" : "km")}; b = {effort.B.Value:0.##}. {effort.B.Explanation}"));
+            $"Encounter rate {TextTable.Figure(effort.EncounterRate)} per {(effort.IsPoints ? "visit" : "km")}. {effort.B.Explanation}"));
         if (effort.EstimatorReason is { } reason)
         {
             output.WriteLine(reason);

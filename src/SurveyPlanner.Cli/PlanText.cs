@@ -65,7 +65,7 @@ internal static class PlanText
                     TextTable.Degrees(transect.End.Lat),
                     TextTable.Degrees(transect.End.Lon),
                     TextTable.Figure(transect.LengthMetres / 1000),
-                    transect.BearingDegrees is { } bearing ? TextTable.Figure(bearing) : "");
+                    transect.BearingDegrees is { } bearing ? TextTable.Bearing(bearing, 360) : "");
             }
         }
 
@@ -82,7 +82,7 @@ internal static class PlanText
                 stratum.Name,
                 TextTable.Figure(stratum.AreaKm2),
                 LayoutKindNames.Of(layout.Design.Kind),
-                TextTable.Figure(layout.BearingDegrees),
+                TextTable.Bearing(layout.BearingDegrees, 180),
                 TextTable.Figure(layout.SpacingMetres / 1000),
                 TextTable.Number(layout.Transects.Length),
                 points ? "" : TextTable.Figure(layout.TotalLengthMetres / 1000),

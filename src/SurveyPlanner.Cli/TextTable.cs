@@ -25,6 +25,10 @@ internal sealed class TextTable(params string[] header)
 
     public static string Degrees(double value) => value.ToString("0.00000", CultureInfo.InvariantCulture);
 
+    /// <summary>Degrees to a tenth; what rounds to the full turn is 0.</summary>
+    public static string Bearing(double degrees, double turn)
+        => (Math.Round(degrees, 1) % turn).ToString("0.0", CultureInfo.InvariantCulture);
+
     /// <summary>Three significant figures, never in powers of ten for what a person would write out.</summary>
     public static string Figure(double value)
     {

@@ -56,6 +56,9 @@ public sealed record Stratum(
     double ShortAxisKm,
     ImmutableSortedDictionary<string, string> Attributes)
 {
+    /// <summary>Vertices of its outline in the boundary file, before edges were given more of them for the plane.</summary>
+    public int OutlineVertices { get; init; }
+
     /// <summary>Area in the plane, square kilometres.</summary>
     public double AreaKm2 => Shape.AreaSquareMetres / 1e6;
 }

@@ -226,7 +226,10 @@ public static class RegionBuilder
             bearing < 0 ? bearing + 180 : bearing,
             longSide / 1000,
             shortSide / 1000,
-            group.SharedAttributes);
+            group.SharedAttributes)
+        {
+            OutlineVertices = group.Features.Sum(Vertices),
+        };
     }
 
     private static PlanePoint Centroid(PlaneShape shape)
@@ -251,6 +254,10 @@ public static class RegionBuilder
 
         return new PlanePoint(sumX / (3 * area), sumY / (3 * area));
     }
+
+    /// <summary>Rings are closed: their last vertex is the first again.</summary>
+    private static int Vertices(BoundaryFeature feature)
+        => feature.Polygons.Sum(polygon => polygon.Shell.Length - 1 + polygon.Holes.Sum(hole => hole.Length - 1));
 
     private static IEnumerable<LonLat> Positions(BoundaryFeature feature) => feature.Polygons.SelectMany(polygon => polygon.Shell);
 }
