@@ -30,15 +30,19 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
 
     private static LoadedPlan Complete(PlanFile file, byte[] content)
     {
-        var boundary = BoundaryReader.Read(file.BoundaryPath, new BoundaryOptions { Layer = file.Layer, Crs = file.Crs });
+        var boundary = BoundarySet.Read(file.BoundaryPaths, file.Layers, file.Crs);
         var exclusions = file.ExclusionPaths.Select(path => BoundaryReader.Read(path, new BoundaryOptions())).ToImmutableArray();
         var pilot = file.PilotTransectsPath is { } transects ? PilotTableReader.Read(transects, file.PilotDetectionsPath) : null;
-        var design = file.SeedGiven ? file.Design : file.Design with { Seed = SeedOfSystem() };
+        var design = file.Design with
+        {
+            Seed = file.SeedGiven ? file.Design.Seed : SeedOfSystem(),
+            StratumField = file.Design.StratumField ?? boundary.StratumField,
+        };
         return new LoadedPlan(
             file,
             design,
             !file.SeedGiven,
-            new SurveyInputs(boundary, exclusions, pilot),
+            new SurveyInputs(boundary.Boundary, exclusions, pilot),
             new PlanSource(file.Path, content, file.CanonicalText, InputFiles(file)));
     }
 
@@ -47,7 +51,7 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
 
     private static ImmutableArray<InputFile> InputFiles(PlanFile file)
     {
-        var named = new List<(string Key, string? Path)> { ("region.boundary", file.BoundaryPath) };
+        var named = file.BoundaryPaths.Select(path => (Key: "region.boundary", Path: (string?)path)).ToList();
         named.AddRange(file.ExclusionPaths.Select(path => ("region.exclusions", (string?)path)));
         named.Add(("pilot.transects", file.PilotTransectsPath));
         named.Add(("pilot.detections", file.PilotDetectionsPath));

@@ -8,8 +8,8 @@ namespace SurveyPlanner.Files.Plans;
 /// <param name="Path">The plan file as the user named it.</param>
 /// <param name="Design">The design; its seed is 0 when the file gives none.</param>
 /// <param name="SeedGiven">Whether the file (or <c>--set</c>) gives a seed; if not, the caller takes one from the system.</param>
-/// <param name="BoundaryPath">The boundary file, resolved against the plan's folder.</param>
-/// <param name="Layer">The layer of it; null when none is named.</param>
+/// <param name="BoundaryPaths">The boundary files, resolved against the plan's folder; at least one.</param>
+/// <param name="Layers">The layers of them to read; empty when none is named.</param>
 /// <param name="Crs">Its coordinate system as the plan states it; null when it does not.</param>
 /// <param name="ExclusionPaths">Files of excluded areas, resolved; empty when there are none.</param>
 /// <param name="PilotTransectsPath">Table of pilot transects, resolved; null when there is none.</param>
@@ -20,8 +20,8 @@ public sealed record PlanFile(
     string Path,
     SurveyDesign Design,
     bool SeedGiven,
-    string BoundaryPath,
-    string? Layer,
+    ImmutableArray<string> BoundaryPaths,
+    ImmutableArray<string> Layers,
     string? Crs,
     ImmutableArray<string> ExclusionPaths,
     string? PilotTransectsPath,

@@ -43,7 +43,7 @@ public static class PlanFileReader
         problems.AddRange(PlanRules.Check(tables, layout, [.. strata.Values]));
         var files = new NamedFiles(path, exists, problems);
         var region = tables["region"];
-        var boundary = files.Resolve(region, PlanKeys.Boundary);
+        var boundaries = files.ResolveAll(region, PlanKeys.Boundary);
         var exclusions = files.ResolveAll(region, PlanKeys.Exclusions);
         var transects = files.Resolve(tables["pilot"], PlanKeys.Transects);
         var detections = files.Resolve(tables["pilot"], PlanKeys.Detections);
@@ -57,8 +57,8 @@ public static class PlanFileReader
             path,
             DesignBuilder.Build(tables, layout, strata, name),
             tables["survey"].Has(PlanKeys.Seed),
-            boundary!,
-            region.Text(PlanKeys.Layer),
+            boundaries,
+            region.Value(PlanKeys.Layer) ?? [],
             region.Text(PlanKeys.Crs),
             exclusions,
             transects,

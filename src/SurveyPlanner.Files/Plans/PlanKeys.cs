@@ -35,13 +35,13 @@ internal static class PlanKeys
         doc: "The number that everything random comes from; without it one is taken from the system, shown and recorded.");
 
     // [region]
-    public static readonly PlanKey<string> Boundary = Add(
-        "region", "boundary", File, "\"sound.geojson\"",
-        doc: "The boundary file. Required.");
+    public static readonly PlanKey<ImmutableArray<string>> Boundary = Add(
+        "region", "boundary", new ListReader<string>(File), "\"sound.geojson\"",
+        doc: "The boundary file, or several: each is then a stratum named by its file, unless stratum_field says otherwise. Required.");
 
-    public static readonly PlanKey<string> Layer = Add(
-        "region", "layer", Text, "\"zones\"",
-        doc: "The layer of it, where the file holds several.");
+    public static readonly PlanKey<ImmutableArray<string>> Layer = Add(
+        "region", "layer", new ListReader<string>(Text), "\"zones\"",
+        doc: "The layer of it, where the file holds several, or several of them: each is then a stratum named by its layer.");
 
     public static readonly PlanKey<string> Crs = Add(
         "region", "crs", Text, "\"EPSG:25832\"",

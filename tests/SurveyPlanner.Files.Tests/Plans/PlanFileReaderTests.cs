@@ -50,8 +50,8 @@ public class PlanFileReaderTests
     {
         var plan = PlanFileReader.Parse(SamplePlans.Full, "plans/sound.toml", []);
 
-        Assert.Equal(Path.Combine("plans", "sound.gpkg"), plan.BoundaryPath);
-        Assert.Equal("zones", plan.Layer);
+        Assert.Equal([Path.Combine("plans", "sound.gpkg")], plan.BoundaryPaths);
+        Assert.Equal(["zones"], plan.Layers);
         Assert.Equal("EPSG:25832", plan.Crs);
         Assert.Equal([Path.Combine("plans", "closed.geojson"), "/shared/range.geojson"], plan.ExclusionPaths);
         Assert.Equal(500, plan.Design.ExclusionBufferMetres);
@@ -73,7 +73,7 @@ public class PlanFileReaderTests
         Assert.Empty(plan.Design.Effort.CostPerUnit);
         Assert.Empty(plan.Design.Effort.Detection.Models);
         Assert.Equal(new SurveyPlanner.Coverage.CoverageDesign(), plan.Design.Coverage);
-        Assert.Equal("moor.geojson", plan.BoundaryPath);
+        Assert.Equal(["moor.geojson"], plan.BoundaryPaths);
         Assert.Empty(plan.ExclusionPaths);
         Assert.Null(plan.PilotTransectsPath);
     }

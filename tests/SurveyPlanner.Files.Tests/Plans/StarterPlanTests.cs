@@ -16,7 +16,7 @@ public partial class StarterPlanTests
     {
         var plan = PlanFileReader.Parse(StarterPlan.For("sound.geojson", Sound), "sound.toml", []);
 
-        Assert.Equal(("sound", "sound.geojson", false), (plan.Design.Name, plan.BoundaryPath, plan.SeedGiven));
+        Assert.Equal(("sound", "sound.geojson", false), (plan.Design.Name, Assert.Single(plan.BoundaryPaths), plan.SeedGiven));
         Assert.Equal(new LayoutDesign(LayoutKind.Parallel, new Sizing.Spacing(3000), new Bearing.ShortAxis(), 300), plan.Design.Layout);
     }
 
