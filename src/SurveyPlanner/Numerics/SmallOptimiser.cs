@@ -19,8 +19,11 @@ internal static class SmallOptimiser
 
     private const int MostIterations = 200;
 
-    /// <summary>Slope, in units of the function per unit of parameter, that counts as flat: a log-likelihood moves by less than 1e-9.</summary>
-    private const double Flat = 1e-4;
+    /// <summary>What a full Newton step would still gain (twice that); a log-likelihood this close to its maximum is within 1e-4 standard errors of it.</summary>
+    private const double NoGain = 1e-8;
+
+    /// <summary>Slope per unit of parameter that counts as flat where no Newton step exists.</summary>
+    private const double Flat = 1e-5;
 
     private const double LongestStep = 1;
 
@@ -34,13 +37,13 @@ internal static class SmallOptimiser
             var (gradient, information) = Derivatives(function, point, lower, upper);
             var held = Held(point, gradient, lower, upper);
             var onBound = held.Any(isHeld => isHeld);
-            if (Enumerable.Range(0, point.Length).All(i => held[i] || Math.Abs(gradient[i]) < Flat))
+            if (IsMaximum(gradient, information, held))
             {
                 return new Maximum(point, value, information, onBound, true);
             }
 
             (var moved, var newValue, damping) = Improve(function, point, value, gradient, information, held, damping, lower, upper);
-            if (!(newValue > value))
+            if (newValue <= value)
             {
                 return new Maximum(point, value, information, onBound, false);
             }
@@ -141,6 +144,16 @@ internal static class SmallOptimiser
         return step;
     }
 
+    private static bool IsMaximum(double[] gradient, double[,] information, bool[] held)
+    {
+        if (Enumerable.Range(0, gradient.Length).All(i => held[i] || Math.Abs(gradient[i]) < Flat))
+        {
+            return true;
+        }
+
+        return NewtonStep(gradient, information, held, 0) is { } step && step.Select((by, i) => by * gradient[i]).Sum() < NoGain;
+    }
+
     private static bool[] Held(double[] point, double[] gradient, double[] lower, double[] upper)
         => [.. point.Select((x, i) => (x <= lower[i] && gradient[i] < 0) || (x >= upper[i] && gradient[i] > 0))];
 
@@ -166,6 +179,15 @@ internal static class SmallOptimiser
             var neither = function(Moved(Moved(centre, 0, -Step), 1, -Step));
             information[0, 1] = information[1, 0] =
                 -(both - up[0] - up[1] + (2 * middle) - down[0] - down[1] + neither) / (2 * Step * Step);
+        }
+
+        // Carried back from the shifted centre to the point itself.
+        for (var i = 0; i < n; i++)
+        {
+            for (var j = 0; j < n; j++)
+            {
+                gradient[i] -= information[i, j] * (point[j] - centre[j]);
+            }
         }
 
         return (gradient, information);
