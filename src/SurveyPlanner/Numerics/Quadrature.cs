@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using MathNet.Numerics.Integration;
 
 namespace SurveyPlanner.Numerics;
@@ -6,19 +7,25 @@ namespace SurveyPlanner.Numerics;
 internal static class Quadrature
 {
     private const int Nodes = 64;
-    private static readonly double[] Positions = new GaussLegendreRule(-1, 1, Nodes).Abscissas;
-    private static readonly double[] Weights = new GaussLegendreRule(-1, 1, Nodes).Weights;
+
+    /// <summary>Places and weights of the rule on [0, 1], for loops that want several integrals at once.</summary>
+    public static readonly ImmutableArray<(double Place, double Weight)> UnitRule = Rule();
 
     /// <summary>∫ from one end to the other.</summary>
     public static double Integrate(Func<double, double> integrand, double from, double to)
     {
-        var (middle, half) = ((from + to) / 2, (to - from) / 2);
         var sum = 0.0;
-        for (var i = 0; i < Nodes; i++)
+        foreach (var (place, weight) in UnitRule)
         {
-            sum += Weights[i] * integrand(middle + (half * Positions[i]));
+            sum += weight * integrand(from + ((to - from) * place));
         }
 
-        return half * sum;
+        return (to - from) * sum;
+    }
+
+    private static ImmutableArray<(double Place, double Weight)> Rule()
+    {
+        var rule = new GaussLegendreRule(0, 1, Nodes);
+        return [.. rule.Abscissas.Zip(rule.Weights)];
     }
 }

@@ -71,12 +71,18 @@ internal static class HalfNormalFit
     internal static (double Mean, double Variance) Moments(double sigma, double truncation, bool isPoints)
     {
         var end = Math.Min(truncation / sigma, Farthest);
-        var s2 = sigma * sigma;
-        var total = Integral(0);
-        var mean = Integral(2) / total;
-        var variance = (Integral(4) / total) - (mean * mean);
-        return (mean * s2, variance * s2 * s2);
+        var (total, second, fourth) = (0.0, 0.0, 0.0);
+        foreach (var (place, weight) in Quadrature.UnitRule)
+        {
+            var z = end * place;
+            var density = weight * Math.Exp(-z * z / 2) * (isPoints ? z : 1);
+            total += density;
+            second += density * z * z;
+            fourth += density * z * z * z * z;
+        }
 
-        double Integral(int power) => Quadrature.Integrate(z => Math.Pow(z, isPoints ? power + 1 : power) * Math.Exp(-z * z / 2), 0, end);
+        var s2 = sigma * sigma;
+        var mean = second / total;
+        return (mean * s2, ((fourth / total) - (mean * mean)) * s2 * s2);
     }
 }
