@@ -12,7 +12,10 @@ switch (args)
     case ["pilot-intervals", var pilots]:
         PilotIntervalStudy.Run(Console.Out, int.Parse(pilots, CultureInfo.InvariantCulture));
         break;
+    case ["interval-constructions"]:
+        IntervalConstructionStudy.Run(Console.Out);
+        break;
     default:
-        Console.Error.WriteLine("Give the name of a study: detection-fits, pilot-intervals [PILOTS].");
+        Console.Error.WriteLine("Give the name of a study: detection-fits, pilot-intervals [PILOTS], interval-constructions.");
         break;
 }

@@ -29,18 +29,14 @@ internal sealed record RateSource(double Rate, double Dispersion, double? Degree
             : null;
 
     /// <summary>
-    /// A rate and dispersion from the confidence distribution that the pilot leaves: c' = c df' / χ²(df'), and the rate as if n / c' events
-    /// of a Poisson process had been seen, gamma with shape n / c' + 1/2.
+    /// A rate and dispersion from the confidence distribution that the pilot leaves: c' = c df' / χ²(df'), and the rate as if n / c events
+    /// of a Poisson process had been seen, gamma with shape n / c + 1/2. The two are drawn apart: what ties them under negative binomial
+    /// counts is already in df'. Drawing the rate with c' instead of c covers a little more than it should (docs/methods/effort.md).
     /// </summary>
     public (double Rate, double Dispersion) Draw(ref PhiloxStream random)
     {
         var dispersion = EffectiveDegreesOfFreedom is { } df ? Dispersion * df / random.NextChiSquare(df) : Dispersion;
-        if (Count is not { } count || count == 0)
-        {
-            return (Rate, dispersion);
-        }
-
-        var events = count / dispersion;
-        return (Rate * random.NextGamma(events + 0.5) / events, dispersion);
+        var events = Count / Dispersion;
+        return (events > 0 ? Rate * random.NextGamma(events.Value + 0.5) / events.Value : Rate, dispersion);
     }
 }

@@ -18,7 +18,7 @@ public class RandomVariatesTests
     [Theory]
     [InlineData(0.4)]
     [InlineData(7)]
-    [InlineData(150)]
+    [InlineData(50)]
     public void Poisson(double mean) => Check((ref PhiloxStream random) => random.NextPoisson(mean), mean, mean, 3 + (1 / mean));
 
     /// <summary>Negative binomial with mean 12 and size 3: variance 60 = mean times 5.</summary>
