@@ -72,7 +72,7 @@ public static class PlanSurvey
             var layout = design.LayoutOf(stratum.Name);
             return new EffortStratum(stratum.Name, stratum.AreaKm2, layout.IsPoints, layout.HalfWidthMetres, layout.IsSystematic);
         });
-        return EffortPlanning.For(design.Effort, pilot, [.. strata]);
+        return EffortPlanning.For(design.Effort, pilot, [.. strata], design.Seed);
     }
 
     private static ImmutableArray<LayoutGenerator> Prepare(SurveyDesign design, Region region, EffortPlan? effort)

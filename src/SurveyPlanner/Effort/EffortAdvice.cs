@@ -1,3 +1,5 @@
+using System.Globalization;
+
 namespace SurveyPlanner.Effort;
 
 /// <summary>The sentences that go with an effort plan.</summary>
@@ -7,7 +9,43 @@ internal static class EffortAdvice
     private const string Replicates = "Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13";
 
     public static IEnumerable<Advice> For(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
-        => Basis(plan, design, strata).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan));
+        => Open(plan).Concat(Basis(plan, design, strata)).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan));
+
+    /// <summary>First what matters most: how far the pilot leaves the effort open.</summary>
+    private static IEnumerable<Advice> Open(EffortPlan plan)
+    {
+        if (plan.Required is not { } required)
+        {
+            yield break;
+        }
+
+        if (required.Interval is not { } interval)
+        {
+            if (required.Assurance is not null)
+            {
+                yield return new Advice(
+                    "An assurance is asked for, but without a pilot nothing is known of how uncertain the encounter rate is; the plain estimate is planned for.");
+            }
+
+            yield break;
+        }
+
+        var unit = plan.IsPoints ? "points" : "km";
+        var assured = required.AssuredEffort is { } effort
+            ? FormattableString.Invariant($"; {Figure(effort)} {unit} are enough with an assurance of {required.Assurance:0.##}")
+            : "";
+        yield return new Advice(
+            FormattableString.Invariant(
+                $"The pilot leaves the effort open: the truth may ask for anything from {Figure(interval.Lower)} to {Figure(interval.Upper)} {unit} (95 % interval){assured}."),
+            "Simulated draws, see docs/methods/effort.md");
+        if (plan.Uncertainty?.Measured is { } measured)
+        {
+            yield return new Advice(
+                FormattableString.Invariant(
+                    $"In {MeasuredReliability.Pilots} simulated pilots of {measured.Transects} lines with {measured.DetectionsPerTransect:0} {(measured.DetectionsPerTransect == 1 ? "detection" : "detections")} each and counts {measured.Dispersion:0} times as variable as chance, the nearest to this one that was tried, such an interval held the truth in {100 * measured.Coverage:0} % of cases, and the effort assured at 0.8 was enough in {100 * measured.Assured:0} %."),
+                "Study of simulated pilots, see docs/methods/effort.md");
+        }
+    }
 
     private static IEnumerable<Advice> Basis(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
     {
@@ -102,4 +140,7 @@ internal static class EffortAdvice
             }
         }
     }
+
+    private static string Figure(double value)
+        => value.ToString(value >= 100 ? "0" : value >= 10 ? "0.#" : "0.##", CultureInfo.InvariantCulture);
 }

@@ -39,10 +39,10 @@ internal static class EffortChecks
         (string Key, string Name, double? Value, double Least)[] figures =
         [
             ("precision.b", "b", design.B, 0),
-            ("precision.encounter_rate", "the encounter rate", design.GivenEncounterRate, 0),
+            ("pilot.encounter_rate", "the encounter rate", design.GivenEncounterRate, 0),
             ("detection.cv", "the coefficient of variation of detection", detection.GivenCv, -1),
-            ("detection.degrees_of_freedom", "the degrees of freedom of detection", detection.GivenDegreesOfFreedom, 0),
-            ("detection.effective_width", "the effective half-width", detection.GivenEffectiveWidthMetres, 0),
+            ("detection.df", "the degrees of freedom of detection", detection.GivenDegreesOfFreedom, 0),
+            ("detection.effective_half_width", "the effective half-width", detection.GivenEffectiveWidthMetres, 0),
             ("detection.truncation", "the truncation distance", detection.TruncationMetres, 0),
         ];
         foreach (var (key, name, value, least) in figures)
@@ -57,7 +57,7 @@ internal static class EffortChecks
         {
             yield return new Problem(
                 $"The cluster size has mean {Text(size.Mean)} and standard deviation {Text(size.StandardDeviation)}; give a mean of at least 1 and a standard deviation of at least 0.",
-                Key: "detection.cluster_size");
+                Key: "pilot.cluster_size");
         }
     }
 
@@ -67,7 +67,7 @@ internal static class EffortChecks
         {
             if (!(cost > 0) || !double.IsFinite(cost))
             {
-                yield return new Problem($"The cost in stratum '{name}' is {Text(cost)}; give an amount above 0.", Key: "precision.cost");
+                yield return new Problem($"The cost in stratum '{name}' is {Text(cost)}; give an amount above 0.", Key: "stratum.cost_per_km");
             }
         }
 
@@ -75,7 +75,7 @@ internal static class EffortChecks
         if (!design.CostPerUnit.IsEmpty && missing.Count > 0)
         {
             yield return new Problem(
-                $"Costs are given for some strata but not for {string.Join(", ", missing)}; give all or none.", Key: "precision.cost");
+                $"Costs are given for some strata but not for {string.Join(", ", missing)}; give all or none.", Key: "stratum.cost_per_km");
         }
     }
 
@@ -83,7 +83,7 @@ internal static class EffortChecks
     {
         if (pilot is not null && design.GivenEncounterRate is not null)
         {
-            yield return new Problem("Both a pilot and an encounter rate are given; keep one of them.", Key: "precision.encounter_rate");
+            yield return new Problem("Both a pilot and an encounter rate are given; keep one of them.", Key: "pilot.encounter_rate");
         }
 
         if (pilot is null && design.GivenEncounterRate is null && (design.TargetCv is not null || design.B is not null))
@@ -100,6 +100,15 @@ internal static class EffortChecks
                     : "The pilot counts along lines with lengths, but the layout has points; give a pilot of points with their visits.",
                 pilot.Source);
         }
+        else if (pilot is not null && pilot.Transects.All(transect => transect.Stratum.Length > 0) && !pilot.Transects.Any(SurveyedAlike))
+        {
+            yield return new Problem(
+                $"The pilot has no transects in any stratum that is surveyed {(pilot.IsPoints ? "at points" : "along lines")}; give transects of such a stratum.",
+                pilot.Source);
+        }
+
+        bool SurveyedAlike(PilotTransect transect)
+            => strata.Any(stratum => stratum.Name == transect.Stratum && stratum.IsPoints == pilot!.IsPoints);
     }
 
     private static string Text(double value) => value.ToString("G6", CultureInfo.InvariantCulture);

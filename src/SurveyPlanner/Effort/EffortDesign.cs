@@ -48,7 +48,10 @@ public sealed record EffortDesign(
 }
 
 /// <summary>What is known or assumed of detection.</summary>
-/// <param name="Models">Models to fit to the pilot's distances; empty to fit none.</param>
+/// <param name="Models">
+/// Models to fit to the pilot's distances. Empty: half-normal, hazard-rate and uniform-cosine where the pilot has distances and no figure of
+/// detection is given; otherwise none. Everything seen out to the half-width: <see cref="DetectionModel.Strip"/> alone.
+/// </param>
 /// <param name="TruncationMetres">Distance beyond which detections are left out; null for the half-width of the layout.</param>
 /// <param name="GivenCv">Coefficient of variation of the effective strip half-width (points: effective area) where given as a figure.</param>
 /// <param name="GivenDegreesOfFreedom">Its degrees of freedom; null for many.</param>
@@ -61,6 +64,9 @@ public sealed record DetectionDesign(
     double? GivenEffectiveWidthMetres)
 {
     public static readonly DetectionDesign None = new([], null, null, null, null);
+
+    /// <summary>Whether each stratum has a detection function of its own; else one serves all.</summary>
+    public bool ByStratum { get; init; }
 }
 
 /// <summary>Cluster size as given figures.</summary>

@@ -49,6 +49,9 @@ public static class RandomPurpose
 
     /// <summary>Integration of expected effort over the random offset.</summary>
     public const uint Expectation = 5;
+
+    /// <summary>What a pilot leaves possible of its own figures.</summary>
+    public const uint PilotDraw = 6;
 }
 
 /// <summary>

@@ -13,7 +13,10 @@ public sealed record ClusterSize(double Mean, double StandardDeviation, int? Det
     /// <summary>(sd / mean)²: what cluster size adds to b.</summary>
     public double RelativeVariance => Math.Pow(StandardDeviation / Mean, 2);
 
-    /// <summary>From detections; null with fewer than two, or when every animal was alone and there are no clusters to speak of.</summary>
+    /// <summary>Variance of the logarithm of <see cref="RelativeVariance"/> as estimated (delta method, from the sample itself); 0 where given.</summary>
+    internal double LogVariance { get; init; }
+
+    /// <summary>From detections; null with fewer than two, or when all sizes are 1 and there are no clusters to speak of.</summary>
     public static ClusterSize? Of(ImmutableArray<PilotDetection> detections)
     {
         if (detections.Length < 2 || detections.All(detection => detection.Size == 1))
@@ -23,6 +26,11 @@ public sealed record ClusterSize(double Mean, double StandardDeviation, int? Det
 
         var mean = detections.Average(detection => (double)detection.Size);
         var squares = detections.Sum(detection => Math.Pow(detection.Size - mean, 2));
-        return new ClusterSize(mean, Math.Sqrt(squares / (detections.Length - 1)), detections.Length);
+        var variance = squares / (detections.Length - 1);
+
+        // What each detection moves ln(variance / mean²) by, its influence.
+        var influences = detections.Sum(detection => Math.Pow(
+            (Math.Pow(detection.Size - mean, 2) / variance) - 1 - (2 * (detection.Size - mean) / mean), 2));
+        return new ClusterSize(mean, Math.Sqrt(variance), detections.Length) { LogVariance = influences / Math.Pow(detections.Length, 2) };
     }
 }

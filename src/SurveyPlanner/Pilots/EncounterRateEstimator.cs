@@ -30,4 +30,18 @@ internal static class EncounterRateEstimators
             EncounterRateEstimator.OverlappingPairs => OverlappingPairs.Variance(transects),
             _ => throw new ArgumentOutOfRangeException(nameof(estimator)),
         };
+
+    /// <summary>
+    /// Degrees of freedom of the chi-square whose spread the variance estimate has under independent normal counts of equal effort. For
+    /// overlapping pairs 2(K - 1)² / (3K - 4), from the variance of the mean square successive difference (von Neumann and others 1941, from
+    /// memory; held against simulation in the tests): about two thirds of the K - 1 by convention.
+    /// </summary>
+    public static double ChiSquareDegreesOfFreedom(this EncounterRateEstimator estimator, int transects)
+        => estimator switch
+        {
+            EncounterRateEstimator.RandomLines => transects - 1,
+            EncounterRateEstimator.AdjacentPairs => transects - Math.Max(1, transects / 2),
+            EncounterRateEstimator.OverlappingPairs => 2.0 * (transects - 1) * (transects - 1) / ((3 * transects) - 4),
+            _ => throw new ArgumentOutOfRangeException(nameof(estimator)),
+        };
 }

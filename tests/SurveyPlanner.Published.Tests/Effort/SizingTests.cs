@@ -58,9 +58,9 @@ public class SizingTests
     [Fact]
     public void Components_add_up_with_Satterthwaites_degrees_of_freedom()
     {
-        var two = EffortModel.Decompose([(CvSource.EncounterRate, 0.2, 9), (CvSource.Detection, 0.1, 59)]);
+        var two = CvDecomposition.Of([(CvSource.EncounterRate, 0.2, 9), (CvSource.Detection, 0.1, 59)]);
         Check(two, 0.223606797750, 13.929695697796, 1.60636768493, [0.8, 0.2]);
-        var three = EffortModel.Decompose([(CvSource.EncounterRate, 0.2, 9), (CvSource.Detection, 0.1, 59), (CvSource.ClusterSize, 0.05, 59)]);
+        var three = CvDecomposition.Of([(CvSource.EncounterRate, 0.2, 9), (CvSource.Detection, 0.1, 59), (CvSource.ClusterSize, 0.05, 59)]);
         Check(three, 0.229128784748, 15.348430228747, 1.61800034653, [0.76190476, 0.19047619, 0.047619048]);
     }
 
@@ -76,5 +76,6 @@ public class SizingTests
         => EffortPlanning.For(
             EffortDesign.None with { TargetCv = cv, GivenEncounterRate = rate, B = 3, ClusterSize = size },
             null,
-            [new EffortStratum("all", 100, isPoints, 100, true)]);
+            [new EffortStratum("all", 100, isPoints, 100, true)],
+            1);
 }

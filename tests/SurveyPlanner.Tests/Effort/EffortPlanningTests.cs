@@ -6,17 +6,19 @@ namespace SurveyPlanner.Tests.Effort;
 
 public class EffortPlanningTests
 {
+    private const ulong Seed = 1;
+
     private static readonly EffortStratum Whole = new("all", 400, false, 100, true);
     private static readonly EffortDesign Target = EffortDesign.None with { TargetCv = 0.2 };
 
     [Fact]
     public void Without_pilot_rate_or_target_there_is_no_plan()
-        => Assert.Null(EffortPlanning.For(EffortDesign.None, null, [Whole]));
+        => Assert.Null(EffortPlanning.For(EffortDesign.None, null, [Whole], Seed));
 
     [Fact]
     public void The_effort_for_a_target_delivers_the_target()
     {
-        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), [Whole], Seed)!;
         Assert.Equal(0.2, plan.CvAt(plan.Required!.Effort)!.Cv, 1e-12);
         Assert.Equal(BOrigin.Pilot, plan.B.Origin);
         Assert.Equal(EncounterRateEstimator.OverlappingPairs, plan.Estimator);
@@ -27,7 +29,7 @@ public class EffortPlanningTests
     public void B_is_detections_times_squared_cv()
     {
         var design = Target with { ClusterSize = new GivenClusterSize(4, 3) };
-        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole], Seed)!;
         Assert.Equal(EffortFormula.B(28, plan.PilotCv!.Cv), plan.B.Value, 1e-12);
         Assert.Equal(0.5625, plan.B.ClusterSizePart!.Value, 1e-12);
     }
@@ -36,8 +38,8 @@ public class EffortPlanningTests
     public void Splitting_a_region_into_like_strata_changes_nothing_under_proportional_allocation()
     {
         var pilot = Pilot([3, 5, 2, 8, 4, 6]);
-        var one = EffortPlanning.For(Target, pilot, [Whole])!;
-        var two = EffortPlanning.For(Target, pilot, [Whole with { Name = "a", AreaKm2 = 100 }, Whole with { Name = "b", AreaKm2 = 300 }])!;
+        var one = EffortPlanning.For(Target, pilot, [Whole], Seed)!;
+        var two = EffortPlanning.For(Target, pilot, [Whole with { Name = "a", AreaKm2 = 100 }, Whole with { Name = "b", AreaKm2 = 300 }], Seed)!;
         Assert.Equal(one.Required!.Effort, two.Required!.Effort, 1e-9);
         Assert.Equal([0.25, 0.75], two.Strata.Select(stratum => stratum.Share));
     }
@@ -45,7 +47,7 @@ public class EffortPlanningTests
     [Fact]
     public void One_transect_falls_back_on_the_rule_of_thumb_and_says_so()
     {
-        var plan = EffortPlanning.For(Target, Pilot([7]), [Whole])!;
+        var plan = EffortPlanning.For(Target, Pilot([7]), [Whole], Seed)!;
         Assert.Equal(BOrigin.RuleOfThumb, plan.B.Origin);
         Assert.Equal(3 / 0.04 / 3.5, plan.Required!.Effort, 1e-9);
         Assert.Null(plan.PilotCv);
@@ -56,7 +58,7 @@ public class EffortPlanningTests
     [Fact]
     public void Equal_counts_do_not_promise_a_variance_of_nothing()
     {
-        var plan = EffortPlanning.For(Target, Pilot([4, 4, 4, 4]), [Whole])!;
+        var plan = EffortPlanning.For(Target, Pilot([4, 4, 4, 4]), [Whole], Seed)!;
         Assert.Equal(1, plan.B.EncounterRatePart!.Value, 1e-12);
         Assert.Contains(plan.Advice, advice => advice.Message.Contains("Poisson", StringComparison.Ordinal));
     }
@@ -65,11 +67,11 @@ public class EffortPlanningTests
     public void A_detection_cv_taken_as_given_stays_whatever_the_effort()
     {
         var design = Target with { Detection = DetectionDesign.None with { GivenCv = 0.1 } };
-        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        var plan = EffortPlanning.For(design, Pilot([3, 5, 2, 8, 4, 6]), [Whole], Seed)!;
         Assert.Equal(0.2, plan.CvAt(plan.Required!.Effort)!.Cv, 1e-12);
         Assert.InRange(plan.CvAt(1e12)!.Cv, 0.1, 0.1001);
 
-        var hopeless = EffortPlanning.For(design with { TargetCv = 0.1 }, Pilot([3, 5, 2, 8, 4, 6]), [Whole])!;
+        var hopeless = EffortPlanning.For(design with { TargetCv = 0.1 }, Pilot([3, 5, 2, 8, 4, 6]), [Whole], Seed)!;
         Assert.Null(hopeless.Required);
         Assert.Contains(hopeless.Advice, advice => advice.Message.StartsWith("No effort reaches", StringComparison.Ordinal));
     }
@@ -77,7 +79,7 @@ public class EffortPlanningTests
     [Fact]
     public void Strata_of_the_other_kind_are_left_out_and_named()
     {
-        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2]), [Whole, Whole with { Name = "hut", IsPoints = true }])!;
+        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2]), [Whole, Whole with { Name = "hut", IsPoints = true }], Seed)!;
         Assert.Equal("all", Assert.Single(plan.Strata).Name);
         Assert.Contains(plan.Advice, advice => advice.Message.Contains("'hut' is left out", StringComparison.Ordinal));
     }
@@ -87,7 +89,7 @@ public class EffortPlanningTests
     {
         var pilot = new PilotTable(
             false, [new("a", "1", 2, 3), new("a", "2", 2, 5), new("b", "3", 2, 0), new("b", "4", 2, 0)], []);
-        var plan = EffortPlanning.For(Target, pilot, [Whole with { Name = "a" }, Whole with { Name = "b" }])!;
+        var plan = EffortPlanning.For(Target, pilot, [Whole with { Name = "a" }, Whole with { Name = "b" }], Seed)!;
         Assert.Null(plan.Strata[1].Cv);
         Assert.Null(plan.Strata[1].EffortForOwnTarget);
         Assert.Contains(plan.Advice, advice => advice.Message.Contains("saw nothing in stratum 'b'", StringComparison.Ordinal));
@@ -126,12 +128,12 @@ public class EffortPlanningTests
     public void A_pilot_of_lines_does_not_size_points()
     {
         var problems = Assert.Throws<InputException>(
-            () => EffortPlanning.For(Target, Pilot([1, 2]), [Whole with { IsPoints = true }])).Problems;
+            () => EffortPlanning.For(Target, Pilot([1, 2]), [Whole with { IsPoints = true }], Seed)).Problems;
         Assert.Contains("give a pilot of points", Assert.Single(problems).Message, StringComparison.Ordinal);
     }
 
     private static IReadOnlyList<Problem> Refused(EffortDesign design)
-        => Assert.Throws<InputException>(() => EffortPlanning.For(design, null, [Whole])).Problems;
+        => Assert.Throws<InputException>(() => EffortPlanning.For(design, null, [Whole], Seed)).Problems;
 
     /// <summary>Lines of 2 km without stratum names.</summary>
     private static PilotTable Pilot(int[] counts)

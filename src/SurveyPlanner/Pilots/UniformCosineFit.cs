@@ -1,0 +1,54 @@
+namespace SurveyPlanner.Pilots;
+
+/// <summary>
+/// One and two cosine terms, the better by AIC. Coefficients stay where the function falls everywhere and is nowhere below 0: a_1 from 0 to 1
+/// with one term; with two the triangle (0, 0), (4/3, 1/3), (4/5, -1/5), searched as share s of the way from the first corner to the
+/// point t of the opposite side.
+/// </summary>
+internal static class UniformCosineFit
+{
+    public static DetectionFit Fit(DistanceSample data)
+    {
+        var (one, two) = (Fit(data, 1), Fit(data, 2));
+        return two.Aic < one.Aic ? two : one;
+    }
+
+    private static DetectionFit Fit(DistanceSample data, int terms)
+    {
+        var w = data.Truncation;
+        var first = data.Distances.Select(x => Math.Cos(Math.PI * x / w)).ToArray();
+        var second = data.Distances.Select(x => Math.Cos(2 * Math.PI * x / w)).ToArray();
+        var fit = new BoxFit(
+            DetectionModel.UniformCosine,
+            point => new UniformCosineDetection(w, [.. Coefficients(point)]),
+            [.. Enumerable.Repeat(0.0, terms)],
+            [.. Enumerable.Repeat(1.0, terms)],
+            "A coefficient is at its bound, beyond which the function would rise with distance or fall below 0.");
+        return fit.Fit(data, LogLikelihood, terms == 1 ? [0.5] : [0.5, 0.5]);
+
+        double LogLikelihood(double[] point)
+        {
+            var a = Coefficients(point);
+            var sum = 0.0;
+            for (var i = 0; i < first.Length; i++)
+            {
+                sum += Math.Log(1 + (a[0] * first[i]) + (a.Length > 1 ? a[1] * second[i] : 0));
+            }
+
+            // Only the odd term has an integral over the plane that is not 0: 2 a_1 (-2) / π².
+            var scale = data.IsPoints ? w * w * (1 - (4 * a[0] / (Math.PI * Math.PI))) : w;
+            return sum - (first.Length * Math.Log(scale));
+        }
+    }
+
+    private static double[] Coefficients(double[] point)
+    {
+        if (point.Length == 1)
+        {
+            return [point[0]];
+        }
+
+        var (s, t) = (point[0], point[1]);
+        return [s * (((1 - t) * 4 / 3) + (t * 4 / 5)), s * (((1 - t) / 3) - (t / 5))];
+    }
+}

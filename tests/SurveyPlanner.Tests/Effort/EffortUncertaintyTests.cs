@@ -1,0 +1,89 @@
+using SurveyPlanner.Effort;
+using SurveyPlanner.Pilots;
+using SurveyPlanner.Simulated;
+
+namespace SurveyPlanner.Tests.Effort;
+
+/// <summary>
+/// A fast part of the study of simulated pilots; the whole of it, 2,000 pilots a row, is run by the benchmarks
+/// (<c>pilot-intervals</c>) and its figures stand in docs/methods/effort.md.
+/// </summary>
+public class EffortUncertaintyTests
+{
+    /// <summary>150 pilots, 4 standard errors about the nominal shares, seed 41; the interval may hold the truth more often than it says.</summary>
+    [Theory]
+    [InlineData(10, 3, 2)]
+    [InlineData(20, 3, 1)]
+    public void Intervals_hold_the_truth_and_assured_efforts_are_enough_as_often_as_they_say(int lines, double perLine, double dispersion)
+    {
+        var truth = new PilotTruth(lines, perLine, dispersion);
+        var results = Enumerable.Range(0, 150)
+            .Select(i => truth.Draw(41, 0, (uint)i))
+            .Where(pilot => pilot is not null)
+            .Select(pilot => truth.Plan(pilot!, 0.8, 41, DetectionModel.HalfNormal).Required!)
+            .ToList();
+        double Share(Func<RequiredEffort, bool> holds) => (double)results.Count(holds) / results.Count;
+
+        var covered = Share(required => required.Interval!.Lower <= truth.RequiredKm && truth.RequiredKm <= required.Interval.Upper);
+        Assert.InRange(covered, 0.95 - (4 * Math.Sqrt(0.95 * 0.05 / results.Count)), 1);
+        Assert.Equal(0.8, Share(required => required.AssuredEffort >= truth.RequiredKm), 4 * Math.Sqrt(0.8 * 0.2 / results.Count));
+    }
+
+    [Fact]
+    public void The_same_seed_gives_the_same_figures_and_another_seed_nearly_the_same()
+    {
+        var truth = new PilotTruth(12, 4, 1.5, Clusters: true);
+        var pilot = truth.Draw(42, 0, 0)!;
+        var (a, b, other) = (Of(1), Of(1), Of(2));
+        Assert.Equal(a, b);
+        Assert.NotEqual(a, other);
+
+        // The 80 % quantile of 2,000 draws has a standard error of about 2 % where the logarithm spreads by 0.5.
+        Assert.Equal(1, other.AssuredFactor!.Value / a.AssuredFactor!.Value, 0.1);
+
+        EffortUncertainty Of(ulong seed) => truth.Plan(pilot, 0.8, seed).Uncertainty!;
+    }
+
+    [Fact]
+    public void More_assurance_takes_more_effort()
+    {
+        var truth = new PilotTruth(10, 5, 2);
+        var pilot = truth.Draw(43, 0, 0)!;
+        var efforts = new[] { 0.5, 0.7, 0.8, 0.9, 0.95 }.Select(assurance => truth.Plan(pilot, assurance, 1).Required!.AssuredEffort!.Value).ToList();
+        Assert.Equal(efforts.Order(), efforts);
+        Assert.True(efforts[^1] > 1.2 * efforts[0]);
+    }
+
+    [Fact]
+    public void Figures_given_for_certain_leave_nothing_open()
+    {
+        var design = EffortDesign.None with { TargetCv = 0.2, GivenEncounterRate = 0.5, B = 3, Assurance = 0.8 };
+        var plan = EffortPlanning.For(design, null, [new EffortStratum("all", 100, false, 100, true)], 1)!;
+        Assert.Null(plan.Uncertainty);
+        Assert.Null(plan.Required!.AssuredEffort);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("assurance", StringComparison.Ordinal));
+    }
+
+    /// <summary>With b given only the encounter rate is open: about a gamma, cv² = b / n.</summary>
+    [Fact]
+    public void A_given_b_leaves_the_encounter_rate_open()
+    {
+        var pilot = new PilotTable(false, [new("", "1", 10, 60), new("", "2", 10, 60)], []);
+        var plan = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2, B = 3 }, pilot, [new EffortStratum("all", 100, false, 100, true)], 1)!;
+        var spread = Math.Log(plan.Uncertainty!.Factors.Upper / plan.Uncertainty.Factors.Lower) / (2 * 1.96);
+        Assert.Equal(Math.Sqrt(3 / 120.0), spread, 0.015);
+        Assert.Null(plan.Uncertainty.Measured);
+    }
+
+    [Fact]
+    public void Curves_meet_the_required_effort_and_widen_by_the_interval()
+    {
+        var truth = new PilotTruth(15, 4, 2);
+        var plan = truth.Plan(truth.Draw(44, 0, 0)!, 0.8, 1);
+        var atTarget = plan.Curves.EffortAgainstTarget.Single(point => Math.Abs(point.TargetCv - 0.2) < 1e-9);
+        Assert.Equal(plan.Required!.Effort, atTarget.Effort, 1e-9);
+        Assert.Equal(plan.Required.Interval!.Upper, atTarget.Interval!.Upper, 1e-9);
+        Assert.All(plan.Curves.CvAgainstEffort, point => Assert.True(point.LowerCv < point.Cv && point.Cv < point.UpperCv));
+        Assert.All(plan.Curves.CvAgainstEffort, point => Assert.Equal(plan.CvAt(point.Effort)!.Cv, point.Cv, 1e-12));
+    }
+}
