@@ -4,8 +4,8 @@ namespace SurveyPlanner.Files.Folders;
 internal static class DiskTrouble
 {
     // Error numbers of Linux and macOS as .NET hands them on, and the Windows code for a full disk.
+    public const int FileTooBig = 27;
     private const int NoSpace = 28;
-    private const int FileTooBig = 27;
     private const int ReadOnlyFileSystem = 30;
     private const int OverQuotaLinux = 122;
     private const int OverQuotaMac = 69;

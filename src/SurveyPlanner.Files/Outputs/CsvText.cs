@@ -1,3 +1,4 @@
+using System.Buffers;
 using System.Text;
 
 namespace SurveyPlanner.Files.Outputs;
@@ -7,17 +8,23 @@ namespace SurveyPlanner.Files.Outputs;
 /// </summary>
 internal sealed class CsvText
 {
-    private readonly StringBuilder _text = new();
+    private readonly ArrayBufferWriter<byte> _text = new();
 
-    public CsvText(string header) => _text.Append(header).Append('\n');
+    public CsvText(string header) => Row(header);
 
     /// <summary>Adds a row of cells made by <see cref="Cell"/> or <see cref="Figures"/>.</summary>
     public void Row(params ReadOnlySpan<string> cells)
     {
-        _text.AppendJoin(',', cells).Append('\n');
+        for (var i = 0; i < cells.Length; i++)
+        {
+            _text.Write(i == 0 ? ""u8 : ","u8);
+            Encoding.UTF8.GetBytes(cells[i], _text);
+        }
+
+        _text.Write("\n"u8);
     }
 
-    public OutputFile ToFile(string name) => new(name, Encoding.UTF8.GetBytes(_text.ToString()));
+    public OutputFile ToFile(string name) => new(name, _text.WrittenMemory);
 
     /// <summary>
     /// A cell of text. What a spreadsheet would take for a formula gets an apostrophe in front; control characters and line ends become spaces.

@@ -11,7 +11,16 @@ internal static class Figures
     /// <summary>Decimals of a longitude or latitude: about 1 cm on the ground.</summary>
     private const int PositionDecimals = 7;
 
-    /// <summary>Rounded to a number of decimals.</summary>
+    /// <summary>Beyond this, units of the last decimal are no longer counted exactly by a double.</summary>
+    private const double MostUnits = 1e15;
+
+    /// <summary>Powers of ten that a double holds exactly, so that results are the same on every system.</summary>
+    private static readonly double[] Powers =
+    [
+        1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19, 1e20, 1e21, 1e22,
+    ];
+
+    /// <summary>Rounded to a number of decimals, halves away from zero.</summary>
     /// <exception cref="InvalidOperationException">The value is not finite, which is a fault of this program.</exception>
     public static string Fixed(double value, int decimals)
     {
@@ -20,26 +29,29 @@ internal static class Figures
             throw new InvalidOperationException("A figure to be written is not a number.");
         }
 
-        var text = value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
-        if (decimals > 0)
+        if (decimals < Powers.Length && value * Powers[decimals] is > -MostUnits and < MostUnits)
         {
-            text = text.TrimEnd('0').TrimEnd('.');
+            return InUnits((long)Math.Round(value * Powers[decimals], MidpointRounding.AwayFromZero), decimals);
         }
 
-        return text is "-0" ? "0" : text;
+        var text = value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+        var trimmed = decimals > 0 ? text.TrimEnd('0').TrimEnd('.') : text;
+        return trimmed is "-0" ? "0" : trimmed;
     }
 
-    /// <summary>Rounded to a number of significant digits; whole digits are never rounded away.</summary>
+    /// <summary>Rounded to a number of significant digits; whole digits are never rounded away, and below 1e-22 fewer are kept.</summary>
     public static string Significant(double value, int digits)
     {
-        if (value == 0 || !double.IsFinite(value))
+        // Not by a logarithm: those differ in the last bit between systems.
+        var (size, exponent) = (Math.Abs(value), 0);
+        for (; exponent < Powers.Length - 1 && size >= Powers[exponent + 1]; exponent++)
         {
-            return Fixed(value, 0);
         }
 
-        // The exponent after rounding, read from the text: logarithms differ in the last bit between systems.
-        var scientific = value.ToString("E" + (digits - 1).ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
-        var exponent = int.Parse(scientific.AsSpan(scientific.IndexOf('E', StringComparison.Ordinal) + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+        for (; size is > 0 and < 1 && exponent > 1 - Powers.Length && size * Powers[-exponent] < 1; exponent--)
+        {
+        }
+
         return Fixed(value, Math.Max(0, digits - 1 - exponent));
     }
 
@@ -67,5 +79,35 @@ internal static class Figures
     {
         var text = Fixed(Longitudes.Normalise(value), decimals);
         return text == "180" ? "-180" : text;
+    }
+
+    /// <summary>A whole number of units of the last decimal, needless zeros left out.</summary>
+    private static string InUnits(long units, int decimals)
+    {
+        while (decimals > 0 && units % 10 == 0)
+        {
+            (units, decimals) = (units / 10, decimals - 1);
+        }
+
+        Span<char> text = stackalloc char[48];
+        var start = text.Length;
+        var rest = Math.Abs(units);
+        for (var place = 0; place <= decimals || rest > 0; place++)
+        {
+            if (place > 0 && place == decimals)
+            {
+                text[--start] = '.';
+            }
+
+            text[--start] = (char)('0' + (rest % 10));
+            rest /= 10;
+        }
+
+        if (units < 0)
+        {
+            text[--start] = '-';
+        }
+
+        return new string(text[start..]);
     }
 }

@@ -96,8 +96,7 @@ public sealed class DrawsFile : IDisposable
         {
             stream.SetLength(lines.End);
             stream.Position = lines.End;
-            stream.Write(lines.Line(draw).Span);
-            stream.Flush(flushToDisk: true);
+            Disk.WriteThrough(stream, lines.Line(draw).Span);
         }
         catch
         {

@@ -1,5 +1,7 @@
 using System.Globalization;
 using System.Text.Json;
+using SurveyPlanner.Files.Folders;
+using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Files.Records;
 
@@ -16,6 +18,11 @@ public static class RecordReader
         byte[] bytes;
         try
         {
+            if (Directory.Exists(file))
+            {
+                throw new InputException(new Problem($"This is a folder; give the {OutputNames.Record} in it.", file));
+            }
+
             if (new FileInfo(file).Length > MaxBytes)
             {
                 throw new InputException(new Problem("This file is too large to be a record.", file));
@@ -23,9 +30,9 @@ public static class RecordReader
 
             bytes = File.ReadAllBytes(file);
         }
-        catch (Exception exception) when (Folders.DiskTrouble.Is(exception))
+        catch (Exception exception) when (DiskTrouble.Is(exception))
         {
-            throw Folders.DiskTrouble.Unread(file, exception);
+            throw DiskTrouble.Unread(file, exception);
         }
 
         return Read(bytes, file);
@@ -62,7 +69,7 @@ public static class RecordReader
             survey.Get("seed").Seed(),
             survey.Get("generator").Text(),
             root.Find("draw") is { } draw ? Draw(draw) : null,
-            new RecordedPlan(plan.Get("file").Text(), plan.Get("sha256").Hash(), plan.Get("text").Text(), plan.Get("canonical_text").Text()),
+            new RecordedPlan(plan.Get("file").Way(), plan.Get("sha256").Hash(), plan.Get("text").Text(), plan.Get("canonical_text").Text()),
             [.. root.Get("inputs").Items().Select(Input)],
             Region(root.Get("region")),
             root.Get("layout").Get("sha256").Hash(),
@@ -83,7 +90,7 @@ public static class RecordReader
         draw.Find("reason")?.Text());
 
     private static InputFile Input(Member input) => new(
-        input.Get("key").Text(), input.Get("path").Text(), input.Get("bytes").Whole(), input.Get("sha256").Hash());
+        input.Get("key").Text(), input.Get("path").Way(), input.Get("bytes").Whole(), input.Get("sha256").Hash());
 
     private static RecordedOutput Output(Member output) => new(
         output.Get("name").Text(), output.Get("bytes").Whole(), output.Get("sha256").Hash());
@@ -130,6 +137,8 @@ public static class RecordReader
         }
 
         public string Text() => Element.ValueKind == JsonValueKind.String ? Element.GetString()! : throw Trouble("should be text");
+
+        public string Way() => Text() is { Length: > 0 } text && !text.Contains('\0', StringComparison.Ordinal) ? text : throw Trouble("should be a path");
 
         public string Hash() => Text() is { Length: 64 } text && text.All(char.IsAsciiHexDigitLower)
             ? text

@@ -1,7 +1,5 @@
 using System.Text.Json;
-using SurveyPlanner.Effort;
 using SurveyPlanner.Files.Outputs;
-using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Files.Tests.Outputs;
 
@@ -56,7 +54,7 @@ public sealed class SummaryWriterTests
     [Fact]
     public void Effort_has_its_figures_with_units_and_leaves_out_what_does_not_apply()
     {
-        using var document = JsonDocument.Parse(SummaryWriter.Write(WithEffort(), draw: 1).Content);
+        using var document = JsonDocument.Parse(SummaryWriter.Write(TestPlans.WithEffort(), draw: 1).Content);
         var effort = document.RootElement.GetProperty("effort");
 
         Assert.Equal(
@@ -78,7 +76,7 @@ public sealed class SummaryWriterTests
     [Fact]
     public void Effort_figures_are_those_of_the_plan()
     {
-        var plan = WithEffort();
+        var plan = TestPlans.WithEffort();
         using var document = JsonDocument.Parse(SummaryWriter.Write(plan, draw: 1).Content);
         var effort = document.RootElement.GetProperty("effort");
 
@@ -92,7 +90,7 @@ public sealed class SummaryWriterTests
     [Fact]
     public void Effort_alone_has_the_same_form()
     {
-        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, WithEffort().Effort!)));
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, TestPlans.WithEffort().Effort!)));
 
         Assert.Equal(["format_version", "strata", "effort"], Keys(document.RootElement));
         Assert.Equal(["name", "effort"], Keys(document.RootElement.GetProperty("strata")[0]));
@@ -117,16 +115,6 @@ public sealed class SummaryWriterTests
         Assert.Equal(["transects.geojson", "transects.gpx", "waypoints.csv", "coverage.csv", "summary.json"], files.Select(file => file.Name));
         Assert.All(files, file => Assert.Contains(file.Name, OutputNames.All));
         Assert.Equal(files.Select(file => file.Sha256), SurveyFiles.Of(TestPlans.TwoStrata(), draw: 1).Select(file => file.Sha256));
-    }
-
-    /// <summary>A pilot of three lines over the strata with lines, and a target of 20 %.</summary>
-    private static SurveyPlan WithEffort()
-    {
-        var plan = TestPlans.TwoStrata();
-        var pilot = new PilotTable(false, [new("", "1", 2, 4), new("", "2", 2, 6), new("", "3", 2, 8)], []);
-        var strata = plan.Strata.Select(stratum =>
-            new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
-        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata], 1) };
     }
 
     private static IEnumerable<string> Keys(JsonElement element) => element.EnumerateObject().Select(member => member.Name);

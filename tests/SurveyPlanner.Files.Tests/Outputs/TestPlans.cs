@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using SurveyPlanner.Coverage;
 using SurveyPlanner.Effort;
 using SurveyPlanner.Layouts;
+using SurveyPlanner.Pilots;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Files.Tests.Outputs;
@@ -21,6 +22,16 @@ internal static class TestPlans
             Line("A001", 1, 0, Path(-150.6, 63.0, -150.6, 63.2)),
             Line("A002", 2, 180, Path(-150.5, 63.2, -150.5, 63.15), Path(-150.5, 63.11, -150.5, 63.0))),
         Points(HostileName, Point("B001", 3, -150.4, 63.05), Point("B002", 4, -150.3, 63.05)));
+
+    /// <summary>The same with a pilot of three lines over the strata with lines, and a target of 20 %.</summary>
+    public static SurveyPlan WithEffort()
+    {
+        var plan = TwoStrata();
+        var pilot = new PilotTable(false, [new("", "1", 2, 4), new("", "2", 2, 6), new("", "3", 2, 8)], []);
+        var strata = plan.Strata.Select(stratum =>
+            new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
+        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata]) };
+    }
 
     /// <summary>One stratum of lines round any place, without coverage.</summary>
     public static SurveyPlan OneStratum(LonLat centre, params Transect[] transects) => Plan(centre, Lines("All", transects) with { Coverage = null });

@@ -111,6 +111,8 @@ public sealed class RecordTests : IDisposable
     [InlineData("region.area_km2", "\"large\"")]
     [InlineData("region.projection", "[]")]
     [InlineData("inputs", "{}")]
+    [InlineData("plan.file", "\"a\\u0000b\"")]
+    [InlineData("plan.file", "\"\"")]
     [InlineData("format_version", "2")]
     public void A_value_that_makes_no_sense_is_named_with_its_place(string path, string value)
     {
@@ -151,7 +153,7 @@ public sealed class RecordTests : IDisposable
     {
         var trouble = Assert.Throws<IOException>(() => RecordReader.Read(_folder.At("none.json")));
         Assert.EndsWith("does not exist: give the path of a file that does.", trouble.Message, StringComparison.Ordinal);
-        Assert.Throws<IOException>(() => RecordReader.Read(_folder.Path));
+        Assert.Contains("give the record.json in it", Assert.Throws<InputException>(() => RecordReader.Read(_folder.Path)).Message, StringComparison.Ordinal);
     }
 
     [Fact]
