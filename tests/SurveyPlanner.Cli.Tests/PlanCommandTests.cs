@@ -73,7 +73,7 @@ public class PlanCommandTests
 
     /// <summary>The executable itself, where comma is the decimal sign and the day begins elsewhere.</summary>
     [Fact]
-    public void Locale_and_time_zone_change_nothing()
+    public async Task Locale_and_time_zone_change_nothing()
     {
         using var work = new Workspace();
         work.CopySamples();
@@ -89,9 +89,9 @@ public class PlanCommandTests
             start.Environment["TZ"] = zone;
             using var process = System.Diagnostics.Process.Start(start)!;
             var error = process.StandardError.ReadToEndAsync(TestContext.Current.CancellationToken);
-            process.StandardOutput.ReadToEnd();
-            process.WaitForExit();
-            Assert.True(process.ExitCode == 0, error.Result);
+            await process.StandardOutput.ReadToEndAsync(TestContext.Current.CancellationToken);
+            await process.WaitForExitAsync(TestContext.Current.CancellationToken);
+            Assert.True(process.ExitCode == 0, await error);
         }
 
         foreach (var file in Files.Except(["record.json"]))

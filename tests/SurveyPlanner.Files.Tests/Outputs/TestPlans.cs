@@ -30,7 +30,7 @@ internal static class TestPlans
         var pilot = new PilotTable(false, [new("", "1", 2, 4), new("", "2", 2, 6), new("", "3", 2, 8)], []);
         var strata = plan.Strata.Select(stratum =>
             new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
-        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata]) };
+        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata], seed: 1) };
     }
 
     /// <summary>One stratum of lines round any place, without coverage.</summary>

@@ -18,7 +18,7 @@ public class CanonicalPlanTests
             layout.lines = 20
             precision.allocation = "proportional"
             precision.min_lines = 10
-            region.boundary = "moor.geojson"
+            region.boundary = ["moor.geojson"]
             survey.name = "a"
 
             """,
