@@ -38,7 +38,7 @@ public static class PlanSurvey
         var effort = PlanEffort(design, region, inputs.Pilot);
         var generators = Prepare(design, region, effort);
         var layouts = LayoutDrawer.Draw(generators, region.Projection, design.Seed);
-        var coverage = ComputeCoverage(design, region, generators, options);
+        var coverage = ComputeCoverage(design, region, generators, layouts, options);
         var strata = region.Strata.Select((stratum, i) => new StratumPlan(stratum, layouts[i], coverage[i]));
         return new SurveyPlan(design, region, [.. strata], effort, Notices(region, inputs.Pilot, layouts));
     }
@@ -75,6 +75,22 @@ public static class PlanSurvey
         return EffortPlanning.For(design.Effort, pilot, [.. strata], design.Seed);
     }
 
+    /// <summary>
+    /// Coverage probability at given positions, of the detections of a finished survey say; nothing is drawn that counts.
+    /// Exact where the layout has a closed form, and simulated at exactly these positions. Results in the order of the positions;
+    /// a position outside the region is marked so.
+    /// </summary>
+    /// <exception cref="InputException">The input, or the design it asks for, cannot work.</exception>
+    /// <exception cref="OperationCanceledException">Stopped from outside.</exception>
+    public static ImmutableArray<PositionCoverage> CoverageAt(
+        SurveyDesign design, SurveyInputs inputs, IReadOnlyList<LonLat> positions, RunOptions options)
+    {
+        var region = ReadRegion(design, inputs);
+        var generators = Prepare(design, region, PlanEffort(design, region, inputs.Pilot));
+        var calculator = new CoverageCalculator(design.Coverage, design.Seed, options.Threads, options.Stop);
+        return CoverageAtPositions.Of(positions, region.Projection, generators, calculator, options.Progress);
+    }
+
     private static ImmutableArray<LayoutGenerator> Prepare(SurveyDesign design, Region region, EffortPlan? effort)
         => [.. region.Strata.Select(stratum => LayoutKinds.Prepare(stratum, Sized(design.LayoutOf(stratum.Name), stratum.Name, effort)))];
 
@@ -98,19 +114,14 @@ public static class PlanSurvey
     }
 
     private static ImmutableArray<StratumCoverage> ComputeCoverage(
-        SurveyDesign design, Region region, ImmutableArray<LayoutGenerator> generators, RunOptions options)
+        SurveyDesign design, Region region, ImmutableArray<LayoutGenerator> generators, ImmutableArray<Layout> layouts, RunOptions options)
     {
         var sizes = CellSizes.For(region.Strata, design.Coverage);
-        var done = 0;
+        var calculator = new CoverageCalculator(design.Coverage, design.Seed, options.Threads, options.Stop);
         return
         [
-            .. generators.Select((generator, i) =>
-            {
-                var coverage = CoverageCalculator.Compute(
-                    generator, region.Projection, sizes[i], design.Coverage.Replicates, design.Seed, (uint)i, options.Threads, options.Stop);
-                options.Progress?.Report((double)++done / generators.Length);
-                return coverage;
-            }),
+            .. generators.Select((generator, i) => calculator.OfStratum(
+                generator, layouts[i], region.Projection, sizes[i], (uint)i, ProgressPart.Of(options.Progress, i, generators.Length))),
         ];
     }
 

@@ -51,18 +51,11 @@ internal static class PlaneStrata
     /// <summary>A design in a figure, ready to draw.</summary>
     public static LayoutGenerator Prepare(Stratum stratum, LayoutDesign design) => LayoutKinds.Prepare(stratum, design);
 
-    /// <summary>Given places in the plane, one to a row, and the order they went in: result[i] belongs to places[order[i]].</summary>
+    /// <summary>Given places in the plane, and the order they went in: result[i] belongs to places[order[i]].</summary>
     public static (CellGrid Grid, int[] Order) GridOf(LayoutGenerator generator, params (double X, double Y)[] places)
     {
         var turned = places.Select(place => generator.Stratum.Frame.ToFrame(place.X, place.Y)).ToArray();
-        int[] order = [.. Enumerable.Range(0, places.Length).OrderBy(i => turned[i].Y)];
-        var grid = new CellGrid(
-            1,
-            [.. order.Select(i => turned[i].Y)],
-            [.. Enumerable.Range(0, places.Length + 1)],
-            [.. order.Select(i => turned[i].X)],
-            [.. places.Select(_ => 1.0)],
-            turned);
+        var grid = CellGrid.OfPlaces(turned, out var order);
         return (grid, order);
     }
 

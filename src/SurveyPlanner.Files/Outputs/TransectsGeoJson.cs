@@ -21,7 +21,6 @@ public static class TransectsGeoJson
 
     private static ReadOnlyMemory<byte> Write(SurveyPlan plan, bool withCoverage)
     {
-        var coverage = withCoverage ? CoverageAlong.Of(plan) : CoverageAlong.None;
         var transects = PlannedTransect.InOrder(plan);
         var shapes = transects.Select(planned => Parts(planned, plan.Region.Projection)).ToList();
         var buffer = new ArrayBufferWriter<byte>();
@@ -37,7 +36,7 @@ public static class TransectsGeoJson
         for (var i = 0; i < transects.Count; i++)
         {
             buffer.Write(i == 0 ? "\n"u8 : ",\n"u8);
-            buffer.Write(JsonText.Write(json => WriteFeature(json, transects[i], shapes[i], coverage), indented: false).Span);
+            buffer.Write(JsonText.Write(json => WriteFeature(json, transects[i], shapes[i], withCoverage), indented: false).Span);
         }
 
         buffer.Write("\n]}\n"u8);
@@ -48,7 +47,7 @@ public static class TransectsGeoJson
         [.. planned.Transect.Pieces.SelectMany(piece => AntimeridianCut.Cut(LonLatPath.Of(piece, projection, planned.HalfWidthMetres)))];
 
     private static void WriteFeature(
-        Utf8JsonWriter json, PlannedTransect planned, ImmutableArray<ImmutableArray<LonLat>> parts, CoverageAlong coverage)
+        Utf8JsonWriter json, PlannedTransect planned, ImmutableArray<ImmutableArray<LonLat>> parts, bool withCoverage)
     {
         var transect = planned.Transect;
         json.WriteStartObject();
@@ -70,7 +69,7 @@ public static class TransectsGeoJson
                 json.Figure("bearing_deg", Figures.Bearing(bearing));
             }
 
-            if (coverage.Mean(planned) is { } mean)
+            if (withCoverage && planned.Coverage is { } mean)
             {
                 json.Figure("coverage", Figures.Significant(mean, 6));
             }

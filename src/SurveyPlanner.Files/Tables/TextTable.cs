@@ -37,6 +37,9 @@ internal sealed class TextTable
 
     public string File { get; }
 
+    /// <summary>The names of all columns, as they stand there.</summary>
+    public ImmutableArray<string> Header { get; private set; } = [];
+
     public ImmutableArray<CsvRow> Rows { get; private set; } = [];
 
     /// <summary>Columns of the table that nobody asked for.</summary>
@@ -65,6 +68,7 @@ internal sealed class TextTable
                 return table;
             }
 
+            table.Header = rows[0].Cells;
             table.FindColumns(rows[0], columns);
             table.Rows = rows.RemoveAt(0);
             table.CheckWidths(rows[0].Cells.Length);

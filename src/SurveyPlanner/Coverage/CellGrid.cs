@@ -1,14 +1,22 @@
 namespace SurveyPlanner.Coverage;
 
 /// <summary>
-/// The places at which coverage is looked at, in rows along x of the turned frame: one place stands for each cell.
-/// Flat arrays, so that a strip becomes a run of places on each row it meets.
+/// The places at which coverage is looked at, in rows along x of the turned frame: a place for each cell, or any places at all.
+/// Flat arrays, so that a strip becomes a run of places on each row it meets. Safe to share between threads.
 /// </summary>
 internal sealed class CellGrid
 {
-    private readonly int[] _firstRowOfSlot;
-    private readonly double _slotsPerMetre;
+    private readonly SlotTable _rows;
+    private readonly int[] _rowSlots;
+    private readonly SlotTable[] _rowPlaces;
+    private readonly int[] _placeSlots;
 
+    /// <param name="sizeMetres">Side of an uncut cell, metres; 0 where places stand for no cells.</param>
+    /// <param name="rowY">y of each row, ascending.</param>
+    /// <param name="rowStarts">Index of the first place of each row, and the number of places as last entry.</param>
+    /// <param name="x">x of each place, ascending within its row.</param>
+    /// <param name="areas">Area of each cell inside the stratum, square metres; empty where places stand for no cells.</param>
+    /// <param name="squareCentres">Centre of each cell's uncut square, in the turned frame; empty likewise.</param>
     public CellGrid(double sizeMetres, double[] rowY, int[] rowStarts, double[] x, double[] areas, (double X, double Y)[] squareCentres)
     {
         SizeMetres = sizeMetres;
@@ -17,18 +25,14 @@ internal sealed class CellGrid
         X = x;
         Areas = areas;
         SquareCentres = squareCentres;
-        var slots = Math.Max(1, rowY.Length);
-        var extent = rowY.Length == 0 ? 0 : rowY[^1] - rowY[0];
-        _slotsPerMetre = extent > 0 ? slots / extent : 0;
-        _firstRowOfSlot = new int[slots + 1];
-        for (int slot = 0, row = 0; slot <= slots; slot++)
+        _rowSlots = new int[rowY.Length];
+        _rows = new SlotTable(rowY, _rowSlots);
+        _placeSlots = new int[x.Length];
+        _rowPlaces = new SlotTable[rowY.Length];
+        for (var row = 0; row < rowY.Length; row++)
         {
-            while (row < rowY.Length && Slot(rowY[row]) < slot)
-            {
-                row++;
-            }
-
-            _firstRowOfSlot[slot] = row;
+            var places = rowStarts[row]..rowStarts[row + 1];
+            _rowPlaces[row] = new SlotTable(x.AsSpan(places), _placeSlots.AsSpan(places));
         }
     }
 
@@ -52,56 +56,43 @@ internal sealed class CellGrid
 
     public int Count => X.Length;
 
-    /// <summary>Index of the first row at or above y.</summary>
-    public int FirstRowFrom(double y)
+    /// <summary>Any places, in the turned frame, that stand for no cells.</summary>
+    /// <param name="places">The places, in any order.</param>
+    /// <param name="order">Takes the order they went in: place <c>order[i]</c> has index i in the grid.</param>
+    public static CellGrid OfPlaces(ReadOnlySpan<(double X, double Y)> places, out int[] order)
     {
-        if (RowY.Length == 0 || y <= RowY[0])
+        var sorted = new (double Y, double X, int Place)[places.Length];
+        for (var i = 0; i < sorted.Length; i++)
         {
-            return 0;
+            sorted[i] = (places[i].Y, places[i].X, i);
         }
 
-        if (y > RowY[^1])
+        Array.Sort(sorted);
+        order = Array.ConvertAll(sorted, entry => entry.Place);
+        var (rowY, rowStarts) = (new List<double>(), new List<int>());
+        for (var i = 0; i < sorted.Length; i++)
         {
-            return RowY.Length;
+            if (i == 0 || sorted[i].Y != sorted[i - 1].Y)
+            {
+                rowY.Add(sorted[i].Y);
+                rowStarts.Add(i);
+            }
         }
 
-        var row = _firstRowOfSlot[Slot(y)];
-        while (RowY[row] < y)
-        {
-            row++;
-        }
-
-        return row;
+        rowStarts.Add(sorted.Length);
+        return new CellGrid(0, [.. rowY], [.. rowStarts], Array.ConvertAll(sorted, entry => entry.X), [], []);
     }
+
+    /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
+    public int FirstRowFrom(double y) => _rows.FirstFrom(RowY, _rowSlots, y);
 
     /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end.</summary>
     public (int First, int End) Run(int row, double low, double high)
     {
-        var (start, end) = (RowStarts[row], RowStarts[row + 1]);
-        return (LowerBound(start, end, low), UpperBound(start, end, high));
-    }
-
-    private int Slot(double y) => Math.Min((int)((y - RowY[0]) * _slotsPerMetre), _firstRowOfSlot.Length - 2);
-
-    private int LowerBound(int low, int high, double value)
-    {
-        while (low < high)
-        {
-            var middle = (int)((uint)(low + high) >> 1);
-            (low, high) = X[middle] < value ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
-    }
-
-    private int UpperBound(int low, int high, double value)
-    {
-        while (low < high)
-        {
-            var middle = (int)((uint)(low + high) >> 1);
-            (low, high) = X[middle] <= value ? (middle + 1, high) : (low, middle);
-        }
-
-        return low;
+        var (start, count) = (RowStarts[row], RowStarts[row + 1] - RowStarts[row]);
+        var x = X.AsSpan(start, count);
+        var slots = _placeSlots.AsSpan(start, count);
+        ref readonly var places = ref _rowPlaces[row];
+        return (start + places.FirstFrom(x, slots, low), start + places.FirstBeyond(x, slots, high));
     }
 }

@@ -52,11 +52,12 @@ internal sealed class CellGridBuilder
     private int Rows { get; }
 
     /// <summary>Cells of the given side over a shape.</summary>
-    public static CellGrid Build(FrameShape shape, double sizeMetres)
+    public static CellGrid Build(FrameShape shape, double sizeMetres, CancellationToken stop = default)
     {
         var builder = new CellGridBuilder(shape, sizeMetres);
         for (var row = 0; row < builder.Rows; row++)
         {
+            stop.ThrowIfCancellationRequested();
             builder.AddRow(row);
         }
 

@@ -7,29 +7,33 @@ namespace SurveyPlanner.Coverage;
 /// <summary>
 /// Coverage probability of each stratum's layout, exact where a closed form exists and simulated always, the two held against each other.
 /// </summary>
-internal static class CoverageCalculator
+internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int threads, CancellationToken stop)
 {
-    public static StratumCoverage Compute(
-        LayoutGenerator generator,
-        EqualAreaProjection projection,
-        double cellSizeMetres,
-        int replicates,
-        ulong seed,
-        uint stratum,
-        int threads,
-        CancellationToken stop)
+    private readonly int _replicates = design.Replicates > 0
+        ? design.Replicates
+        : throw new InputException(new Problem("coverage is simulated by at least one draw", Key: "coverage.replicates"));
+
+    /// <summary>Everything about one stratum's coverage.</summary>
+    /// <param name="generator">The stratum's design.</param>
+    /// <param name="layout">Its layout as drawn.</param>
+    /// <param name="projection">From the plane to degrees.</param>
+    /// <param name="cellSizeMetres">Side of its cells.</param>
+    /// <param name="stratum">Its index.</param>
+    /// <param name="progress">Told how much of the simulation is done.</param>
+    public StratumCoverage OfStratum(
+        LayoutGenerator generator, Layout layout, EqualAreaProjection projection, double cellSizeMetres, uint stratum, ProgressPart? progress)
     {
-        var grid = CellGridBuilder.Build(generator.Stratum.Region, cellSizeMetres);
-        var exact = ExactCoverage.At(generator, grid);
-        var counts = CoverageSimulation.Run(generator, grid, replicates, seed, stratum, threads, stop);
+        var grid = CellGridBuilder.Build(generator.Stratum.Region, cellSizeMetres, stop);
+        var exact = ExactCoverage.At(generator, grid, stop);
+        var counts = CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop, progress);
         var cells = Cells(generator.Stratum.Frame, projection, grid, exact, counts);
         var summary = Summary.Of(cells);
-        return new StratumCoverage(
+        var coverage = new StratumCoverage(
             generator.Stratum.Stratum.Name,
             generator.NominalCoverage,
             cellSizeMetres,
             generator.Stratum.Frame.AngleRadians,
-            replicates,
+            _replicates,
             cells,
             summary.Mean,
             summary.Min,
@@ -37,6 +41,69 @@ internal static class CoverageCalculator
             summary.Cv,
             summary.SimulatedMean,
             summary.MaxAbsZ);
+        return Judged(coverage with { Transects = Along(generator, layout, stratum) }, generator, grid);
+    }
+
+    /// <summary>
+    /// Coverage at any places of a stratum, in the turned frame: exact where the kind has a closed form, and simulated at exactly these places
+    /// by the same draws as the cells. Results in the order of the places.
+    /// </summary>
+    public PlaceCoverage[] At(LayoutGenerator generator, ReadOnlySpan<(double X, double Y)> places, uint stratum, ProgressPart? progress)
+    {
+        if (places.IsEmpty)
+        {
+            progress?.Finish();
+            return [];
+        }
+
+        var grid = CellGrid.OfPlaces(places, out var order);
+        var exact = ExactCoverage.At(generator, grid, stop);
+        var counts = CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop, progress);
+        var result = new PlaceCoverage[grid.Count];
+        for (var i = 0; i < result.Length; i++)
+        {
+            result[order[i]] = new PlaceCoverage(exact?[i], counts.Probability(i), counts.ExpectedTimes(i), counts.StandardError(i));
+        }
+
+        return result;
+    }
+
+    private ImmutableArray<TransectCoverage> Along(LayoutGenerator generator, Layout layout, uint stratum)
+    {
+        var places = CoverageAlong.Places(generator.Stratum, layout.Transects);
+        var grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out var order);
+        var exact = ExactCoverage.At(generator, grid, stop);
+        var counts = exact is null
+            ? CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop)
+            : null;
+        var coverage = new double[places.Count];
+        for (var i = 0; i < coverage.Length; i++)
+        {
+            coverage[order[i]] = exact?[i] ?? counts!.Probability(i);
+        }
+
+        return CoverageAlong.Means(layout.Transects, places, coverage, exact is not null);
+    }
+
+    private static StratumCoverage Judged(StratumCoverage coverage, LayoutGenerator generator, CellGrid grid)
+    {
+        var (distances, along) = (new double[grid.Count], new double[grid.Count]);
+        var classWidth = EdgeProfile.ClassWidth(generator.Stratum.HalfWidthMetres, grid.SizeMetres);
+        var tiles = generator.Stratum.Region.Tiles;
+        for (var row = 0; row < grid.RowY.Length; row++)
+        {
+            for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
+            {
+                along[i] = grid.RowY[row];
+                distances[i] = tiles.Distance(grid.X[i], grid.RowY[row], EdgeProfile.Reach(classWidth));
+            }
+        }
+
+        return coverage with
+        {
+            EdgeProfile = EdgeProfile.Of(coverage.Cells.AsSpan(), distances, classWidth),
+            Advice = CoverageAdvisor.Of(generator.Design, coverage, distances, along),
+        };
     }
 
     private static ImmutableArray<CoverageCell> Cells(
@@ -54,20 +121,14 @@ internal static class CoverageCalculator
                     frame.ToPlane(grid.SquareCentres[i].X, grid.SquareCentres[i].Y),
                     grid.Areas[i] / 1e6,
                     exact?[i],
-                    (double)counts.Draws[i] / counts.Replicates,
-                    (double)counts.Times[i] / counts.Replicates,
-                    StandardError(counts.Starts[i], counts.Replicates)));
+                    counts.Probability(i),
+                    counts.ExpectedTimes(i),
+                    counts.StandardError(i)));
             }
         }
 
         return cells.MoveToImmutable();
     }
-
-    /// <summary>
-    /// From differences between draws with neighbouring offsets: half the sum of their squares over the square of the number of draws. A place
-    /// that came under cover k times changed state 2k times. Errs on the large side; never below what one unseen change could hide.
-    /// </summary>
-    private static double StandardError(int starts, int replicates) => Math.Sqrt(Math.Max(1, starts)) / replicates;
 
     private readonly record struct Summary(double Mean, double Min, double Max, double Cv, double SimulatedMean, double? MaxAbsZ)
     {
@@ -95,3 +156,10 @@ internal static class CoverageCalculator
         }
     }
 }
+
+/// <summary>Coverage at one place.</summary>
+/// <param name="Exact">Probability of being covered at least once, from the closed form; null where none exists.</param>
+/// <param name="Simulated">Share of simulated draws that covered the place at least once.</param>
+/// <param name="ExpectedTimes">Mean number of times covered, simulated.</param>
+/// <param name="StandardError">Standard error of <paramref name="Simulated"/>.</param>
+internal readonly record struct PlaceCoverage(double? Exact, double Simulated, double ExpectedTimes, double StandardError);

@@ -3,13 +3,34 @@ using SurveyPlanner.Layouts;
 namespace SurveyPlanner.Coverage;
 
 /// <summary>Whole-number counts of a simulation, place by place.</summary>
-internal sealed record CoverageCounts(int Replicates, int[] Draws, int[] Times, int[] Starts);
+/// <param name="Replicates">Number of draws.</param>
+/// <param name="Draws">Draws that covered the place at least once.</param>
+/// <param name="Times">Times the place was covered, over all draws.</param>
+/// <param name="Again">Draws that covered the place, as the draw before had.</param>
+internal sealed record CoverageCounts(int Replicates, int[] Draws, int[] Times, int[] Again)
+{
+    /// <summary>Share of draws that covered a place.</summary>
+    public double Probability(int place) => (double)Draws[place] / Replicates;
+
+    /// <summary>Mean number of times that a draw covered it.</summary>
+    public double ExpectedTimes(int place) => (double)Times[place] / Replicates;
+
+    /// <summary>
+    /// Standard error of <see cref="Probability"/>, from differences between draws with neighbouring offsets: the square root of how often the place
+    /// came newly under cover, over the number of draws. On the large side (proof in docs/methods/coverage.md); never below what one unseen
+    /// change could hide.
+    /// </summary>
+    public double StandardError(int place) => Math.Sqrt(Math.Max(1, Draws[place] - Again[place])) / Replicates;
+}
 
 /// <summary>
 /// Draws a layout many times and counts what is covered. The result depends on the seed alone, not on the number of threads.
 /// </summary>
 internal static class CoverageSimulation
 {
+    // Draws between two reports of progress: some microseconds each on ordinary regions.
+    private const int DrawsPerReport = 16;
+
     /// <param name="generator">The layout.</param>
     /// <param name="grid">The places to look at.</param>
     /// <param name="replicates">Number of draws, at least 1.</param>
@@ -17,17 +38,26 @@ internal static class CoverageSimulation
     /// <param name="stratum">Index of the stratum, part of the counter of the random generator.</param>
     /// <param name="threads">Threads to use, at least 1.</param>
     /// <param name="stop">Stops the work; an <see cref="OperationCanceledException"/> follows.</param>
+    /// <param name="progress">Told the share of draws done.</param>
     public static CoverageCounts Run(
-        LayoutGenerator generator, CellGrid grid, int replicates, ulong seed, uint stratum, int threads, CancellationToken stop)
+        LayoutGenerator generator,
+        CellGrid grid,
+        int replicates,
+        ulong seed,
+        uint stratum,
+        int threads,
+        CancellationToken stop,
+        ProgressPart? progress = null)
     {
         var offsets = new StratifiedOffsets(seed, stratum, replicates, generator.OffsetRanges.Length);
         var workers = Math.Clamp(threads, 1, replicates);
         var counters = new CoverageCounter[workers];
+        void Report() => progress?.Add((double)DrawsPerReport / replicates);
         void Work(int worker)
         {
             // Each worker takes a run of neighbouring draws and first looks at the one before it.
             var (first, end) = ((int)((long)replicates * worker / workers), (int)((long)replicates * (worker + 1) / workers));
-            counters[worker] = CountRun(generator, grid, offsets, first, end, stop);
+            counters[worker] = CountRun(generator, grid, offsets, first, end, Report, stop);
         }
 
         if (workers == 1)
@@ -39,18 +69,12 @@ internal static class CoverageSimulation
             Parallel.For(0, workers, new ParallelOptions { MaxDegreeOfParallelism = workers, CancellationToken = stop }, Work);
         }
 
-        foreach (var other in counters.Skip(1))
-        {
-            Add(counters[0].Draws, other.Draws);
-            Add(counters[0].Times, other.Times);
-            Add(counters[0].Starts, other.Starts);
-        }
-
-        return new CoverageCounts(replicates, counters[0].Draws, counters[0].Times, counters[0].Starts);
+        progress?.Finish();
+        return CoverageCounter.Sum(counters, replicates);
     }
 
     private static CoverageCounter CountRun(
-        LayoutGenerator generator, CellGrid grid, StratifiedOffsets offsets, int first, int end, CancellationToken stop)
+        LayoutGenerator generator, CellGrid grid, StratifiedOffsets offsets, int first, int end, Action report, CancellationToken stop)
     {
         var counter = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
         var buffer = new PieceBuffer();
@@ -61,17 +85,13 @@ internal static class CoverageSimulation
             var random = offsets.Fill(draw, drawn);
             buffer.Clear();
             generator.Realise(drawn, ref random, buffer);
-            counter.Count(draw, buffer.Pieces, onlyRemember: draw < first);
+            counter.Count(buffer.Pieces, onlyRemember: draw < first);
+            if ((draw - first) % DrawsPerReport == DrawsPerReport - 1)
+            {
+                report();
+            }
         }
 
         return counter;
-    }
-
-    private static void Add(int[] into, int[] other)
-    {
-        for (var i = 0; i < into.Length; i++)
-        {
-            into[i] += other[i];
-        }
     }
 }

@@ -6,10 +6,10 @@ namespace SurveyPlanner.Coverage;
 internal static class ExactCoverage
 {
     /// <summary>The probability at every place of the grid, or null where the kind has no closed form.</summary>
-    public static double[]? At(LayoutGenerator generator, CellGrid grid) => generator switch
+    public static double[]? At(LayoutGenerator generator, CellGrid grid, CancellationToken stop = default) => generator switch
     {
-        ParallelLines lines => ExactParallelLines.At(lines, grid),
-        PointGrid points => ExactPointGrid.At(points, grid),
+        ParallelLines lines => ExactParallelLines.At(lines, grid, stop),
+        PointGrid points => ExactPointGrid.At(points, grid, stop),
         _ => null,
     };
 }

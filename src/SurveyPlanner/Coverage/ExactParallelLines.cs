@@ -10,7 +10,7 @@ namespace SurveyPlanner.Coverage;
 /// </summary>
 internal static class ExactParallelLines
 {
-    public static double[] At(ParallelLines lines, CellGrid grid)
+    public static double[] At(ParallelLines lines, CellGrid grid, CancellationToken stop)
     {
         var across = lines.Stratum.ClipAcross;
         var (x, y) = (grid.X.AsSpan().ToArray(), new double[grid.Count]);
@@ -31,6 +31,7 @@ internal static class ExactParallelLines
         var crossings = new double[64];
         for (var i = 0; i < order.Length;)
         {
+            stop.ThrowIfCancellationRequested();
             var count = across.CrossingsAt(x[i], ref crossings);
             var column = x[i];
             for (; i < order.Length && x[i] == column; i++)

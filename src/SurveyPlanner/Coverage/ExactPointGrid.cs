@@ -9,7 +9,7 @@ namespace SurveyPlanner.Coverage;
 /// </summary>
 internal static class ExactPointGrid
 {
-    public static double[]? At(PointGrid points, CellGrid grid)
+    public static double[]? At(PointGrid points, CellGrid grid, CancellationToken stop)
     {
         if (points.StripsMayOverlap)
         {
@@ -20,6 +20,7 @@ internal static class ExactPointGrid
         var result = new double[grid.Count];
         for (var row = 0; row < grid.RowY.Length; row++)
         {
+            stop.ThrowIfCancellationRequested();
             for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
             {
                 result[i] = disk.At(grid.X[i], grid.RowY[row]) / points.GridCellArea;

@@ -30,7 +30,35 @@ public sealed record StratumCoverage(
     double Max,
     double Cv,
     double SimulatedMean,
-    double? MaxAbsZ);
+    double? MaxAbsZ)
+{
+    /// <summary>Mean coverage against distance from the stratum's boundary, from the boundary inwards; classes without cells are left out.</summary>
+    public ImmutableArray<EdgeClass> EdgeProfile { get; init; } = [];
+
+    /// <summary>What all this means for the survey; null only where coverage was not judged.</summary>
+    public CoverageAdvice? Advice { get; init; }
+
+    /// <summary>Coverage along each transect of the layout drawn, in its order.</summary>
+    public ImmutableArray<TransectCoverage> Transects { get; init; } = [];
+
+    /// <summary>Share of the area, 0 to 1, whose coverage is below a multiple of nominal.</summary>
+    public double ShareBelow(double timesNominal) => Share(cell => cell.Best < timesNominal * Nominal);
+
+    /// <summary>Share of the area, 0 to 1, whose coverage is above a multiple of nominal.</summary>
+    public double ShareAbove(double timesNominal) => Share(cell => cell.Best > timesNominal * Nominal);
+
+    private double Share(Func<CoverageCell, bool> isCounted)
+    {
+        var (counted, area) = (0.0, 0.0);
+        foreach (var cell in Cells)
+        {
+            counted += isCounted(cell) ? cell.AreaKm2 : 0;
+            area += cell.AreaKm2;
+        }
+
+        return area > 0 ? counted / area : 0;
+    }
+}
 
 /// <summary>
 /// One cell: a square of the grid cut at the stratum's boundary, with the coverage of the place that stands for it.

@@ -9,25 +9,31 @@ internal readonly ref struct Strip
 {
     private readonly double _middleX;
     private readonly double _middleY;
-    private readonly double _alongX;
-    private readonly double _alongY;
-    private readonly double _halfLength;
-    private readonly double _halfWidth;
+    private readonly double _squaredRadius;
+
+    // A rectangle is where two pairs of parallel sides overlap. On a horizontal line each pair leaves a stretch: its middle shifts by so much
+    // for a metre of y, and its half length stays.
+    private readonly double _shiftAlong;
+    private readonly double _halfAlong;
+    private readonly double _shiftAcross;
+    private readonly double _halfAcross;
 
     public Strip(in Piece piece, double halfWidthMetres)
     {
         (_middleX, _middleY) = ((piece.FromX + piece.ToX) / 2, (piece.FromY + piece.ToY) / 2);
-        _halfWidth = halfWidthMetres;
-        _halfLength = piece.Length / 2;
-        double reach;
-        if (_halfLength == 0)
+        IsDisk = piece.FromX == piece.ToX && piece.FromY == piece.ToY;
+        var reach = halfWidthMetres;
+        if (IsDisk)
         {
-            reach = halfWidthMetres;
+            _squaredRadius = halfWidthMetres * halfWidthMetres;
         }
         else
         {
-            (_alongX, _alongY) = ((piece.ToX - piece.FromX) / (2 * _halfLength), (piece.ToY - piece.FromY) / (2 * _halfLength));
-            reach = (Math.Abs(_alongY) * _halfLength) + (Math.Abs(_alongX) * halfWidthMetres);
+            var length = piece.Length;
+            var (alongX, alongY) = ((piece.ToX - piece.FromX) / length, (piece.ToY - piece.FromY) / length);
+            (_shiftAlong, _halfAlong) = Stretch(alongX, alongY, length / 2);
+            (_shiftAcross, _halfAcross) = Stretch(-alongY, alongX, halfWidthMetres);
+            reach = (Math.Abs(alongY) * length / 2) + (Math.Abs(alongX) * halfWidthMetres);
         }
 
         (LowY, HighY) = (_middleY - reach, _middleY + reach);
@@ -37,40 +43,25 @@ internal readonly ref struct Strip
 
     public double HighY { get; }
 
-    /// <summary>The stretch of the horizontal line at y that is covered.</summary>
-    public bool RangeAt(double y, out double low, out double high)
+    private bool IsDisk { get; }
+
+    /// <summary>The stretch of the horizontal line at y, between <see cref="LowY"/> and <see cref="HighY"/>, that is covered.</summary>
+    public void RangeAt(double y, out double low, out double high)
     {
         var dy = y - _middleY;
-        if (_halfLength == 0)
+        if (IsDisk)
         {
-            var half = Math.Sqrt(Math.Max(0, (_halfWidth * _halfWidth) - (dy * dy)));
+            var half = Math.Sqrt(Math.Max(0, _squaredRadius - (dy * dy)));
             (low, high) = (_middleX - half, _middleX + half);
-            return true;
-        }
-
-        // |along the piece| <= half length and |across it| <= half-width, each a stretch of x.
-        (low, high) = (double.NegativeInfinity, double.PositiveInfinity);
-        Narrow(_alongX, dy * _alongY, _halfLength, ref low, ref high);
-        Narrow(-_alongY, dy * _alongX, _halfWidth, ref low, ref high);
-        (low, high) = (low + _middleX, high + _middleX);
-        return low <= high;
-    }
-
-    /// <summary>Narrows to where |slope · x + constant| is at most the limit.</summary>
-    private static void Narrow(double slope, double constant, double limit, ref double low, ref double high)
-    {
-        if (slope == 0)
-        {
-            if (Math.Abs(constant) > limit)
-            {
-                (low, high) = (1, 0);
-            }
-
             return;
         }
 
-        var (a, b) = ((-limit - constant) / slope, (limit - constant) / slope);
-        low = Math.Max(low, Math.Min(a, b));
-        high = Math.Min(high, Math.Max(a, b));
+        var (along, across) = (_middleX + (_shiftAlong * dy), _middleX + (_shiftAcross * dy));
+        low = Math.Max(along - _halfAlong, across - _halfAcross);
+        high = Math.Min(along + _halfAlong, across + _halfAcross);
     }
+
+    /// <summary>|x · slopeX + y · slopeY| is at most the limit: on a line of constant y a stretch of x, endless where x does not matter.</summary>
+    private static (double ShiftPerMetre, double HalfLength) Stretch(double slopeX, double slopeY, double limit)
+        => slopeX == 0 ? (0, double.PositiveInfinity) : (-slopeY / slopeX, limit / Math.Abs(slopeX));
 }

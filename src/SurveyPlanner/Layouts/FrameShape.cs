@@ -18,6 +18,7 @@ internal sealed class FrameShape
     private readonly int[] _bandStarts;
     private readonly Edge[] _bandEdges;
     private readonly double _bandsPerMetre;
+    private readonly Lazy<EdgeTiles> _tiles;
 
     /// <param name="shape">The shape in the plane.</param>
     /// <param name="frame">How it is turned.</param>
@@ -37,6 +38,7 @@ internal sealed class FrameShape
         (_bandStarts, _bandEdges) = SortIntoBands(bands);
         AreaSquareMetres = shape.AreaSquareMetres;
         PartRanges = YRanges(shape, y);
+        _tiles = new Lazy<EdgeTiles>(() => new EdgeTiles(this, _edges));
     }
 
     public double MinX { get; }
@@ -49,8 +51,8 @@ internal sealed class FrameShape
 
     public double AreaSquareMetres { get; }
 
-    /// <summary>All edges, each once.</summary>
-    public ReadOnlySpan<Edge> AllEdges => _edges;
+    /// <summary>The edges in square tiles, for looking round a place or along a slanted line.</summary>
+    public EdgeTiles Tiles => _tiles.Value;
 
     /// <summary>Lowest and highest y of each part.</summary>
     public (double Low, double High)[] PartRanges { get; }

@@ -53,7 +53,7 @@ internal static class TestPlans
     public static StratumPlan Lines(string name, params Transect[] transects) => new(
         Square(name),
         new Layout(name, LineDesign, 0, 5000, [1234.5], [.. transects], transects.Sum(transect => transect.LengthMetres) + 1.25, 2.25, new EffortSpread(66_869.62, 1500, 60_000, 70_000), []),
-        Coverage(name));
+        Coverage(name) with { Transects = [.. transects.Select(transect => new TransectCoverage(transect.Id, transect.Order == 1 ? 0.125 : null, IsExact: true))] });
 
     public static StratumPlan Points(string name, params Transect[] transects) => new(
         Square(name),

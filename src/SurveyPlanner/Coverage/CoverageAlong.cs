@@ -1,0 +1,80 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Layouts;
+
+namespace SurveyPlanner.Coverage;
+
+/// <summary>
+/// Integrates coverage along transects by the midpoint rule. Accuracy: steps of a quarter of the half-width, or a five-thousandth of the
+/// layout's length where that is longer; coverage changes by its whole height over no less than a half-width, except at an end of the region.
+/// </summary>
+internal static class CoverageAlong
+{
+    // Each costs a simulated layout without closed form some milliseconds.
+    private const int MaxPlaces = 5000;
+    private const double StepsPerHalfWidth = 4;
+
+    /// <summary>The places that stand for each transect, inside the stratum.</summary>
+    public static List<AlongPlace> Places(StratumFrame stratum, IReadOnlyList<Transect> transects)
+    {
+        var total = transects.Sum(transect => transect.LengthMetres);
+        var step = Math.Max(stratum.HalfWidthMetres / StepsPerHalfWidth, total / MaxPlaces);
+        var places = new List<AlongPlace>();
+        for (var i = 0; i < transects.Count; i++)
+        {
+            foreach (var piece in transects[i].Pieces)
+            {
+                var vertices = piece.Plane.Select(vertex => stratum.Frame.ToFrame(vertex.X, vertex.Y)).ToList();
+                AddPlaces(vertices, i, step, places);
+            }
+        }
+
+        places.RemoveAll(place => !stratum.Region.Contains(place.X, place.Y));
+        return places;
+    }
+
+    /// <summary>The weighted mean of each transect.</summary>
+    /// <param name="transects">The transects.</param>
+    /// <param name="places">Their places.</param>
+    /// <param name="coverage">Coverage of each place.</param>
+    /// <param name="isExact">Whether that is exact.</param>
+    public static ImmutableArray<TransectCoverage> Means(
+        IReadOnlyList<Transect> transects, List<AlongPlace> places, double[] coverage, bool isExact)
+    {
+        var (sums, weights) = (new double[transects.Count], new double[transects.Count]);
+        for (var i = 0; i < places.Count; i++)
+        {
+            sums[places[i].Transect] += places[i].Weight * coverage[i];
+            weights[places[i].Transect] += places[i].Weight;
+        }
+
+        return [.. transects.Select((transect, i) => new TransectCoverage(transect.Id, weights[i] > 0 ? sums[i] / weights[i] : null, isExact))];
+    }
+
+    private static void AddPlaces(
+        List<(double X, double Y)> vertices, int transect, double stepMetres, List<AlongPlace> places)
+    {
+        if (vertices.Count == 1)
+        {
+            places.Add(new AlongPlace(vertices[0].X, vertices[0].Y, transect, 1));
+        }
+
+        for (var leg = 1; leg < vertices.Count; leg++)
+        {
+            var (from, to) = (vertices[leg - 1], vertices[leg]);
+            var length = Math.Sqrt(((to.X - from.X) * (to.X - from.X)) + ((to.Y - from.Y) * (to.Y - from.Y)));
+            var steps = Math.Max(1, (int)Math.Ceiling(length / stepMetres));
+            for (var step = 0; step < steps; step++)
+            {
+                var share = (step + 0.5) / steps;
+                places.Add(new AlongPlace(from.X + (share * (to.X - from.X)), from.Y + (share * (to.Y - from.Y)), transect, length / steps));
+            }
+        }
+    }
+}
+
+/// <summary>A place on a transect.</summary>
+/// <param name="X">x in the turned frame, metres.</param>
+/// <param name="Y">y.</param>
+/// <param name="Transect">Index of the transect.</param>
+/// <param name="Weight">Length of transect that it stands for, metres; 1 at a point.</param>
+internal readonly record struct AlongPlace(double X, double Y, int Transect, double Weight);
