@@ -62,6 +62,7 @@ internal static class Application
         root.Subcommands.Add(LayoutCommand.Build(terminal));
         root.Subcommands.Add(CoverageCommand.Build(terminal));
         root.Subcommands.Add(EffortCommand.Build(terminal));
+        root.Subcommands.Add(TrendCommand.Build(terminal));
         root.Subcommands.Add(ReplayCommand.Build(terminal));
         return root;
     }

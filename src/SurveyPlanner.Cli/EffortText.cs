@@ -17,6 +17,7 @@ internal static class EffortText
             WriteStrata(output, effort);
         }
 
+        WriteAllocations(output, effort);
         foreach (var advice in effort.Advice)
         {
             output.WriteLine();
@@ -45,10 +46,34 @@ internal static class EffortText
                 $"The encounter rate is {TextTable.Figure(effort.EncounterRate)} detections a {(effort.IsPoints ? "visit" : "kilometre")}; b is {effort.B.Value:0.##}.");
         }
 
+        return string.Join(' ', new[] { Assured(required, Unit(effort)), Estimate(required, Unit(effort)), Reliability(effort) }.Where(part => part.Length > 0));
+    }
+
+    /// <summary>With a pilot of a few lines this is the most honest number, so it comes first.</summary>
+    private static string Assured(RequiredEffort required, string unit)
+        => required is { Assurance: { } assurance, AssuredEffort: { } assured }
+            ? string.Create(
+                CultureInfo.InvariantCulture,
+                $"To be {100 * assurance:0.#} % sure of a CV of {100 * required.TargetCv:0.#} %, plan {TextTable.Figure(assured)} {unit}.")
+            : "";
+
+    private static string Estimate(RequiredEffort required, string unit)
+    {
+        var interval = required.Interval is { } range
+            ? string.Create(CultureInfo.InvariantCulture, $"; the pilot leaves it between {TextTable.Figure(range.Lower)} and {TextTable.Figure(range.Upper)} {unit} (95 %)")
+            : "";
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"A CV of {100 * required.TargetCv:0.#} % needs {TextTable.Figure(required.Effort)} {Unit(effort)}, about {required.Precision.ExpectedDetections:0} detections.");
+            $"By the plain estimate a CV of {100 * required.TargetCv:0.#} % needs {TextTable.Figure(required.Effort)} {unit}, about {required.Precision.ExpectedDetections:0} detections{interval}.");
     }
+
+    /// <summary>What simulated pilots like this one have shown of such intervals.</summary>
+    private static string Reliability(EffortPlan effort)
+        => effort.Uncertainty?.Measured is { } measured
+            ? string.Create(
+                CultureInfo.InvariantCulture,
+                $"In {MeasuredReliability.Pilots} simulated pilots of {measured.Transects} transects such intervals held the truth in {100 * measured.Coverage:0} %.")
+            : "";
 
     private static void WritePilot(TextWriter output, EffortPlan effort)
     {
@@ -91,6 +116,29 @@ internal static class EffortText
                 stratum.Cv is { } own ? TextTable.Figure(100 * own) : "");
         }
 
+        table.Write(output);
+    }
+
+    /// <summary>What each way to share the effort costs and buys, side by side.</summary>
+    private static void WriteAllocations(TextWriter output, EffortPlan effort)
+    {
+        if (effort.Allocations.Length == 0)
+        {
+            return;
+        }
+
+        var table = new TextTable("allocation", Unit(effort), "cv %", "cost", "by stratum");
+        foreach (var option in effort.Allocations)
+        {
+            table.Add(
+                option.Allocation.ToString().ToLowerInvariant(),
+                TextTable.Figure(option.Effort),
+                TextTable.Figure(100 * option.Precision.Cv),
+                option.Cost is { } cost ? cost.ToString("#,0", CultureInfo.InvariantCulture) : "",
+                string.Join(" + ", option.Strata.Select(stratum => TextTable.Figure(stratum.Effort))));
+        }
+
+        output.WriteLine();
         table.Write(output);
     }
 

@@ -1,5 +1,7 @@
 using System.CommandLine;
+using System.Text;
 using SurveyPlanner.Files.Outputs;
+using SurveyPlanner.Files.Tables;
 
 namespace SurveyPlanner.Cli.Commands;
 
@@ -9,6 +11,7 @@ internal static class CoverageCommand
     public static Command Build(Terminal terminal)
     {
         var options = new CommonOptions();
+        var at = new Option<string?>("--at") { Description = "Coverage at positions: a CSV with columns lon, lat", HelpName = "POINTS.csv" };
         var command = new Command(
             "coverage",
             """
@@ -18,7 +21,7 @@ internal static class CoverageCommand
               survey-planner coverage survey.toml --out survey-coverage
             """)
         {
-            options.Plan, options.Out, options.Force, options.Set, options.Seed, options.Threads, options.Json, options.Quiet, options.Debug,
+            options.Plan, at, options.Out, options.Force, options.Set, options.Seed, options.Threads, options.Json, options.Quiet, options.Debug,
         };
         return command.Runs(options, terminal, (parsed, stop) =>
         {
@@ -28,7 +31,13 @@ internal static class CoverageCommand
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             var progress = quiet ? null : terminal.Progress("simulating");
-            var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, new RunOptions(options.ThreadsOf(parsed), progress, stop));
+            var run = new RunOptions(options.ThreadsOf(parsed), progress, stop);
+            if (parsed.GetValue(at) is { } positions)
+            {
+                return AtPositions(terminal, loaded, positions, target, run);
+            }
+
+            var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, run);
             target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)], stop);
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);
@@ -43,5 +52,22 @@ internal static class CoverageCommand
 
             return ExitCodes.Done;
         });
+    }
+
+    /// <summary>The table of positions with their coverage: into the folder, or to standard output.</summary>
+    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputTarget? target, RunOptions run)
+    {
+        var table = CoverageAtTable.Read(path);
+        var file = table.Write(OutputNames.CoverageAt, PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run));
+        if (target is null)
+        {
+            terminal.Out.Write(Encoding.UTF8.GetString(file.Content.Span));
+        }
+        else
+        {
+            target.Write([file], run.Stop);
+        }
+
+        return ExitCodes.Done;
     }
 }

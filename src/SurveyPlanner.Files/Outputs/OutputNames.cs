@@ -11,6 +11,7 @@ public static class OutputNames
     public const string SurveyGeoPackage = "survey.gpkg";
     public const string Waypoints = "waypoints.csv";
     public const string Coverage = "coverage.csv";
+    public const string CoverageAt = "coverage-at.csv";
     public const string Summary = "summary.json";
     public const string Report = "report.html";
     public const string Record = "record.json";
@@ -18,6 +19,6 @@ public static class OutputNames
     /// <summary>All of them: an output folder that holds anything else is not ours to delete.</summary>
     public static readonly ImmutableHashSet<string> All =
     [
-        TransectsGeoJson, TransectsGpx, TransectsKml, SurveyGeoPackage, Waypoints, Coverage, Summary, Report, Record,
+        TransectsGeoJson, TransectsGpx, TransectsKml, SurveyGeoPackage, Waypoints, Coverage, CoverageAt, Summary, Report, Record,
     ];
 }
