@@ -28,10 +28,9 @@ public static class BoundaryReader
     {
         options ??= BoundaryOptions.Default;
         var source = options.Name ?? Path.GetFileName(Path.TrimEndingDirectorySeparator(path));
-        var log = new RepairLog();
         if (Directory.Exists(path))
         {
-            return ReadShapefile(ShapefileFolder.Find(path, source, options), source, options, log);
+            return ReadShapefile(ShapefileFolder.Find(path, source, options), source, options, new RepairLog());
         }
 
         if (!File.Exists(path))
@@ -39,7 +38,13 @@ public static class BoundaryReader
             throw FileBytes.Refusal(source, "there is no such boundary file; correct its name or path");
         }
 
-        var bytes = FileBytes.Read(path, source);
+        return Read(FileBytes.Read(path, source), path, source, options);
+    }
+
+    /// <summary>The same for a file whose bytes are at hand; what lies beside it is still looked for under its path.</summary>
+    internal static Boundary Read(byte[] bytes, string path, string source, BoundaryOptions options)
+    {
+        var log = new RepairLog();
         var format = FormatOf.Find(bytes, path, source);
         if (format == BoundaryFormat.Shapefile)
         {

@@ -41,19 +41,30 @@ internal sealed class Frame(CoordinateSystem system)
     }
 
     /// <summary>Square metres, positive when the ring runs anticlockwise. The ring is not closed.</summary>
-    public double SignedArea(IReadOnlyList<FilePoint> ring)
+    public double SignedArea(List<FilePoint> ring)
     {
-        var total = 0.0;
-        for (var i = 0; i < ring.Count; i++)
+        if (ring.Count == 0)
         {
-            var (from, to) = (ring[i], ring[(i + 1) % ring.Count]);
-            total += system.IsGeographic
-                ? (from.X - to.X) * RadiansPerDegree * MeanQ(from.Y, to.Y)
-                : (from.X - to.X) * ((from.Y + to.Y) / 2 - ring[0].Y);
+            return 0;
+        }
+
+        var total = 0.0;
+        var from = ring[^1];
+        var below = Below(from.Y, ring[0].Y);
+        foreach (var to in ring)
+        {
+            var belowTo = Below(to.Y, ring[0].Y);
+
+            // In the plane the mean over an edge is that of its ends, on the ellipsoid Simpson's rule is good enough.
+            var mean = system.IsGeographic
+                ? (below + (4 * Below((from.Y + to.Y) / 2, ring[0].Y)) + belowTo) / 6
+                : (below + belowTo) / 2;
+            total += (from.X - to.X) * mean;
+            (from, below) = (to, belowTo);
         }
 
         var unit = system.IsGeographic ? Ellipsoid.Wgs84.SemiMajorMetres : system.MetresPerUnit;
-        return total * unit * unit;
+        return total * unit * unit * (system.IsGeographic ? RadiansPerDegree : 1);
     }
 
     public double Area(Outline outline) => Math.Abs(SignedArea(outline.Points));
@@ -67,9 +78,6 @@ internal sealed class Frame(CoordinateSystem system)
         return Wording.Position(Math.IEEERemainder(position.Lon, 360), position.Lat);
     }
 
-    /// <summary>Mean over an edge of the area below it down to the equator, per radian and squared semi-axis (Simpson's rule).</summary>
-    private static double MeanQ(double fromLatitude, double toLatitude)
-        => (HalfQ(fromLatitude) + (4 * HalfQ((fromLatitude + toLatitude) / 2)) + HalfQ(toLatitude)) / 6;
-
-    private static double HalfQ(double latitude) => Ellipsoid.Wgs84.Q(Math.Sin(latitude * RadiansPerDegree)) / 2;
+    /// <summary>Area below a point down to the equator per radian of longitude and squared semi-axis; in the plane, down to a base near by.</summary>
+    private double Below(double y, double baseY) => system.IsGeographic ? Ellipsoid.Wgs84.Q(Math.Sin(y * RadiansPerDegree)) / 2 : y - baseY;
 }

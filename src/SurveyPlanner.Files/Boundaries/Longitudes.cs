@@ -64,9 +64,16 @@ internal static class Longitudes
 
         List<FilePoint> turned = [.. open[(start % open.Count)..], .. open[..(start % open.Count)]];
         var off = turned.TakeWhile(point => Math.Abs(point.Y) != 90).ToList();
-        var meets = off.Count > 2 && off.Count < turned.Count && turned.Skip(off.Count).All(point => Math.Abs(point.Y) == 90)
+        var meets = off.Count >= 2 && off.Count < turned.Count && turned.Skip(off.Count).All(point => Math.Abs(point.Y) == 90)
             && Math.Abs(Math.Abs(off[^1].X - off[0].X) - Turn) < 1e-9 && off[^1].Y == off[0].Y;
-        return meets ? off : null;
+        return meets ? [.. off.Zip(off.Skip(1), ThirdsOf).SelectMany(points => points), off[^1]] : null;
+    }
+
+    /// <summary>The start of an edge and points on it, so that none that runs along a parallel is longer than a third of it.</summary>
+    private static IEnumerable<FilePoint> ThirdsOf(FilePoint from, FilePoint to)
+    {
+        var pieces = Math.Max(1, (int)Math.Ceiling(Math.Abs(to.X - from.X) / (Turn / 3)));
+        return Enumerable.Range(0, pieces).Select(i => new FilePoint(from.X + ((to.X - from.X) * i / pieces), from.Y + ((to.Y - from.Y) * i / pieces)));
     }
 
     /// <summary>Moves outlines by whole turns into one common turn, begun in the widest stretch of longitude without any, and centred within ±180°.</summary>

@@ -32,7 +32,12 @@ internal sealed class RingCleaner(Frame frame, RepairLog log)
     /// <param name="roundPole">Whether it goes round a pole; then spikes are left alone, because lengths in degrees mean nothing there.</param>
     public Outline? Clean(RawRing raw, IReadOnlyList<FilePoint> points, bool roundPole)
     {
-        var open = points.SkipLast(1).ToList();
+        List<FilePoint> open = [.. points];
+        if (open.Count > 0)
+        {
+            open.RemoveAt(open.Count - 1);
+        }
+
         var cleaned = roundPole ? WithoutRepeats(open) : WithoutSpikes(open, raw.Place);
         if (cleaned.Count < open.Count)
         {

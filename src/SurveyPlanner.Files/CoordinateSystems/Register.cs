@@ -40,6 +40,9 @@ internal static class Register
     /// <summary>The datum with a name as files write it; null when it is not in the table.</summary>
     public static Datum? FindDatum(string name) => DatumRowsByName.Value.TryGetValue(Plain(name), out var cells) ? ToDatum(cells) : null;
 
+    /// <summary>The datum with an EPSG code; null when it is not in the table.</summary>
+    public static Datum? FindDatumByCode(string code) => DatumRows.Value.TryGetValue(code, out var cells) ? ToDatum(cells) : null;
+
     /// <summary>All codes of plane systems in the table.</summary>
     public static IEnumerable<string> PlaneCodes => PlaneRows.Value.Keys;
 

@@ -22,6 +22,7 @@ internal static class WktProjection
         "lambertconformalconic" or "lambertconformalconic1sp" or "lambertconformalconic2sp" => values.All("lambert-conformal-conic"),
         "mercator1sp" or "mercator2sp" or "mercator" or "mercatorauxiliarysphere" or "popularvisualisationpseudomercator" => Mercator(plain, system, values),
         "cylindricalequalarea" or "lambertcylindricalequalarea" => values.All("cylindrical-equal-area"),
+        "behrmann" when values.All("cylindrical-equal-area") is var behrmann => behrmann with { Lat1 = behrmann.Lat1 ?? 30 },
         "polarstereographic" or "polarstereographicvarianta" or "polarstereographicvariantb" or "stereographicnorthpole" or "stereographicsouthpole" => Polar(values),
         "obliquestereographic" or "doublestereographic" => values.All("oblique-stereographic"),
         "polyconic" or "americanpolyconic" => values.All("polyconic"),
