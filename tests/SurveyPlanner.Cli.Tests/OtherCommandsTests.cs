@@ -1,0 +1,94 @@
+using System.Text.Json;
+
+namespace SurveyPlanner.Cli.Tests;
+
+public class OtherCommandsTests
+{
+    [Fact]
+    public void New_writes_a_plan_that_check_accepts_and_plan_carries_out()
+    {
+        using var work = new Workspace();
+        File.Copy(ReferenceData.Path("regions", "marine_archipelago_sea.geojson"), work.At("sea.geojson"));
+        Assert.Equal(0, ProgramRun.Of("new", work.At("sea.geojson")).ExitCode);
+        Assert.Equal(0, ProgramRun.Of("check", work.At("sea.toml")).ExitCode);
+        var plan = ProgramRun.Of("plan", work.At("sea.toml"), "--out", work.At("out"), "--json", "--set", "coverage.replicates=50");
+        Assert.Equal(0, plan.ExitCode);
+        using var summary = JsonDocument.Parse(plan.Out);
+        Assert.InRange(summary.RootElement.GetProperty("strata")[0].GetProperty("transects").GetInt32(), 10, 40);
+
+        // Nothing is overwritten unasked.
+        Assert.Equal(4, ProgramRun.Of("new", work.At("sea.geojson")).ExitCode);
+    }
+
+    [Fact]
+    public void Check_prints_what_was_understood_and_draws_it()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        var run = ProgramRun.Of("check", plan, "--map", work.At("map.svg"));
+        Assert.Equal(0, run.ExitCode);
+        Assert.Contains("2 strata", run.Out, StringComparison.Ordinal);
+        Assert.Contains("inner bay", run.Out, StringComparison.Ordinal);
+        Assert.Contains("EPSG:4326", run.Out, StringComparison.Ordinal);
+        Assert.StartsWith("<svg", File.ReadAllText(work.At("map.svg")), StringComparison.Ordinal);
+        using var json = JsonDocument.Parse(ProgramRun.Of("check", plan, "--json").Out);
+        Assert.Equal(2, json.RootElement.GetProperty("strata").GetArrayLength());
+        Assert.True(json.RootElement.TryGetProperty("repairs", out _));
+        Assert.True(json.RootElement.TryGetProperty("warnings", out _));
+    }
+
+    /// <summary>Areas of the samples by two ways that share no code with the program: sample-regions/README.md.</summary>
+    [Theory]
+    [InlineData("sea-ducks-sound", 925.235)]
+    [InlineData("ground-birds-hills", 54.976)]
+    [InlineData("marine-mammals-shelf", 7821.682)]
+    public void Samples_have_their_known_area(string sample, double km2)
+    {
+        var run = ProgramRun.Of("check", Path.Combine(ReferenceData.Root, "sample-regions", sample, "plan.toml"), "--json");
+        using var json = JsonDocument.Parse(run.Out);
+        var area = json.RootElement.GetProperty("strata").EnumerateArray().Sum(stratum => stratum.GetProperty("area_km2").GetDouble());
+        Assert.Equal(km2, area, 5.1e-4 + (1e-6 * km2));
+    }
+
+    [Fact]
+    public void Coverage_at_positions_keeps_the_table_and_marks_what_lies_outside()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        File.WriteAllText(work.At("points.csv"), "id,lon,lat\na,-30.9,52.6\nb,0,0\n");
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        var run = ProgramRun.Of("coverage", plan, "--at", work.At("points.csv"), "--set", "coverage.replicates=100");
+        Assert.Equal(0, run.ExitCode);
+        var lines = run.Out.Trim().Split('\n').Select(line => line.Trim().Split(',')).ToList();
+        Assert.Equal(["id", "lon", "lat", "stratum", "coverage", "standard_error", "times_covered", "method"], lines[0]);
+        Assert.Equal(["a", "-30.9", "52.6", "outer sound", "0.24"], lines[1][..5]);
+        Assert.Equal("outside", lines[2][^1]);
+        Assert.Equal(0, ProgramRun.Of("coverage", plan, "--at", work.At("points.csv"), "--out", work.At("out"), "--set", "coverage.replicates=100").ExitCode);
+        Assert.True(File.Exists(Path.Combine(work.At("out"), "coverage-at.csv")));
+    }
+
+    /// <summary>Power of an exponential decline of 5 %, 10 surveys, CV 0.2 as in the core's published check (noncentral t): 0.50 for an increase of 5 %.</summary>
+    [Fact]
+    public void Trend_answers_with_the_power_of_the_noncentral_t()
+    {
+        var plan = Path.Combine(ReferenceData.Root, "sample-regions", "sea-ducks-sound", "plan.toml");
+        var run = ProgramRun.Of("trend", plan, "--cv", "0.2", "--change", "0.05", "--surveys", "10", "--json");
+        Assert.Equal((0, ""), (run.ExitCode, run.Error));
+        using var json = JsonDocument.Parse(run.Out);
+        Assert.Equal(0.50305360, json.RootElement.GetProperty("changes")[0].GetProperty("power").GetDouble(), 1e-7);
+        Assert.Equal(2, ProgramRun.Of("trend", plan, "--cv", "20%").ExitCode);
+        Assert.Equal(2, ProgramRun.Of("trend", plan, "--cv-model", "none").ExitCode);
+    }
+
+    [Fact]
+    public void Effort_prints_the_answer_first_and_the_same_as_json()
+    {
+        var plan = Path.Combine(ReferenceData.Root, "sample-regions", "sea-ducks-sound", "plan.toml");
+        Assert.Contains("a CV of 15 % needs", ProgramRun.Of("effort", plan).Out, StringComparison.Ordinal);
+        using var json = JsonDocument.Parse(ProgramRun.Of("effort", plan, "--json").Out);
+        Assert.True(json.RootElement.GetProperty("effort").GetProperty("encounter_rate_per_km").GetDouble() > 0);
+        Assert.Contains(
+            "sure of a CV", ProgramRun.Of("effort", plan, "--set", "precision.assurance=0.8").Out, StringComparison.Ordinal);
+    }
+}
