@@ -48,6 +48,11 @@ internal static class PlanText
 
         output.WriteLine("Coverage probability");
         table.Write(output);
+        foreach (var coverage in plan.Strata.Select(stratum => stratum.Coverage!).Where(coverage => coverage.Advice is not null))
+        {
+            var name = plan.Strata.Length == 1 ? "" : string.Concat(coverage.Stratum.Where(c => !char.IsControl(c))) + ": ";
+            output.WriteLine(name + coverage.Advice!.Sentence);
+        }
     }
 
     public static void WriteTransects(TextWriter output, SurveyPlan plan)
