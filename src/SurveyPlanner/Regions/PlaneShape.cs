@@ -75,6 +75,20 @@ public sealed class PlaneShape
         return total;
     }
 
+    /// <summary>Length of one ring, metres.</summary>
+    public double RingLength(int ring)
+    {
+        var (start, end) = (RingStarts[ring], RingStarts[ring + 1]);
+        var total = 0.0;
+        for (var i = start; i < end; i++)
+        {
+            var next = i + 1 == end ? start : i + 1;
+            total += Math.Sqrt(((X[next] - X[i]) * (X[next] - X[i])) + ((Y[next] - Y[i]) * (Y[next] - Y[i])));
+        }
+
+        return total;
+    }
+
     /// <summary>Area inside one ring, square metres, positive when it runs anticlockwise.</summary>
     public double SignedRingArea(int ring)
     {

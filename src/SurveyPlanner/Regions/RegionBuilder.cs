@@ -43,6 +43,7 @@ public static class RegionBuilder
 
         var shapes = groups.Select(group => Merge(boundary, group, densifier, notices)).ToList();
         RefuseOverlaps(boundary, groups, shapes);
+        notices.AddRange(StratumGaps.Find(shapes, projection));
         var cut = ExclusionShape(exclusions, densifier, design.ExclusionBufferMetres);
         var strata = groups.Select((group, i) => Describe(group, Cut(boundary, group, shapes[i], cut), projection)).ToImmutableArray();
         var scaleError = 100 * PlanningProjection.MaxScaleError(projection, positions);
@@ -82,12 +83,7 @@ public static class RegionBuilder
         var total = 0.0;
         for (var ring = 0; ring < shape.RingCount; ring++)
         {
-            var (start, end) = (shape.RingStarts[ring], shape.RingStarts[ring + 1]);
-            for (var i = start; i < end; i++)
-            {
-                var next = i + 1 == end ? start : i + 1;
-                total += Math.Sqrt(Math.Pow(shape.X[next] - shape.X[i], 2) + Math.Pow(shape.Y[next] - shape.Y[i], 2));
-            }
+            total += shape.RingLength(ring);
         }
 
         return total;

@@ -92,6 +92,20 @@ public class RegionBuilderTests
     }
 
     [Fact]
+    public void A_gap_that_strata_enclose_is_told_and_an_island_is_not()
+    {
+        // A frame of four blocks round an empty square, and a block with an island of its own.
+        var frame = new[] { Block("a", 10, 50, 3, 1), Block("b", 10, 51, 1, 1, 2), Block("c", 12, 51, 1, 1, 3), Block("d", 10, 52, 3, 1, 4) };
+        var region = RegionBuilder.Build(Boundary(frame), new RegionDesign("zone"), []);
+        var gap = Math.Floor(BlockKm2(51, 1, 1)).ToString("0.", System.Globalization.CultureInfo.InvariantCulture);
+        Assert.Contains(region.Notices, notice => notice.Message.Contains($"a gap of {gap}.", StringComparison.Ordinal));
+
+        var ring = Polygon([(20.4, 50.4), (20.6, 50.4), (20.6, 50.6), (20.4, 50.6)]).Shell;
+        var island = Feature(2, "z", Polygon([(20, 50), (21, 50), (21, 51), (20, 51)]) with { Holes = [ring] });
+        Assert.Empty(RegionBuilder.Build(Boundary(Block("a", 10, 50, 1, 1), island), new RegionDesign("zone"), []).Notices);
+    }
+
+    [Fact]
     public void Missing_fields_and_strata_are_named_with_what_there_is()
     {
         var boundary = Boundary(Block("a", 10, 50, 1, 1));
