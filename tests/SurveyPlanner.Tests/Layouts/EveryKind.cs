@@ -20,11 +20,14 @@ internal static class EveryKind
         ["zigzag adjusted-angle"] = Of(LayoutKind.Zigzag, 1500) with { Turning = ZigzagTurning.AdjustedAngle },
         ["zigzag adjusted-angle crossed plus"] = Of(LayoutKind.Zigzag, 1500) with
         {
-            Turning = ZigzagTurning.AdjustedAngle, Crossed = true, Edge = EdgeRule.Plus,
+            Turning = ZigzagTurning.AdjustedAngle,
+            Crossed = true,
+            Edge = EdgeRule.Plus,
         },
         ["zigzag adjusted-angle without short pieces"] = Of(LayoutKind.Zigzag, 1500) with
         {
-            Turning = ZigzagTurning.AdjustedAngle, MinLengthMetres = 1000,
+            Turning = ZigzagTurning.AdjustedAngle,
+            MinLengthMetres = 1000,
         },
         ["point-grid square"] = Of(LayoutKind.PointGrid, 1500),
         ["point-grid triangular"] = Of(LayoutKind.PointGrid, 1500) with { Grid = GridShape.Triangular },
