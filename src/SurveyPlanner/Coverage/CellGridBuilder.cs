@@ -81,7 +81,7 @@ internal sealed class CellGridBuilder
         Array.Clear(_areas);
         Array.Clear(_heights);
         var top = bottom + _size;
-        foreach (var edge in _shape.EdgesBetween(bottom, top))
+        foreach (ref readonly var edge in _shape.EdgesBetween(bottom, top))
         {
             var (lowY, highY) = (Math.Max(edge.LowY, bottom), Math.Min(edge.HighY, top));
             if (highY > lowY)

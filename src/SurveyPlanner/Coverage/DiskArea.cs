@@ -15,7 +15,7 @@ internal sealed class DiskArea(FrameShape shape, double radius)
     {
         _angles.Clear();
         var twice = 0.0;
-        foreach (var edge in shape.EdgesBetween(y - radius, y + radius))
+        foreach (ref readonly var edge in shape.EdgesBetween(y - radius, y + radius))
         {
             if (Math.Max(edge.LowX, edge.HighX) >= x - radius && Math.Min(edge.LowX, edge.HighX) <= x + radius)
             {

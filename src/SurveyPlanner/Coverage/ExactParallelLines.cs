@@ -6,13 +6,13 @@ namespace SurveyPlanner.Coverage;
 /// Coverage probability of systematic parallel lines, exactly: a place p is covered by the line at offset u across it when the foot of the
 /// perpendicular from p lies where lines may lie and |u| is at most the half-width w. So the expected number of covering lines is
 /// |{u in [-w, w] : p + u n in R}| / d, and where strips overlap (2w > d) the probability is the measure of that set modulo d, over d.
-/// Derivation: docs/methods/coverage.md.
+/// R is where lines may lie; stretches that are dropped as too short are no part of it. Derivation: docs/methods/layouts.md.
 /// </summary>
 internal static class ExactParallelLines
 {
     public static double[] At(ParallelLines lines, CellGrid grid, CancellationToken stop)
     {
-        var across = lines.Stratum.ClipAcross;
+        var across = lines.Stratum.LinesAcross;
         var (x, y) = (grid.X.AsSpan().ToArray(), new double[grid.Count]);
         var order = new int[grid.Count];
         for (var row = 0; row < grid.RowY.Length; row++)

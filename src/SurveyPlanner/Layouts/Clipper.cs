@@ -6,7 +6,7 @@ namespace SurveyPlanner.Layouts;
 /// </summary>
 internal static class Clipper
 {
-    private const double ShortestMetres = 1e-4;
+    public const double ShortestMetres = 1e-4;
 
     /// <summary>The parts of a horizontal line inside the shape, from left to right, or from right to left.</summary>
     public static void ClipHorizontal(FrameShape shape, double y, int transect, bool leftwards, PieceBuffer output)
@@ -48,7 +48,7 @@ internal static class Clipper
     {
         var count = 0;
         var endY = y0 + (uy * length);
-        foreach (var edge in shape.EdgesBetween(Math.Min(y0, endY), Math.Max(y0, endY)))
+        foreach (ref readonly var edge in shape.EdgesBetween(Math.Min(y0, endY), Math.Max(y0, endY)))
         {
             // Height of the edge's ends over the infinite line; "on or below" is decided once a vertex, so crossings pair up.
             var low = ((edge.LowY - y0) * ux) - ((edge.LowX - x0) * uy);
@@ -77,22 +77,31 @@ internal static class Clipper
     }
 
     /// <summary>
-    /// Whether the stretch before the first crossing is inside. Asked at the middle of the longest stretch, where rounding cannot matter,
+    /// Whether the stretch before the first crossing is inside. Asked within the longest stretch, where rounding cannot matter,
     /// and counted back: every crossing changes sides.
     /// </summary>
     private static bool IsInsideAtStart(FrameShape shape, double x0, double y0, double ux, double uy, double length, ReadOnlySpan<double> cuts)
     {
-        var (longest, middle, index) = (-1.0, 0.0, 0);
+        var (longest, start, index) = (-1.0, 0.0, 0);
         for (var i = 0; i <= cuts.Length; i++)
         {
             var (low, high) = (i == 0 ? 0 : cuts[i - 1], i == cuts.Length ? length : cuts[i]);
             if (high - low > longest)
             {
-                (longest, middle, index) = (high - low, (low + high) / 2, i);
+                (longest, start, index) = (high - low, low, i);
             }
         }
 
-        return shape.Contains(x0 + (middle * ux), y0 + (middle * uy)) == (index % 2 == 0);
+        bool IsInsideAt(double share)
+        {
+            var along = start + (share * longest);
+            return shape.Contains(x0 + (along * ux), y0 + (along * uy));
+        }
+
+        // One of the places asked may be a vertex that the line only touches, where the answer is chance: two of three decide.
+        var first = IsInsideAt(0.5);
+        var isInside = first == IsInsideAt(0.31) ? first : IsInsideAt(0.73);
+        return isInside == (index % 2 == 0);
     }
 
     private static void EmitSegment(

@@ -9,8 +9,8 @@ namespace SurveyPlanner.Layouts;
 /// </summary>
 internal static class EffortIntegral
 {
-    // Along one offset; along two, this many in all. A prime, so that the lattice below never repeats itself.
-    private const int Offsets = 1009;
+    /// <summary>Draws along one offset; along two, this many in all. A prime, so that the lattice below never repeats itself.</summary>
+    public const int Draws = 1009;
 
     // Two offsets: a rank-1 lattice whose generator spreads them evenly over the square (golden section of 1009).
     private const int LatticeGenerator = 390;
@@ -20,7 +20,7 @@ internal static class EffortIntegral
     /// <param name="generator">The layout.</param>
     /// <param name="meanCount">Mean number of transects that lie in the stratum.</param>
     /// <param name="draws">Offsets to try.</param>
-    public static EffortSpread Over(LayoutGenerator generator, out double meanCount, int draws = Offsets)
+    public static EffortSpread Over(LayoutGenerator generator, out double meanCount, int draws = Draws)
     {
         var buffer = new PieceBuffer();
         var offsets = new double[generator.OffsetRanges.Length];
@@ -33,7 +33,7 @@ internal static class EffortIntegral
             var random = new PhiloxStream(0, RandomPurpose.Expectation, 0, (uint)i);
             generator.Realise(offsets, ref random, buffer);
             var effort = generator.Design.IsPoints ? buffer.Count : buffer.TotalLength;
-            count += buffer.Count == 0 ? 0 : buffer.Pieces[^1].Transect + 1;
+            count += buffer.Transects;
 
             // Deviations from the first value keep the digits of a small spread of a large effort.
             first = i == 0 ? effort : first;

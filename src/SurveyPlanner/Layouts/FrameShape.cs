@@ -14,9 +14,16 @@ internal sealed class FrameShape
 {
     private const int MaxBands = 1 << 17;
 
+    // An edge stands in every band that it touches. Bands are no finer than pays: where edges are long, a quarter of an edge besides those that
+    // cross a line costs nothing, and memory stays proportional to the number of edges.
+    private const int BandsPerCrossedEdge = 4;
+
+    // Each edge once, as the rings run; in the order of the band of its lower end; and every edge of every band.
     private readonly Edge[] _edges;
-    private readonly int[] _bandStarts;
+    private readonly Edge[] _byLowEnd;
+    private readonly int[] _lowStarts;
     private readonly Edge[] _bandEdges;
+    private readonly int[] _bandStarts;
     private readonly double _bandsPerMetre;
     private readonly Lazy<EdgeTiles> _tiles;
 
@@ -28,14 +35,15 @@ internal sealed class FrameShape
         var (x, y) = Turn(shape, frame, transposed);
         (MinX, MaxX, MinY, MaxY) = (x.Min(), x.Max(), y.Min(), y.Max());
         _edges = Edges(shape, x, y, transposed);
-        var bands = Math.Clamp(_edges.Length / 2, 1, MaxBands);
+        var bands = BandsFor(_edges, MaxY - MinY);
         _bandsPerMetre = bands / Math.Max(MaxY - MinY, double.Epsilon);
         if (!double.IsFinite(_bandsPerMetre))
         {
             (bands, _bandsPerMetre) = (1, 0);
         }
 
-        (_bandStarts, _bandEdges) = SortIntoBands(bands);
+        (_lowStarts, _byLowEnd) = SortIntoBands(bands, lowestOnly: true);
+        (_bandStarts, _bandEdges) = SortIntoBands(bands, lowestOnly: false);
         AreaSquareMetres = shape.AreaSquareMetres;
         PartRanges = YRanges(shape, y);
         _tiles = new Lazy<EdgeTiles>(() => new EdgeTiles(this, _edges));
@@ -53,6 +61,9 @@ internal sealed class FrameShape
 
     /// <summary>The edges in square tiles, for looking round a place or along a slanted line.</summary>
     public EdgeTiles Tiles => _tiles.Value;
+
+    /// <summary>All edges, each once.</summary>
+    public ReadOnlySpan<Edge> AllEdges => _edges;
 
     /// <summary>Lowest and highest y of each part.</summary>
     public (double Low, double High)[] PartRanges { get; }
@@ -160,13 +171,22 @@ internal sealed class FrameShape
         return edges;
     }
 
-    private (int[] Starts, Edge[] Sorted) SortIntoBands(int bands)
+    private static int BandsFor(Edge[] edges, double height)
+    {
+        var total = edges.Sum(edge => edge.HighY - edge.LowY);
+        var useful = total > 0 ? Math.Min(edges.Length / 2, BandsPerCrossedEdge * edges.Length * height / total) : 1;
+        return (int)Math.Clamp(useful, 1, MaxBands);
+    }
+
+    /// <summary>Counting sort: every edge into the band of its lower end, or into every band it touches.</summary>
+    private (int[] Starts, Edge[] Sorted) SortIntoBands(int bands, bool lowestOnly)
     {
         var starts = new int[bands + 1];
         int Band(double y) => Math.Clamp((int)((y - MinY) * _bandsPerMetre), 0, bands - 1);
         foreach (ref readonly var edge in _edges.AsSpan())
         {
-            for (var band = Band(edge.LowY); band <= Band(edge.HighY); band++)
+            var low = Band(edge.LowY);
+            for (var band = low; band <= (lowestOnly ? low : Band(edge.HighY)); band++)
             {
                 starts[band + 1]++;
             }
@@ -181,7 +201,8 @@ internal sealed class FrameShape
         var next = starts.AsSpan(0, bands).ToArray();
         foreach (ref readonly var edge in _edges.AsSpan())
         {
-            for (var band = Band(edge.LowY); band <= Band(edge.HighY); band++)
+            var low = Band(edge.LowY);
+            for (var band = low; band <= (lowestOnly ? low : Band(edge.HighY)); band++)
             {
                 sorted[next[band]++] = edge;
             }
@@ -240,47 +261,40 @@ internal sealed class FrameShape
         public double XAt(double y) => LowX + ((y - LowY) * (HighX - LowX) / (HighY - LowY));
     }
 
-    /// <summary>Walks the edges of some bands, each edge once: in the first of the bands walked that it touches.</summary>
+    /// <summary>Walks the edges of some bands, each edge once: first all of the lowest band, then those that begin in the bands above it.</summary>
     public ref struct BandEdges
     {
-        private readonly FrameShape? _shape;
-        private readonly int _firstBand;
-        private readonly int _lastBand;
-        private int _band;
-        private int _next;
+        private readonly ReadOnlySpan<Edge> _above;
+        private ReadOnlySpan<Edge> _walked;
+        private int _index;
+        private bool _isAbove;
 
         public BandEdges(FrameShape shape, int firstBand, int lastBand)
         {
-            (_shape, _firstBand, _lastBand, _band) = (shape, firstBand, lastBand, firstBand);
-            _next = shape._bandStarts[firstBand];
+            _walked = shape._bandEdges.AsSpan(shape._bandStarts[firstBand]..shape._bandStarts[firstBand + 1]);
+            _above = shape._byLowEnd.AsSpan(shape._lowStarts[firstBand + 1]..shape._lowStarts[lastBand + 1]);
+            _index = -1;
         }
 
-        public Edge Current { get; private set; }
+        public readonly ref readonly Edge Current => ref _walked[_index];
 
         public readonly BandEdges GetEnumerator() => this;
 
         public bool MoveNext()
         {
-            if (_shape is null)
+            if (++_index < _walked.Length)
+            {
+                return true;
+            }
+
+            if (_isAbove)
             {
                 return false;
             }
 
-            for (; _band <= _lastBand; _band++)
-            {
-                var end = _shape._bandStarts[_band + 1];
-                while (_next < end)
-                {
-                    ref readonly var edge = ref _shape._bandEdges[_next++];
-                    if (_band == _firstBand || _shape.BandOf(edge.LowY) == _band)
-                    {
-                        Current = edge;
-                        return true;
-                    }
-                }
-            }
-
-            return false;
+            _walked = _above;
+            (_index, _isAbove) = (0, true);
+            return _walked.Length > 0;
         }
     }
 }

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Layouts;
@@ -27,20 +28,43 @@ internal sealed class HullSides
 
     public double MaxY { get; }
 
+    /// <summary>Mean distance between the sides, metres.</summary>
+    public double MeanWidth => Sections().Sum(section => section.AreaSquareMetres) / (MaxY - MinY);
+
     /// <summary>x of the left side; beyond the ends that of the end.</summary>
     public double Left(double y) => At(_left, Within(y));
 
     /// <summary>x of the right side; beyond the ends that of the end.</summary>
     public double Right(double y) => At(_right, Within(y));
 
+    /// <summary>The hull in sections with straight sides, from its lower to its upper end.</summary>
+    public ImmutableArray<ZigzagSection> Sections()
+    {
+        var sections = new List<ZigzagSection>();
+        var low = Within(MinY);
+        foreach (var high in _left.Concat(_right).Select(vertex => Within(vertex.Y)).Order())
+        {
+            // Sections lower than the margin would have sides that lean by rounding alone.
+            if (high - low > Margin)
+            {
+                var (left, right) = (Left(low), Right(low));
+                var height = high - low;
+                sections.Add(new ZigzagSection(low, high, low, left, (Left(high) - left) / height, right, (Right(high) - right) / height));
+                low = high;
+            }
+        }
+
+        sections[0] = sections[0] with { LowY = MinY };
+        sections[^1] = sections[^1] with { HighY = MaxY };
+        return [.. sections];
+    }
+
+    private double Margin => 1e-6 * (MaxY - MinY);
+
     /// <summary>
     /// A millionth inside the ends: an end that is flat but for rounding keeps both its corners, and turning the region changes nothing.
     /// </summary>
-    private double Within(double y)
-    {
-        var margin = 1e-6 * (MaxY - MinY);
-        return Math.Clamp(y, MinY + margin, MaxY - margin);
-    }
+    private double Within(double y) => Math.Clamp(y, MinY + Margin, MaxY - Margin);
 
     private static double At((double X, double Y)[] chain, double y)
     {

@@ -69,7 +69,10 @@ public abstract record Sizing
     {
     }
 
-    /// <summary>Distance between neighbouring lines or points, metres. A zigzag: between successive turning points, along its axis.</summary>
+    /// <summary>
+    /// Distance between neighbouring lines or points, metres. A zigzag: between successive turning points, along its axis (with equal and
+    /// adjusted angle, where the hull has its mean width).
+    /// </summary>
     public sealed record Spacing(double Metres) : Sizing;
 
     /// <summary>Expected number of lines, legs or points in the stratum.</summary>
@@ -101,6 +104,12 @@ public sealed record LayoutDesign(
     GridShape Grid = GridShape.Square,
     ZigzagTurning Turning = ZigzagTurning.EqualSpaced)
 {
+    /// <summary>Zigzags: a second, mirrored pass on the way back.</summary>
+    public bool Crossed { get; init; }
+
+    /// <summary>Lines: stretches shorter than this are left out, metres; 0 leaves none out.</summary>
+    public double MinLengthMetres { get; init; }
+
     /// <summary>Whether animals are counted around points rather than along lines.</summary>
     public bool IsPoints => Kind is LayoutKind.PointGrid;
 

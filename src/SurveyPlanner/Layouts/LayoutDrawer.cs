@@ -71,6 +71,11 @@ internal static class LayoutDrawer
                 $"this draw places no transect in stratum '{name}', although the spacing fits; a stratum this small against its spacing needs a smaller one"));
         }
 
+        if (generator.Warning is { } warning)
+        {
+            notices.Add(new Notice(NoticeKind.Warning, warning));
+        }
+
         if (2 * generator.Stratum.HalfWidthMetres > generator.SpacingMetres)
         {
             var (what, reach) = generator.Design.IsPoints ? ("radius", "disks") : ("half-width", "strips");

@@ -30,6 +30,12 @@ internal abstract class LayoutGenerator(StratumFrame stratum, LayoutDesign desig
     /// <summary>Expected number of lines or points in closed form; null where none is known.</summary>
     public abstract double? ExpectedCount { get; }
 
+    /// <summary>How far drawn lines may stray from the design because curves are drawn as chords, metres.</summary>
+    public virtual double CurveStrayMetres => 0;
+
+    /// <summary>Something the user should know about this design in this stratum, one sentence; null when there is nothing.</summary>
+    public virtual string? Warning => null;
+
     /// <summary>
     /// Writes the realisation at given offsets. <paramref name="offsets"/> holds one number in [0, 1) for each of <see cref="OffsetRanges"/>;
     /// <paramref name="random"/> supplies whatever else a kind draws.

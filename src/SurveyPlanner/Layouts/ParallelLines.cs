@@ -4,7 +4,7 @@ namespace SurveyPlanner.Layouts;
 
 /// <summary>
 /// Systematic parallel lines: one spacing apart, the first at a random distance in [0, spacing) from the stratum's edge.
-/// Expected total length: area / spacing, exactly, for any shape. Travelled to and fro.
+/// Expected total length: area / spacing, exactly, for any shape (area where stretches are long enough to be kept). Travelled to and fro.
 /// </summary>
 internal sealed class ParallelLines : LayoutGenerator
 {
@@ -14,8 +14,8 @@ internal sealed class ParallelLines : LayoutGenerator
         : base(stratum, design, SpacingFor(stratum, design.Sizing))
     {
         _ranges = [SpacingMetres];
-        SizingRules.RefuseTooCoarse(stratum, SpacingMetres);
-        SizingRules.RefuseTooMany(stratum, stratum.ExtentAcross / SpacingMetres);
+        SizingRules.RefuseTooCoarse(stratum, design, SpacingMetres, stratum.ExtentAcross);
+        SizingRules.RefuseTooMany(stratum, design, stratum.ExtentAcross / SpacingMetres);
     }
 
     public override ReadOnlySpan<double> OffsetRanges => _ranges;
@@ -24,24 +24,24 @@ internal sealed class ParallelLines : LayoutGenerator
 
     public override bool StripsMayOverlap => 2 * Stratum.HalfWidthMetres > SpacingMetres;
 
-    public override double? ExpectedLength => Stratum.Clip.AreaSquareMetres / SpacingMetres;
+    public override double? ExpectedLength => Stratum.Lines.AreaSquareMetres / SpacingMetres;
 
-    public override double? ExpectedCount => SizingRules.CoveredExtent(Stratum.Clip) / SpacingMetres;
+    public override double? ExpectedCount => SizingRules.CoveredExtent(Stratum.Lines) / SpacingMetres;
 
     public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
     {
-        var clip = Stratum.Clip;
+        var lines = Stratum.Lines;
         var transect = 0;
         for (var line = 0; ; line++)
         {
-            var y = clip.MinY + ((offsets[0] + line) * SpacingMetres);
-            if (y > clip.MaxY)
+            var y = Stratum.Clip.MinY + ((offsets[0] + line) * SpacingMetres);
+            if (y > lines.MaxY)
             {
                 return;
             }
 
             var before = output.Count;
-            Clipper.ClipHorizontal(clip, y, transect, leftwards: transect % 2 == 1, output);
+            Clipper.ClipHorizontal(lines, y, transect, leftwards: transect % 2 == 1, output);
             if (output.Count > before)
             {
                 transect++;
@@ -52,8 +52,8 @@ internal sealed class ParallelLines : LayoutGenerator
     private static double SpacingFor(StratumFrame stratum, Sizing sizing) => sizing switch
     {
         Sizing.Spacing spacing => spacing.Metres,
-        Sizing.Number number => SizingRules.CoveredExtent(stratum.Clip) / number.Count,
-        Sizing.TotalLength length => stratum.Clip.AreaSquareMetres / length.Metres,
+        Sizing.Number number => SizingRules.CoveredExtent(stratum.Lines) / number.Count,
+        Sizing.TotalLength length => stratum.Lines.AreaSquareMetres / length.Metres,
         _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
     };
 }

@@ -11,9 +11,18 @@ internal sealed class PieceBuffer
     /// <summary>Room for the crossings of one line; see <see cref="FrameShape.CrossingsAt"/>.</summary>
     public double[] Crossings = new double[64];
 
+    /// <summary>Room for the turns of one zigzag.</summary>
+    public List<Turn> Turns { get; } = [];
+
+    /// <summary>Room for positions drawn one by one and put in order afterwards.</summary>
+    public List<double> Positions { get; } = [];
+
     public int Count { get; private set; }
 
     public ReadOnlySpan<Piece> Pieces => _pieces.AsSpan(0, Count);
+
+    /// <summary>Number of transects.</summary>
+    public int Transects => Count == 0 ? 0 : _pieces[Count - 1].Transect + 1;
 
     /// <summary>Total length of the pieces, metres.</summary>
     public double TotalLength
@@ -41,6 +50,45 @@ internal sealed class PieceBuffer
 
         _pieces[Count++] = new Piece(transect, fromX, fromY, toX, toY);
     }
+
+    /// <summary>
+    /// Of the pieces from an index on, keeps those whose stretch (pieces that go on from one another) is at least so long.
+    /// Returns whether any are left.
+    /// </summary>
+    public bool KeepStretches(int first, double shortestMetres)
+    {
+        if (shortestMetres > 0)
+        {
+            var kept = first;
+            for (var start = first; start < Count;)
+            {
+                var end = StretchEnd(start, out var length);
+                if (length >= shortestMetres)
+                {
+                    Array.Copy(_pieces, start, _pieces, kept, end - start);
+                    kept += end - start;
+                }
+
+                start = end;
+            }
+
+            Count = kept;
+        }
+
+        return Count > first;
+    }
+
+    private int StretchEnd(int start, out double length)
+    {
+        length = _pieces[start].Length;
+        var end = start + 1;
+        while (end < Count && _pieces[end].GoesOnFrom(_pieces[end - 1]))
+        {
+            length += _pieces[end++].Length;
+        }
+
+        return end;
+    }
 }
 
 /// <summary>A straight stretch of one transect, or a point.</summary>
@@ -54,4 +102,10 @@ internal readonly record struct Piece(int Transect, double FromX, double FromY, 
     public double Length => FromY == ToY
         ? Math.Abs(ToX - FromX)
         : Math.Sqrt(((ToX - FromX) * (ToX - FromX)) + ((ToY - FromY) * (ToY - FromY)));
+
+    /// <summary>Whether it starts where the piece before it ended, of the same transect: legs of a curve, sides of a circuit.</summary>
+    public bool GoesOnFrom(in Piece before)
+        => Transect == before.Transect
+            && Math.Abs(FromX - before.ToX) < Clipper.ShortestMetres
+            && Math.Abs(FromY - before.ToY) < Clipper.ShortestMetres;
 }

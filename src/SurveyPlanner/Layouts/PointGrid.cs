@@ -20,8 +20,9 @@ internal sealed class PointGrid : LayoutGenerator
 
         // A triangular grid repeats after two rows.
         _ranges = [SpacingMetres, _triangular ? 2 * _rowHeight : _rowHeight];
-        SizingRules.RefuseTooCoarse(stratum, _rowHeight);
-        SizingRules.RefuseTooMany(stratum, stratum.Clip.AreaSquareMetres / GridCellArea);
+        SizingRules.RefuseTooCoarse(stratum, design, _rowHeight, stratum.ExtentAcross);
+        SizingRules.RefuseTooCoarse(stratum, design, SpacingMetres, stratum.Clip.MaxX - stratum.Clip.MinX);
+        SizingRules.RefuseTooMany(stratum, design, stratum.Clip.AreaSquareMetres / GridCellArea);
     }
 
     /// <summary>Area that belongs to one point, square metres.</summary>

@@ -20,29 +20,49 @@ internal static class SizingRules
         return total;
     }
 
-    public static void RefuseTooCoarse(StratumFrame stratum, double spacingMetres)
+    /// <summary>Refuses transects so far apart that most draws would place none.</summary>
+    /// <param name="stratum">The stratum.</param>
+    /// <param name="design">What asked for the spacing.</param>
+    /// <param name="spacingMetres">The spacing that it came to.</param>
+    /// <param name="extentMetres">Length of the stratum in the direction of the spacing.</param>
+    public static void RefuseTooCoarse(StratumFrame stratum, LayoutDesign design, double spacingMetres, double extentMetres)
     {
-        if (spacingMetres > stratum.ExtentAcross)
+        if (spacingMetres <= extentMetres)
         {
-            throw new InputException(new Problem(
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"a spacing of {spacingMetres / 1000:0.###} km is larger than stratum '{stratum.Stratum.Name}', which is {stratum.ExtentAcross / 1000:0.###} km across the lines, so most draws would place no line in it; choose a smaller spacing or another bearing"),
-                Key: "layout.spacing"));
+            return;
         }
+
+        var name = stratum.Stratum.Name;
+        throw new InputException(new Problem(
+            design.Sizing is Sizing.Spacing
+                ? string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"a spacing of {spacingMetres / 1000:0.###} km is larger than stratum '{name}', which is {extentMetres / 1000:0.###} km long in that direction, so most draws would place no transect in it; choose a smaller spacing or another bearing")
+                : string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"asks for so little that transects would lie farther apart than stratum '{name}' is long in that direction, {extentMetres / 1000:0.###} km, so most draws would place none in it; ask for more or choose another bearing"),
+            Key: KeyOf(design)));
     }
 
-    public static void RefuseTooMany(StratumFrame stratum, double transects)
+    public static void RefuseTooMany(StratumFrame stratum, LayoutDesign design, double transects)
     {
         if (transects > MaxTransects)
         {
             throw new InputException(new Problem(
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"asks for about {transects:0} transects in stratum '{stratum.Stratum.Name}'; the limit is {MaxTransects}; choose a larger spacing (is the unit right?)"),
-                Key: "layout.spacing"));
+                    $"asks for about {transects:0} transects in stratum '{stratum.Stratum.Name}'; the limit is {MaxTransects}; ask for fewer (is the unit right?)"),
+                Key: KeyOf(design)));
         }
     }
+
+    private static string KeyOf(LayoutDesign design) => design.Sizing switch
+    {
+        Sizing.Number => design.IsPoints ? "layout.points" : "layout.lines",
+        Sizing.TotalLength => "layout.total_length",
+        Sizing.Precision => "layout.size_from",
+        _ => "layout.spacing",
+    };
 
     public static InputException LengthForPoints(StratumFrame stratum) => new(new Problem(
         $"stratum '{stratum.Stratum.Name}' has points, and points have no length; give spacing or points instead", Key: "layout.total_length"));

@@ -1,3 +1,4 @@
+using System.Globalization;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Layouts;
@@ -7,7 +8,8 @@ namespace SurveyPlanner.Layouts;
 /// </summary>
 internal sealed class StratumFrame
 {
-    private readonly Lazy<FrameShape> _across;
+    private readonly Lazy<FrameShape> _lines;
+    private readonly Lazy<FrameShape> _linesAcross;
 
     public StratumFrame(Stratum stratum, LayoutDesign design)
     {
@@ -18,7 +20,8 @@ internal sealed class StratumFrame
         Region = new FrameShape(stratum.Shape, Frame);
         ClipShape = design.Edge == EdgeRule.Plus ? PlaneGeometry.Grow(stratum.Shape, HalfWidthMetres) : stratum.Shape;
         Clip = design.Edge == EdgeRule.Plus ? new FrameShape(ClipShape, Frame) : Region;
-        _across = new Lazy<FrameShape>(() => new FrameShape(ClipShape, Frame, transposed: true));
+        _lines = new Lazy<FrameShape>(() => LinesFor(design.MinLengthMetres, transposed: false));
+        _linesAcross = new Lazy<FrameShape>(() => LinesFor(design.MinLengthMetres, transposed: true));
     }
 
     public Stratum Stratum { get; }
@@ -39,11 +42,31 @@ internal sealed class StratumFrame
     /// <summary>The same in the plane.</summary>
     public PlaneShape ClipShape { get; }
 
-    /// <summary><see cref="Clip"/> with x and y swapped, for looking across the lines.</summary>
-    public FrameShape ClipAcross => _across.Value;
+    /// <summary>Where whole lines along x may lie: <see cref="Clip"/> without stretches shorter than the least length.</summary>
+    /// <exception cref="InputException">No stretch is that long.</exception>
+    public FrameShape Lines => _lines.Value;
+
+    /// <summary><see cref="Lines"/> with x and y swapped, for looking across the lines.</summary>
+    public FrameShape LinesAcross => _linesAcross.Value;
 
     /// <summary>Length of the stratum across its lines, metres: what the lines are spread over.</summary>
     public double ExtentAcross => Clip.MaxY - Clip.MinY;
+
+    private FrameShape LinesFor(double minLengthMetres, bool transposed)
+    {
+        if (minLengthMetres <= 0)
+        {
+            return transposed ? new FrameShape(ClipShape, Frame, transposed) : Clip;
+        }
+
+        var longEnough = Trapezoids.Of(Clip).Select(part => part.WhereWiderThan(minLengthMetres)).OfType<Trapezoid>().ToList();
+        var shape = Trapezoids.ToShape(longEnough) ?? throw new InputException(new Problem(
+            string.Create(
+                CultureInfo.InvariantCulture,
+                $"no line along {BearingDegrees:0.#}° runs {minLengthMetres / 1000:0.###} km or more in stratum '{Stratum.Name}'; choose a smaller min_length or another bearing"),
+            Key: "layout.min_length"));
+        return new FrameShape(shape, new TurnedFrame(0), transposed);
+    }
 
     private static double TrueBearing(Stratum stratum, Bearing bearing)
     {

@@ -15,7 +15,7 @@ internal sealed class TransectBuilder(LayoutGenerator generator, EqualAreaProjec
     private const int MaxVertices = 250;
 
     private readonly TurnedFrame _frame = generator.Stratum.Frame;
-    private readonly double _toleranceMetres = StraySharePerHalfWidth * generator.Stratum.HalfWidthMetres;
+    private readonly double _toleranceMetres = (StraySharePerHalfWidth * generator.Stratum.HalfWidthMetres) - generator.CurveStrayMetres;
 
     public Transect Build(string id, int order, IReadOnlyList<Piece> pieces)
     {
@@ -25,7 +25,7 @@ internal sealed class TransectBuilder(LayoutGenerator generator, EqualAreaProjec
             return new Transect(id, order, [new TransectPiece([point], [projection.Unproject(point)])], 0, null);
         }
 
-        var built = pieces.Select(Build).ToImmutableArray();
+        var built = Stretches(pieces).Select(BuildStretch).ToImmutableArray();
         var first = built[0].Positions;
         return new Transect(
             id,
@@ -35,20 +35,42 @@ internal sealed class TransectBuilder(LayoutGenerator generator, EqualAreaProjec
             Geodesic.Inverse(first[0], first[1]).StartBearing);
     }
 
-    private TransectPiece Build(Piece piece)
+    /// <summary>Pieces that go on from one another, together.</summary>
+    private static IEnumerable<List<Piece>> Stretches(IReadOnlyList<Piece> pieces)
     {
-        var (from, to) = (_frame.ToPlane(piece.FromX, piece.FromY), _frame.ToPlane(piece.ToX, piece.ToY));
-        var stray = Stray(from, to);
-
-        // A bent line cut into n strays by 1/n² of what the whole one does.
-        var legs = Math.Clamp((int)Math.Ceiling(Math.Sqrt(stray / _toleranceMetres)), 1, MaxVertices - 1);
-        var plane = ImmutableArray.CreateBuilder<PlanePoint>(legs + 1);
-        for (var i = 0; i <= legs; i++)
+        var stretch = new List<Piece>();
+        foreach (var piece in pieces)
         {
-            plane.Add(Between(from, to, (double)i / legs));
+            if (stretch.Count > 0 && !piece.GoesOnFrom(stretch[^1]))
+            {
+                yield return stretch;
+                stretch = [];
+            }
+
+            stretch.Add(piece);
         }
 
-        var points = plane.MoveToImmutable();
+        yield return stretch;
+    }
+
+    private TransectPiece BuildStretch(List<Piece> pieces)
+    {
+        var plane = ImmutableArray.CreateBuilder<PlanePoint>();
+        plane.Add(_frame.ToPlane(pieces[0].FromX, pieces[0].FromY));
+        foreach (var piece in pieces)
+        {
+            var (from, to) = (plane[^1], _frame.ToPlane(piece.ToX, piece.ToY));
+
+            // A bent line cut into n strays by 1/n² of what the whole one does.
+            var most = Math.Max(1, (MaxVertices - 1) / pieces.Count);
+            var legs = Math.Clamp((int)Math.Ceiling(Math.Sqrt(Stray(from, to) / _toleranceMetres)), 1, most);
+            for (var i = 1; i <= legs; i++)
+            {
+                plane.Add(Between(from, to, (double)i / legs));
+            }
+        }
+
+        var points = plane.ToImmutable();
         return new TransectPiece(points, [.. points.Select(projection.Unproject)]);
     }
 

@@ -3,32 +3,33 @@ using SurveyPlanner.Numerics;
 namespace SurveyPlanner.Layouts;
 
 /// <summary>
-/// An equal-spaced zigzag: legs from one side of the stratum's convex hull to the other, turning points one spacing apart along the axis
-/// (which is at right angles to the bearing), on alternate sides. The start is uniform over two spacings, the period of the pattern.
-/// Each leg is a transect, cut at the stratum's boundary.
+/// A zigzag across the convex hull of the stratum, its axis at right angles to the bearing, with a random start; one pass, or a second, mirrored
+/// one on the way back. Each leg is a transect, cut at the stratum's boundary.
 /// </summary>
 internal sealed class Zigzag : LayoutGenerator
 {
     private readonly double[] _ranges;
-    private readonly HullSides _hull;
+    private readonly ZigzagPath _path;
+    private readonly string? _warning;
     private readonly Lazy<double> _expectedLength;
 
     public Zigzag(StratumFrame stratum, LayoutDesign design)
-        : this(stratum, design, SpacingFor(stratum, design))
+        : this(stratum, design, new HullSides(stratum))
     {
-        SizingRules.RefuseTooCoarse(stratum, SpacingMetres);
-        SizingRules.RefuseTooMany(stratum, stratum.ExtentAcross / SpacingMetres);
-        if (design.Turning != ZigzagTurning.EqualSpaced)
-        {
-            throw new InputException(new Problem("only zigzags with equal-spaced turning points are drawn so far; write turning = \"equal-spaced\"", Key: "layout.turning"));
-        }
     }
 
-    private Zigzag(StratumFrame stratum, LayoutDesign design, double spacingMetres)
+    private Zigzag(StratumFrame stratum, LayoutDesign design, HullSides hull)
+        : this(stratum, design, hull, SpacingFor(stratum, design, hull))
+    {
+    }
+
+    private Zigzag(StratumFrame stratum, LayoutDesign design, HullSides hull, double spacingMetres)
         : base(stratum, design, spacingMetres)
     {
-        _ranges = [2 * SpacingMetres];
-        _hull = new HullSides(stratum);
+        SizingRules.RefuseTooCoarse(stratum, design, SpacingMetres, stratum.ExtentAcross);
+        SizingRules.RefuseTooMany(stratum, design, Passes * stratum.ExtentAcross / SpacingMetres);
+        (_path, _warning) = PathFor(stratum, design, hull, spacingMetres);
+        _ranges = [_path.Period];
         _expectedLength = new Lazy<double>(() => EffortIntegral.Over(this).Mean);
     }
 
@@ -44,55 +45,58 @@ internal sealed class Zigzag : LayoutGenerator
 
     public override double? ExpectedCount => null;
 
+    public override double CurveStrayMetres => _path.CurveStrayMetres;
+
+    public override string? Warning => _warning;
+
+    private int Passes => Design.Crossed ? 2 : 1;
+
     public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
     {
-        var clip = Stratum.Clip;
-        var transect = 0;
-        var y = clip.MinY + ((offsets[0] - 1) * _ranges[0]);
-        var x = _hull.Left(y);
-        for (var turn = 1; y <= clip.MaxY; turn++)
+        var (turns, transect) = (output.Turns, 0);
+        for (var pass = 0; pass < Passes; pass++)
         {
-            var nextY = clip.MinY + ((offsets[0] - 1) * _ranges[0]) + (turn * SpacingMetres);
-            var nextX = turn % 2 == 1 ? _hull.Right(nextY) : _hull.Left(nextY);
-            var before = output.Count;
-            Clipper.ClipSegment(clip, x, y, nextX, nextY, transect, output);
-            transect += output.Count > before ? 1 : 0;
-            (x, y) = (nextX, nextY);
+            turns.Clear();
+            _path.AddTurns(offsets[0], mirrored: pass == 1, turns);
+            for (var i = 1; i < turns.Count; i++)
+            {
+                var before = output.Count;
+                _path.AddLeg(turns[i - 1], turns[i], Stratum.Clip, transect, output);
+                transect += output.KeepStretches(before, Design.MinLengthMetres) ? 1 : 0;
+            }
         }
     }
 
-    private static double SpacingFor(StratumFrame stratum, LayoutDesign design) => design.Sizing switch
+    /// <summary>
+    /// The path for a spacing c between turns along the axis. With equal angle and adjusted angle that is the spacing where the hull has its mean
+    /// width H: the tangent of the angle is H/c there, as it is between equally spaced turns in a rectangle.
+    /// </summary>
+    private static (ZigzagPath Path, string? Warning) PathFor(StratumFrame stratum, LayoutDesign design, HullSides hull, double spacingMetres)
     {
-        Sizing.Spacing spacing => spacing.Metres,
-        Sizing.Number number => stratum.ExtentAcross / number.Count,
-        Sizing.TotalLength length => SpacingForLength(stratum, design, length.Metres),
-        _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
-    };
-
-    /// <summary>Wider spacing, shorter path: halves the interval on a logarithmic scale until the expected length is met to 1e-6.</summary>
-    private static double SpacingForLength(StratumFrame stratum, LayoutDesign design, double lengthMetres)
-    {
-        var (low, high) = (stratum.ExtentAcross / 100_000, stratum.ExtentAcross);
-        if (EffortIntegral.Over(new Zigzag(stratum, design, high)).Mean > lengthMetres)
+        if (design.Turning == ZigzagTurning.EqualSpaced)
         {
-            return high * 1.0001;
+            return (new EqualSpacedPath(hull, spacingMetres), null);
         }
 
-        // Lines as close as their strips are wide are the densest that make sense; start there rather than at the limit.
-        low = Math.Max(low, Math.Min(high / 2, stratum.Clip.AreaSquareMetres / lengthMetres / 4));
-        for (var round = 0; round < 40 && high / low > 1 + 1e-7; round++)
-        {
-            var middle = Math.Sqrt(low * high);
-            if (EffortIntegral.Over(new Zigzag(stratum, design, middle)).Mean > lengthMetres)
-            {
-                low = middle;
-            }
-            else
-            {
-                high = middle;
-            }
-        }
+        var meanWidth = hull.MeanWidth;
+        var tangent = meanWidth / spacingMetres;
+        SwingRule rule = design.Turning == ZigzagTurning.EqualAngle
+            ? new EqualAngleSwing(tangent, stratum.HalfWidthMetres)
+            : new AdjustedAngleSwing(Math.Sqrt(1 + (tangent * tangent)) / meanWidth);
+        var band = ZigzagBand.For(stratum, hull, rule, design.Turning == ZigzagTurning.EqualAngle ? "equal-angle" : "adjusted-angle");
+        return (new SwingPath(band.Outline, rule, hull.MinY, hull.MaxY, stratum.HalfWidthMetres), band.Warning);
+    }
 
-        return Math.Sqrt(low * high);
+    private static double SpacingFor(StratumFrame stratum, LayoutDesign design, HullSides hull)
+    {
+        LayoutGenerator At(double spacing) => new Zigzag(stratum, design, hull, spacing);
+        var passes = design.Crossed ? 2 : 1;
+        return design.Sizing switch
+        {
+            Sizing.Spacing spacing => spacing.Metres,
+            Sizing.Number number => SpacingSearch.ForNumber(stratum, At, number.Count, passes * stratum.ExtentAcross / number.Count),
+            Sizing.TotalLength length => SpacingSearch.ForLength(stratum, At, length.Metres, passes * stratum.Clip.AreaSquareMetres / length.Metres),
+            _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
+        };
     }
 }

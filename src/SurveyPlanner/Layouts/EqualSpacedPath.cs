@@ -1,0 +1,36 @@
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// Turns one spacing apart along the axis, on alternate sides of the convex hull; straight legs. Beyond the ends of the hull its sides go on
+/// as they end. The start is uniform over two spacings, so either side is as likely at any place.
+/// </summary>
+internal sealed class EqualSpacedPath(HullSides hull, double spacingMetres) : ZigzagPath
+{
+    public override double Period => 2 * spacingMetres;
+
+    public override double CurveStrayMetres => 0;
+
+    public override void AddTurns(double share, bool mirrored, List<Turn> turns)
+    {
+        var first = turns.Count;
+        var start = hull.MinY + ((share - 1) * Period);
+        for (var turn = 0; ; turn++)
+        {
+            var y = start + (turn * spacingMetres);
+            var isLeft = (turn % 2 == 0) != mirrored;
+            turns.Add(new Turn(isLeft ? hull.Left(y) : hull.Right(y), y, isLeft));
+            if (y > hull.MaxY)
+            {
+                break;
+            }
+        }
+
+        if (mirrored)
+        {
+            turns.Reverse(first, turns.Count - first);
+        }
+    }
+
+    public override void AddLeg(Turn from, Turn to, FrameShape clip, int transect, PieceBuffer output)
+        => Clipper.ClipSegment(clip, from.X, from.Y, to.X, to.Y, transect, output);
+}
