@@ -101,6 +101,12 @@ public sealed record LayoutDesign(
     GridShape Grid = GridShape.Square,
     ZigzagTurning Turning = ZigzagTurning.EqualSpaced)
 {
+    /// <summary>Zigzags: a second, mirrored pass on the way back.</summary>
+    public bool Crossed { get; init; }
+
+    /// <summary>Lines: stretches shorter than this are left out, metres; 0 leaves none out.</summary>
+    public double MinLengthMetres { get; init; }
+
     /// <summary>Whether animals are counted around points rather than along lines.</summary>
     public bool IsPoints => Kind is LayoutKind.PointGrid;
 
