@@ -3,6 +3,21 @@ using SurveyPlanner.Files.Units;
 
 namespace SurveyPlanner.Files.Plans;
 
+/// <summary>True or false, without quotes.</summary>
+internal sealed class YesNoReader : ValueReader<bool>
+{
+    public override string Takes => "true or false";
+
+    public override Parsed<bool> Read(SettingValue value, Sample sample) => value switch
+    {
+        SettingValue.YesNo truth => Parsed.Ok(truth.Value),
+        SettingValue.Text { Value: "true" or "false" } text => Parsed.Bad<bool>($"write {sample.With(text.Value)} without quotes"),
+        _ => WrongType(value, sample),
+    };
+
+    public override string Write(bool value) => value ? "true" : "false";
+}
+
 /// <summary>A whole number in a range.</summary>
 /// <param name="min">Least.</param>
 /// <param name="max">Greatest.</param>

@@ -116,6 +116,14 @@ internal static class PlanKeys
         "turning", new ChoiceReader<ZigzagTurning>(), "\"adjusted-angle\"", KindFilter.Only(LayoutKind.Zigzag), (design, turning) => design with { Turning = turning }, @default: ZigzagTurning.EqualSpaced,
         doc: "How the zigzag turns.");
 
+    public static readonly PlanKey<bool> Crossed = Layout(
+        "crossed", new YesNoReader(), "true", KindFilter.Only(LayoutKind.Zigzag), (design, crossed) => design with { Crossed = crossed }, @default: false,
+        doc: "Whether a second, mirrored pass crosses the first on the way back.");
+
+    public static readonly PlanKey<double> MinLength = Layout(
+        "min_length", new LengthReader(zeroIsAllowed: true), "\"200 m\"", KindFilter.Lines, (design, metres) => design with { MinLengthMetres = metres }, @default: 0.0,
+        doc: "Stretches of line shorter than this are left out: splinters between islands.");
+
     // [stratum."name"] only
     public static readonly PlanKey<Money> CostPerKm = Add(
         "stratum", "cost_per_km", Money, "\"35 EUR\"", kinds: KindFilter.Lines,

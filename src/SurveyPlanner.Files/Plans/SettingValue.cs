@@ -22,7 +22,9 @@ internal abstract record SettingValue(string Raw)
 
     internal sealed record List(ImmutableArray<SettingValue> Items, string Raw) : SettingValue(Raw);
 
-    /// <summary>True, false or a date: no key takes one.</summary>
+    internal sealed record YesNo(bool Value, string Raw) : SettingValue(Raw);
+
+    /// <summary>A date or a time: no key takes one.</summary>
     internal sealed record Other(string Raw) : SettingValue(Raw);
 
     /// <summary>The key is there, but its line could not be read; that has been said already.</summary>

@@ -54,6 +54,7 @@ internal sealed class TomlTree(string file, List<Problem> problems)
             StringValueSyntax text => new SettingValue.Text(text.Value ?? "", raw),
             IntegerValueSyntax whole => new SettingValue.Whole(whole.Value, raw),
             FloatValueSyntax number => new SettingValue.Number(number.Value, raw),
+            BooleanValueSyntax truth => new SettingValue.YesNo(truth.Value, raw),
             ArraySyntax list => new SettingValue.List(
                 [.. list.Items.Select(item => item.Value is { } element ? Convert(element) : new SettingValue.Other(raw))], raw),
             _ => new SettingValue.Other(raw),

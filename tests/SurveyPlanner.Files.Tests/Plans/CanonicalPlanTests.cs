@@ -16,6 +16,7 @@ public class CanonicalPlanTests
             layout.half_width = "100 m"
             layout.kind = "parallel"
             layout.lines = 20
+            layout.min_length = "0 m"
             precision.allocation = "proportional"
             precision.min_lines = 10
             region.boundary = ["moor.geojson"]

@@ -19,10 +19,10 @@ public class PlanFileReaderTests
         Assert.Equal("zone", design.StratumField);
         Assert.Equal(["inner bay", "outer sound", "reef"], design.Strata);
         Assert.Equal(
-            new LayoutDesign(LayoutKind.Parallel, new Sizing.Spacing(5000), new Bearing.ShortAxis(), 300),
+            new LayoutDesign(LayoutKind.Parallel, new Sizing.Spacing(5000), new Bearing.ShortAxis(), 300) { MinLengthMetres = 200 },
             design.Layout);
         Assert.Equal(
-            new LayoutDesign(LayoutKind.Zigzag, new Sizing.Spacing(5000), new Bearing.Degrees(45.5), 300, EdgeRule.Plus, Turning: ZigzagTurning.AdjustedAngle),
+            new LayoutDesign(LayoutKind.Zigzag, new Sizing.Spacing(5000), new Bearing.Degrees(45.5), 300, EdgeRule.Plus, Turning: ZigzagTurning.AdjustedAngle) { Crossed = true, MinLengthMetres = 200 },
             design.LayoutOf("inner bay"));
         Assert.Equal(
             new LayoutDesign(LayoutKind.PointGrid, new Sizing.Number(60), new Bearing.ShortAxis(), 300, Grid: GridShape.Triangular),

@@ -34,10 +34,12 @@ internal static class SamplePlans
         spacing = "5 km"
         half_width = "300 m"
         edge = "minus"
+        min_length = "200 m"
 
         [stratum."inner bay"]
         kind = "zigzag"
         turning = "adjusted-angle"
+        crossed = true
         bearing = 45.5
         edge = "plus"
         cost_per_km = "35 EUR"
