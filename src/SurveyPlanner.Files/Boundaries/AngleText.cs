@@ -18,14 +18,13 @@ internal static partial class AngleText
             return plain;
         }
 
-        // A space at the end stands for the mark that may be missing there.
-        var match = Pattern().Match(text.Trim() + " ");
-        if (!match.Success || (match.Groups["before"].Success && match.Groups["after"].Success))
+        var (letter, rest) = Hemisphere(text.Trim());
+        var match = Pattern().Match(rest + " ");
+        if (!match.Success)
         {
             return null;
         }
 
-        var letter = (match.Groups["before"].Value + match.Groups["after"].Value).ToUpperInvariant();
         if (letter.Length > 0 && (isLatitude ? letter is not ("N" or "S") : letter is not ("E" or "W")))
         {
             fault = $"{Wording.Quote(text)} has the letter {letter}, which does not belong to a {(isLatitude ? "latitude" : "longitude")}; the columns may be swapped";
@@ -41,6 +40,16 @@ internal static partial class AngleText
 
         return Degrees(match) is { } degrees ? (isNegative || letter is "S" or "W" ? -degrees : degrees) : null;
     }
+
+    /// <summary>The letter before or after the numbers, and the rest.</summary>
+    private static (string Letter, string Numbers) Hemisphere(string text) => text switch
+    {
+        [var first, ..] when IsHemisphere(first) => (first.ToString().ToUpperInvariant(), text[1..].TrimStart()),
+        [.., var last] when IsHemisphere(last) => (last.ToString().ToUpperInvariant(), text[..^1].TrimEnd()),
+        _ => ("", text),
+    };
+
+    private static bool IsHemisphere(char c) => "NSEWnsew".Contains(c, StringComparison.Ordinal);
 
     private static double? Degrees(Match match)
     {
@@ -58,9 +67,10 @@ internal static partial class AngleText
 
     private static double Number(string text) => text.Length == 0 ? 0 : double.Parse(text, NumberStyles.AllowDecimalPoint, CultureInfo.InvariantCulture);
 
+    // Numbers must be parted by a mark or a space; the space that ends the text stands for the last mark.
     [GeneratedRegex(
-        """^(?<before>[NSEW])?\s*(?<sign>[+-])?(?<degrees>\d{1,3}(\.\d+)?)(\s*[°d])?((?<=[°d])\s*|\s+)((?<minutes>\d{1,2}(\.\d+)?)(\s*['′m])?((?<=['′m])\s*|\s+)((?<seconds>\d{1,2}(\.\d+)?)\s*("|″|''|s)?)?)?\s*(?<after>[NSEW])?$""",
-        RegexOptions.IgnoreCase | RegexOptions.CultureInvariant,
+        """^(?<sign>[+-])?(?<degrees>\d{1,3}(\.\d+)?)(\s*°\s*|\s+)((?<minutes>\d{1,2}(\.\d+)?)(\s*['′]\s*|\s+)((?<seconds>\d{1,2}(\.\d+)?)\s*("|″|'')?\s*)?)?$""",
+        RegexOptions.CultureInvariant,
         matchTimeoutMilliseconds: 1000)]
     private static partial Regex Pattern();
 }

@@ -68,7 +68,7 @@ internal static class GeoJsonBoundary
         {
             var m when m.Contains("maximum configured depth", StringComparison.Ordinal) => $"the JSON is nested more than {MostLevels} levels deep, which no boundary needs",
             var m when m.Contains("Duplicate", StringComparison.OrdinalIgnoreCase) => $"a member stands twice in one JSON object; keep one of them ({FirstSentence(m)})",
-            var m when m.Contains("trailing", StringComparison.Ordinal) || m.Contains("after a single JSON value", StringComparison.Ordinal)
+            var m when m.Contains("after a single JSON value", StringComparison.Ordinal)
                 => "something follows after the end of the JSON; the file must hold one GeoJSON object only, not one a line",
             _ when ReachesEnd(text, error) => "the file ends in the middle of the JSON, so it is cut short; export or copy it again",
             var m => $"this is not JSON: {FirstSentence(m)}; export the file again",
