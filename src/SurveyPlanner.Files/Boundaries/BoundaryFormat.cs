@@ -85,6 +85,11 @@ internal static class FormatOf
             return BoundaryFormat.GeoJson;
         }
 
+        if (extension is ".dxf" or ".dwg" or ".gpx" or ".wkt" or ".mif" && !text.StartsWith('<'))
+        {
+            throw FileBytes.Refusal(source, $"files of the kind {extension} are not read; {Remedy}");
+        }
+
         if (text.StartsWith('<'))
         {
             return BoundaryFormat.Kml;

@@ -61,7 +61,7 @@ public static class BoundaryReader
             BoundaryFormat.GeoJson => GeoJsonBoundary.Read(bytes, source, log),
             BoundaryFormat.Zip => ZipBoundary.Read(bytes, source, options, log),
             BoundaryFormat.GeoPackage => GeoPackageBoundary.Read(path, bytes, source, options, log),
-            BoundaryFormat.Kml => KmlBoundary.Read(bytes, source, log, options.Layer),
+            BoundaryFormat.Kml => KmlBoundary.Read([bytes], source, log, options.Layer),
             _ => CsvBoundary.Read(bytes, source, log),
         };
         return BoundaryAssembly.Assemble(raw, source, options, log);

@@ -9,7 +9,25 @@ namespace SurveyPlanner.Files.Boundaries;
 /// </summary>
 internal static class KmlBoundary
 {
-    public static RawBoundary Read(byte[] bytes, string source, RepairLog log, string? layer)
+    /// <summary>Reads one KML file, or all of a KMZ as if they were one.</summary>
+    public static RawBoundary Read(IReadOnlyList<byte[]> files, string source, RepairLog log, string? layer)
+    {
+        var placemarks = new KmlPlacemarks(source, log, layer);
+        foreach (var file in files)
+        {
+            Read(file, source, placemarks);
+        }
+
+        placemarks.DemandSome();
+        if (placemarks.HasLinks)
+        {
+            log.Warn("the file links to further files; links are not followed, so what stands elsewhere was not read");
+        }
+
+        return new RawBoundary(placemarks.Features, Wgs84Degrees.Instance, "the standard, which knows no other for KML", []);
+    }
+
+    private static void Read(byte[] bytes, string source, KmlPlacemarks placemarks)
     {
         var settings = new XmlReaderSettings
         {
@@ -25,9 +43,7 @@ internal static class KmlBoundary
             using var reader = XmlReader.Create(stream, settings);
             reader.MoveToContent();
             DemandKml(reader.LocalName, source);
-            var placemarks = new KmlPlacemarks(source, log, layer);
             placemarks.ReadAll(reader);
-            return new RawBoundary(placemarks.Features, Wgs84Degrees.Instance, "the standard, which knows no other for KML", []);
         }
         catch (XmlException error)
         {

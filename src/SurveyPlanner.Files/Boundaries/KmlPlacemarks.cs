@@ -32,7 +32,14 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
         while (reader.Read())
         {
         }
+    }
 
+    /// <summary>True when there were links to other files.</summary>
+    public bool HasLinks { get; private set; }
+
+    /// <summary>Refuses when no polygon was found.</summary>
+    public void DemandSome()
+    {
         if (_features.Count == 0)
         {
             throw layer is null
@@ -77,7 +84,7 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
                     ReadContainer(reader, folders, wanted);
                     break;
                 case "NetworkLink":
-                    log.Warn("the file links to further files; links are not followed, so what stands there was not read");
+                    HasLinks = true;
                     SkipElement(reader);
                     break;
                 default:

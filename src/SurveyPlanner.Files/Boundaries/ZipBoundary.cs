@@ -11,18 +11,22 @@ internal static class ZipBoundary
         var names = members.Names;
         var candidates = names.Where(name => Readable.Contains(Extension(name))).Order(StringComparer.Ordinal).ToList();
 
-        // In an archive of one KML file (a KMZ) a layer is a folder of that file, otherwise a file of the archive.
-        var isKmz = candidates.Count == 1 && Extension(candidates[0]) == ".kml";
-        var name = isKmz ? candidates[0] : Choose(candidates, names, source, options, log);
+        if (candidates.Count > 0 && candidates.TrueForAll(name => Extension(name) == ".kml"))
+        {
+            // A KMZ. Some programs put each layer into a file of its own and link them together; all lie in the archive and are read.
+            return KmlBoundary.Read([.. candidates.Select(members.Read)], source, log, options.Layer);
+        }
+
+        var name = Choose(candidates, names, source, options);
         return Extension(name) switch
         {
             ".shp" => ShapefileBoundary.Read(ShapefileParts.From(name, names, members.Read), source, log),
-            ".kml" => KmlBoundary.Read(members.Read(name), source, log, isKmz ? options.Layer : null),
+            ".kml" => KmlBoundary.Read([members.Read(name)], source, log, layer: null),
             _ => GeoJsonBoundary.Read(members.Read(name), source, log),
         };
     }
 
-    private static string Choose(List<string> candidates, IReadOnlyList<string> names, string source, BoundaryOptions options, RepairLog log)
+    private static string Choose(List<string> candidates, IReadOnlyList<string> names, string source, BoundaryOptions options)
     {
         if (candidates.Count == 0)
         {
@@ -32,12 +36,6 @@ internal static class ZipBoundary
         if (options.Layer is { } layer)
         {
             return LayerChoice.Of(candidates, layer, Path.GetFileNameWithoutExtension, source, "file");
-        }
-
-        if (candidates.Count > 1 && candidates.TrueForAll(name => Extension(name) == ".kml") && candidates.Contains("doc.kml"))
-        {
-            log.Warn($"the archive holds {candidates.Count} KML files; only doc.kml was read");
-            return "doc.kml";
         }
 
         return candidates.Count == 1

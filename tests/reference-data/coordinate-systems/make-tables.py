@@ -67,8 +67,31 @@ def number(value):
     return "0" if text == "-0" else text
 
 
+def other_datums():
+    """Every other datum that the register can bring to WGS 84 by three or seven parameters: with the operation of the largest area."""
+    known = set(same_as_wgs84()) | {str(c) for c in SHIFTED}
+    best = {}
+    for datum, operation, west, south, east, north, accuracy in db.execute("""select d.code, h.code, x.west_lon, x.south_lat, x.east_lon, x.north_lat, h.accuracy
+      from geodetic_datum d join ellipsoid e on e.auth_name=d.ellipsoid_auth_name and e.code=d.ellipsoid_code
+      join geodetic_crs g on g.datum_auth_name=d.auth_name and g.datum_code=d.code and g.type='geographic 2D'
+      join helmert_transformation_table h on h.source_crs_auth_name=g.auth_name and h.source_crs_code=g.code
+      join usage u on u.object_table_name='helmert_transformation' and u.object_auth_name=h.auth_name and u.object_code=h.code
+      join extent x on x.auth_name=u.extent_auth_name and x.code=u.extent_code
+      where d.auth_name='EPSG' and d.deprecated=0 and h.auth_name='EPSG' and h.target_crs_auth_name='EPSG' and h.target_crs_code='4326' and h.deprecated=0
+      and h.method_code in (9603, 9606, 9607) and h.accuracy < 60 and h.accuracy > 0"""):
+        width = east - west + (360 if east < west else 0)
+        rank = (width * (north - south), -accuracy, -int(operation))
+        if str(datum) not in known and rank > best.get(datum, ((), 0))[0]:
+            best[datum] = (rank, operation)
+    return {int(datum): [int(operation)] for datum, (_, operation) in sorted(best.items())}
+
+
+OTHER = other_datums()
+SHIFTS = SHIFTED | OTHER
+
+
 def datum_rows():
-    for code in [c for c in same_as_wgs84() if int(c) not in SHIFTED] + [str(c) for c in SHIFTED]:
+    for code in [c for c in same_as_wgs84() if int(c) not in SHIFTED] + [str(c) for c in SHIFTS]:
         row = db.execute("""select d.name, e.semi_major_axis, e.inv_flattening, e.semi_minor_axis, p.longitude, p.uom_auth_name, p.uom_code, e.uom_auth_name, e.uom_code
           from geodetic_datum d join ellipsoid e on e.auth_name=d.ellipsoid_auth_name and e.code=d.ellipsoid_code
           join prime_meridian p on p.auth_name=d.prime_meridian_auth_name and p.code=d.prime_meridian_code
@@ -81,7 +104,7 @@ def datum_rows():
         aliases = sorted({r[0] for r in db.execute("select alt_name from alias_name where table_name='geodetic_datum' and auth_name='EPSG' and code=?", (code,))})
         codes = [str(r[0]) for r in db.execute("select code from geodetic_crs where auth_name='EPSG' and type='geographic 2D' and datum_code=? and deprecated=0", (code,))]
         systems = [r[0] for r in db.execute("select name from geodetic_crs where auth_name='EPSG' and type='geographic 2D' and datum_code=? and deprecated=0", (code,))]
-        shifts = [shift(operation) for operation in SHIFTED.get(int(code), [])]
+        shifts = [shift(operation) for operation in SHIFTS.get(int(code), [])]
         yield [code, systems[0] if systems else name, "|".join([name] + aliases), number(a), number(rf), number(in_si(pm, pa, pc)), ",".join(codes), ";".join(shifts)]
 
 
@@ -103,7 +126,7 @@ def projected_rows(datums):
        where p.deprecated=0 and (p.auth_name='EPSG' or (p.auth_name='ESRI' and p.code in (%s)))""" % ",".join("'%d'" % c for c in ESRI)).fetchall()
     for authority, code, name, ca, cc, datum, cs, csa in sorted(rows, key=lambda r: (r[0], int(r[1]))):
         axes = db.execute("select orientation, uom_auth_name, uom_code from axis where coordinate_system_auth_name=? and coordinate_system_code=? order by coordinate_system_order", (csa, cs)).fetchall()
-        if str(datum) not in datums or str(datum) in BY_TEXT_ONLY or len(axes) != 2:
+        if str(datum) not in datums or str(datum) in BY_TEXT_ONLY or int(datum) in OTHER or len(axes) != 2:
             continue
         conversion = db.execute("select * from conversion_table where auth_name=? and code=?", (ca, cc)).fetchone()
         method = int(conversion[5]) if conversion[4] == "EPSG" else 0
