@@ -95,20 +95,15 @@ internal static class FormatOf
             return BoundaryFormat.Kml;
         }
 
-        if (text.Length == 0)
-        {
-            throw FileBytes.Refusal(source, "the file is empty; export the boundary again");
-        }
-
-        if (extension is ".shp")
-        {
-            throw FileBytes.Refusal(source, "the file is called .shp but does not begin like a shapefile, so it is damaged; copy or export it again");
-        }
-
         // A zero byte or another control character in the first lines: no text.
-        return text.Any(c => char.IsControl(c) && c is not ('\r' or '\n' or '\t'))
-            ? throw FileBytes.Refusal(source, $"the format of this file is not known; {Remedy}")
-            : BoundaryFormat.Csv;
+        var fault = text switch
+        {
+            "" => "the file is empty; export the boundary again",
+            _ when extension is ".shp" => "the file is called .shp but does not begin like a shapefile, so it is damaged; copy or export it again",
+            _ when text.Any(c => char.IsControl(c) && c is not ('\r' or '\n' or '\t')) => $"the format of this file is not known; {Remedy}",
+            _ => null,
+        };
+        return fault is null ? BoundaryFormat.Csv : throw FileBytes.Refusal(source, fault);
     }
 
     private static string DecodeStart(ReadOnlySpan<byte> start) => start switch

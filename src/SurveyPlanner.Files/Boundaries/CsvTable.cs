@@ -40,59 +40,55 @@ internal sealed record CsvTable(char Separator, IReadOnlyList<string> Header, IR
     private static List<string> Line(string text, ref int at, ref int number, char separator, string source)
     {
         var cells = new List<string>();
-        var cell = new StringBuilder();
-        var (quoted, start) = (false, number);
-        for (; at < text.Length; at++)
+        while (true)
         {
-            var c = text[at];
-            if (quoted)
+            cells.Add(at < text.Length && text[at] == '"' ? Quoted(text, ref at, ref number, source) : "");
+            var start = at;
+            while (at < text.Length && text[at] != separator && text[at] is not ('\r' or '\n'))
             {
-                number += c == '\n' ? 1 : 0;
-                if (c != '"')
-                {
-                    cell.Append(c);
-                }
-                else if (at + 1 < text.Length && text[at + 1] == '"')
-                {
-                    cell.Append(text[at++]);
-                }
-                else
-                {
-                    quoted = false;
-                }
+                at++;
             }
-            else if (c == '"' && cell.Length == 0)
+
+            // What follows a closing quotation mark up to the separator still belongs to the cell.
+            cells[^1] += text[start..at];
+            if (at < text.Length && text[at] == separator)
             {
-                quoted = true;
+                at++;
+                continue;
             }
-            else if (c == separator)
+
+            if (at < text.Length)
             {
-                cells.Add(cell.ToString());
-                cell.Clear();
-            }
-            else if (c is '\r' or '\n')
-            {
-                at += c == '\r' && at + 1 < text.Length && text[at + 1] == '\n' ? 2 : 1;
+                at += text[at] == '\r' && at + 1 < text.Length && text[at + 1] == '\n' ? 2 : 1;
                 number++;
-                break;
+            }
+
+            return cells;
+        }
+    }
+
+    /// <summary>A cell between quotation marks, where two of them stand for one.</summary>
+    private static string Quoted(string text, ref int at, ref int number, string source)
+    {
+        var (cell, start) = (new StringBuilder(), number);
+        for (at++; at < text.Length && cell.Length <= LongestCell; at++)
+        {
+            number += text[at] == '\n' ? 1 : 0;
+            if (text[at] != '"')
+            {
+                cell.Append(text[at]);
+            }
+            else if (at + 1 < text.Length && text[at + 1] == '"')
+            {
+                cell.Append(text[at++]);
             }
             else
             {
-                cell.Append(c);
-            }
-
-            if (cell.Length > LongestCell)
-            {
-                break;
+                at++;
+                return cell.ToString();
             }
         }
 
-        if (quoted || cell.Length > LongestCell)
-        {
-            throw new InputException(new Problem("a quotation mark is opened here and not closed; correct it", source, start));
-        }
-
-        cells.Add(cell.ToString());
-        return cells;
+        throw new InputException(new Problem("a quotation mark is opened here and not closed; correct it", source, start));
     }
 }

@@ -89,7 +89,8 @@ internal static class GeoJsonBoundary
 
     private static string FirstSentence(string message)
     {
+        // The library's sentence may quote a stretch of the file.
         var end = message.IndexOf(". ", StringComparison.Ordinal);
-        return (end < 0 ? message : message[..end]).TrimEnd('.');
+        return Wording.Harmless((end < 0 ? message : message[..end]).TrimEnd('.'), longest: 100);
     }
 }

@@ -65,24 +65,27 @@ internal sealed class GeoJsonGeometries(string source, RepairLog log, Coordinate
 
                 break;
             case "Polygon" or "MultiPolygon":
-                var coordinates = Member(geometry, "coordinates", number);
-                if (coordinates.GetArrayLength() == 0)
-                {
-                    log.Warn("left out, because the geometry is null or empty", Place.Feature(number));
-                }
-                else if (type == "Polygon")
-                {
-                    polygons.Add(coordinates);
-                }
-                else
-                {
-                    polygons.AddRange(coordinates.EnumerateArray());
-                }
-
+                AddPolygons(Member(geometry, "coordinates", number), type, number, polygons);
                 break;
             default:
                 CountOther(geometry, type, number);
                 break;
+        }
+    }
+
+    private void AddPolygons(JsonElement coordinates, string type, int number, List<JsonElement> polygons)
+    {
+        if (coordinates.GetArrayLength() == 0)
+        {
+            log.Warn("left out, because the geometry is null or empty", Place.Feature(number));
+        }
+        else if (type == "Polygon")
+        {
+            polygons.Add(coordinates);
+        }
+        else
+        {
+            polygons.AddRange(coordinates.EnumerateArray());
         }
     }
 

@@ -108,7 +108,7 @@ internal static class GeoPackageBoundary
                 continue;
             }
 
-            features.Add(new RawFeature(number, Attributes(reader, geometry), ToRaw(polygons, number)));
+            features.Add(new RawFeature(number, Attributes(reader, geometry), RawPolygon.From(polygons, number)));
         }
 
         if (features.Count == 0)
@@ -145,13 +145,6 @@ internal static class GeoPackageBoundary
         return isLayers
             ? [.. polygons.Where(rings => rings.Count > 0 && rings[0].Count > 0)]
             : throw FileBytes.Refusal(source, $"the geometry says srs_id {system} where its layer says {layer.SystemId}; save the layer again in one coordinate system", place);
-    }
-
-    private static List<RawPolygon> ToRaw(List<List<List<FilePoint>>> polygons, int feature)
-    {
-        return [.. polygons.Select((rings, part) => new RawPolygon(Ring(rings, part, 0), [.. Enumerable.Range(1, rings.Count - 1).Select(ring => Ring(rings, part, ring))]))];
-
-        RawRing Ring(List<List<FilePoint>> rings, int part, int ring) => new(rings[ring], Place.Ring(feature, part + 1, polygons.Count, ring + 1));
     }
 
     private static ImmutableSortedDictionary<string, string> Attributes(SqliteDataReader reader, int geometry)

@@ -58,40 +58,26 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
         }
 
         DemandShallow(reader);
-        if (reader.IsEmptyElement)
-        {
-            return;
-        }
-
         var isFolder = reader.LocalName is "Folder" or "Document";
-        var depth = reader.Depth;
-        while (reader.Read() && reader.Depth > depth)
+        XmlWalk.ForEachChild(reader, child =>
         {
-            if (reader.NodeType != XmlNodeType.Element)
+            if (isFolder && child.LocalName == "name")
             {
-                continue;
+                var name = XmlWalk.ElementText(child).Trim();
+                _folders.Add(name);
+                folders = folders.Add(name);
+                wanted |= string.Equals(name, layer, StringComparison.OrdinalIgnoreCase);
             }
-
-            switch (reader.LocalName)
+            else if (child.LocalName is "Document" or "Folder" or "Placemark")
             {
-                case "name" when isFolder && reader.Depth == depth + 1:
-                    var name = ElementText(reader).Trim();
-                    _folders.Add(name);
-                    folders = folders.Add(name);
-                    wanted |= string.Equals(name, layer, StringComparison.OrdinalIgnoreCase);
-                    break;
-                case "Document" or "Folder" or "Placemark":
-                    ReadContainer(reader, folders, wanted);
-                    break;
-                case "NetworkLink":
-                    HasLinks = true;
-                    SkipElement(reader);
-                    break;
-                default:
-                    SkipElement(reader);
-                    break;
+                ReadContainer(child, folders, wanted);
             }
-        }
+            else
+            {
+                HasLinks |= child.LocalName == "NetworkLink";
+                XmlWalk.SkipElement(child);
+            }
+        });
     }
 
     private void ReadPlacemark(XmlReader reader, ImmutableList<string> folders, bool wanted)
@@ -104,12 +90,12 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
         }
 
         var polygons = new List<List<List<FilePoint>>>();
-        ForEachChild(reader, child =>
+        XmlWalk.ForEachChild(reader, child =>
         {
             switch (child.LocalName)
             {
                 case "name":
-                    Put(attributes, "name", ElementText(child));
+                    Put(attributes, "name", XmlWalk.ElementText(child));
                     break;
                 case "ExtendedData":
                     ReadData(child, attributes);
@@ -119,22 +105,18 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
                     break;
             }
         });
-        if (!wanted)
+        if (wanted && polygons.Count > 0)
         {
-            return;
+            _features.Add(new RawFeature(_number, attributes.ToImmutable(), RawPolygon.From(polygons, _number)));
         }
-
-        if (polygons.Count == 0)
+        else if (wanted)
         {
             log.Warn("left out, because it holds points or lines, which bound no area, or nothing", Place.Feature(_number));
-            return;
         }
-
-        _features.Add(new RawFeature(_number, attributes.ToImmutable(), ToRaw(polygons, _number)));
     }
 
     private static void ReadData(XmlReader reader, ImmutableSortedDictionary<string, string>.Builder attributes)
-        => ForEachChild(reader, child =>
+        => XmlWalk.ForEachChild(reader, child =>
         {
             if (child.LocalName == "SchemaData")
             {
@@ -142,25 +124,25 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
             }
             else if (child.LocalName == "SimpleData" && child.GetAttribute("name") is { } simple)
             {
-                Put(attributes, simple, ElementText(child));
+                Put(attributes, simple, XmlWalk.ElementText(child));
             }
             else if (child.LocalName == "Data" && child.GetAttribute("name") is { } name)
             {
-                ForEachChild(child, value =>
+                XmlWalk.ForEachChild(child, value =>
                 {
                     if (value.LocalName == "value")
                     {
-                        Put(attributes, name, ElementText(value));
+                        Put(attributes, name, XmlWalk.ElementText(value));
                     }
                     else
                     {
-                        SkipElement(value);
+                        XmlWalk.SkipElement(value);
                     }
                 });
             }
             else
             {
-                SkipElement(child);
+                XmlWalk.SkipElement(child);
             }
         });
 
@@ -178,21 +160,21 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
         switch (reader.LocalName)
         {
             case "MultiGeometry":
-                ForEachChild(reader, child => ReadGeometry(child, polygons));
+                XmlWalk.ForEachChild(reader, child => ReadGeometry(child, polygons));
                 break;
             case "Polygon":
                 polygons.Add(ReadPolygon(reader, polygons.Count + 1));
                 break;
             case "LineString" or "LinearRing" or "Track" or "MultiTrack":
                 _lines++;
-                SkipElement(reader);
+                XmlWalk.SkipElement(reader);
                 break;
             case "Point":
                 _points++;
-                SkipElement(reader);
+                XmlWalk.SkipElement(reader);
                 break;
             default:
-                SkipElement(reader);
+                XmlWalk.SkipElement(reader);
                 break;
         }
     }
@@ -202,7 +184,7 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
         List<FilePoint>? shell = null;
         var holes = new List<List<FilePoint>>();
         var place = $"{Place.Feature(_number)}, part {part}";
-        ForEachChild(reader, child =>
+        XmlWalk.ForEachChild(reader, child =>
         {
             if (child.LocalName == "outerBoundaryIs")
             {
@@ -214,72 +196,24 @@ internal sealed class KmlPlacemarks(string source, RepairLog log, string? layer)
             }
             else
             {
-                SkipElement(child);
+                XmlWalk.SkipElement(child);
             }
         });
         return shell is null ? throw FileBytes.Refusal(source, "the polygon has no outer boundary; export the KML again", place) : [shell, .. holes];
     }
 
     private void ForEachRing(XmlReader reader, string place, Action<List<FilePoint>> add)
-        => ForEachChild(reader, ring => ForEachChild(ring, child =>
+        => XmlWalk.ForEachChild(reader, ring => XmlWalk.ForEachChild(ring, child =>
         {
             if (child.LocalName == "coordinates")
             {
-                add(KmlCoordinates.Read(ElementText(child), source, place, _budget));
+                add(KmlCoordinates.Read(XmlWalk.ElementText(child), source, place, _budget));
             }
             else
             {
-                SkipElement(child);
+                XmlWalk.SkipElement(child);
             }
         }));
-
-    private static List<RawPolygon> ToRaw(List<List<List<FilePoint>>> polygons, int feature)
-    {
-        return [.. polygons.Select((rings, part) => new RawPolygon(Ring(rings, part, 0), [.. Enumerable.Range(1, rings.Count - 1).Select(ring => Ring(rings, part, ring))]))];
-
-        RawRing Ring(List<List<FilePoint>> rings, int part, int ring) => new(rings[ring], Place.Ring(feature, part + 1, polygons.Count, ring + 1));
-    }
-
-    /// <summary>Calls back on each child element; the callback reads it up to its end.</summary>
-    private static void ForEachChild(XmlReader reader, Action<XmlReader> read)
-    {
-        if (reader.IsEmptyElement)
-        {
-            return;
-        }
-
-        var depth = reader.Depth;
-        while (reader.Read() && reader.Depth > depth)
-        {
-            if (reader.NodeType == XmlNodeType.Element)
-            {
-                read(reader);
-            }
-        }
-    }
-
-    /// <summary>All text in an element, and the reader at its end.</summary>
-    private static string ElementText(XmlReader reader)
-    {
-        if (reader.IsEmptyElement)
-        {
-            return "";
-        }
-
-        var text = new System.Text.StringBuilder();
-        var depth = reader.Depth;
-        while (reader.Read() && reader.Depth > depth)
-        {
-            if (reader.NodeType is XmlNodeType.Text or XmlNodeType.CDATA or XmlNodeType.Whitespace or XmlNodeType.SignificantWhitespace)
-            {
-                text.Append(reader.Value);
-            }
-        }
-
-        return text.ToString();
-    }
-
-    private static void SkipElement(XmlReader reader) => ForEachChild(reader, static _ => { });
 
     private void DemandShallow(XmlReader reader)
     {

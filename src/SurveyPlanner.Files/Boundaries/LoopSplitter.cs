@@ -41,6 +41,7 @@ internal sealed class LoopSplitter(Frame frame, double wholeArea)
         return loops.Count == 0 ? null : Sort(loops);
     }
 
+    // One pass that decides on each loop in turn, largest first; cut in two it would have to hand on everything it knows.
     private Loops? Sort(List<(List<FilePoint> Points, double Area)> loops)
     {
         var outlineArea = Math.Abs(loops[0].Area);

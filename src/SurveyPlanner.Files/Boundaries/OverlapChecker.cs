@@ -65,20 +65,19 @@ internal sealed class OverlapChecker(Frame frame, string source, RepairLog log)
             return false;
         }
 
-        var inner = frame.Area(parts[i]) <= frame.Area(parts[j]) ? i : j;
-        var outer = inner == i ? j : i;
+        var (inner, outer) = frame.Area(parts[i]) <= frame.Area(parts[j]) ? (i, j) : (j, i);
         var isRepeat = frame.Area(parts[outer]) - area <= 1e-9 * area;
-        if (!isRepeat && frame.Area(parts[inner]) - area <= 1e-9 * area)
+        if (isRepeat || frame.Area(parts[inner]) - area > 1e-9 * area)
         {
-            var at = polygons[inner].InteriorPoint;
-            _problems.Add(new Problem(
-                $"the part lies wholly inside another part ({parts[outer].Shell.Place}), near {frame.Position(at.X, at.Y)}; if it is a hole, make it one, else remove it",
-                source,
-                Key: parts[inner].Shell.Place));
-            return false;
+            return true;
         }
 
-        return true;
+        var at = polygons[inner].InteriorPoint;
+        _problems.Add(new Problem(
+            $"the part lies wholly inside another part ({parts[outer].Shell.Place}), near {frame.Position(at.X, at.Y)}; if it is a hole, make it one, else remove it",
+            source,
+            Key: parts[inner].Shell.Place));
+        return false;
     }
 
     private IPreparedGeometry Prepared(Polygon[] polygons, int index)

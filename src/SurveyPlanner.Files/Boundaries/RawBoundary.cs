@@ -11,7 +11,16 @@ internal readonly record struct FilePoint(double X, double Y);
 /// <param name="Place">Where it stands, for messages, such as <c>feature 3, part 2, ring 1</c>.</param>
 internal sealed record RawRing(IReadOnlyList<FilePoint> Points, string Place);
 
-internal sealed record RawPolygon(RawRing Shell, IReadOnlyList<RawRing> Holes);
+internal sealed record RawPolygon(RawRing Shell, IReadOnlyList<RawRing> Holes)
+{
+    /// <summary>The polygons of one feature, each given as its rings, the shell first.</summary>
+    public static IReadOnlyList<RawPolygon> From(List<List<List<FilePoint>>> polygons, int feature)
+    {
+        return [.. polygons.Select((rings, part) => new RawPolygon(Ring(rings, part, 0), [.. Enumerable.Range(1, rings.Count - 1).Select(ring => Ring(rings, part, ring))]))];
+
+        RawRing Ring(List<List<FilePoint>> rings, int part, int ring) => new(rings[ring], Place.Ring(feature, part + 1, polygons.Count, ring + 1));
+    }
+}
 
 internal sealed record RawFeature(int Number, ImmutableSortedDictionary<string, string> Attributes, IReadOnlyList<RawPolygon> Polygons);
 

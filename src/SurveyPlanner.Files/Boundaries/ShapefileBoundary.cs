@@ -24,6 +24,18 @@ internal static class ShapefileBoundary
             throw FileBytes.Refusal(source, $"the .shp holds {records.Count} shapes but the .dbf {table.Rows.Count} rows; the two do not belong together, or one is cut short");
         }
 
+        var features = Features(records, table, source, log);
+        if (features.Count == 0)
+        {
+            throw FileBytes.Refusal(source, NoPolygons.Sentence(records.Count, 0, 0, 0));
+        }
+
+        var (system, origin) = System(parts.Prj);
+        return new RawBoundary(features, system, origin, []);
+    }
+
+    private static List<RawFeature> Features(IReadOnlyList<Shape?> records, DbfTable? table, string source, RepairLog log)
+    {
         var budget = new VertexBudget(source);
         var features = new List<RawFeature>();
         for (var i = 0; i < records.Count; i++)
@@ -44,13 +56,7 @@ internal static class ShapefileBoundary
             }
         }
 
-        if (features.Count == 0)
-        {
-            throw FileBytes.Refusal(source, NoPolygons.Sentence(records.Count, 0, 0, 0));
-        }
-
-        var (system, origin) = System(parts.Prj);
-        return new RawBoundary(features, system, origin, []);
+        return features;
     }
 
     private static (CoordinateSystem? System, string Origin) System(byte[]? prj)

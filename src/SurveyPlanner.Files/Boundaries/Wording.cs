@@ -35,16 +35,18 @@ internal static class Wording
     public static string Number(double value) => value.ToString("R", CultureInfo.InvariantCulture);
 
     /// <summary>Text from a file, made harmless for a terminal: no control characters, at most 60 characters.</summary>
-    public static string Quote(string text)
+    public static string Quote(string text) => $"'{Harmless(text, longest: 60)}'";
+
+    /// <summary>Text without control characters, cut to a length.</summary>
+    public static string Harmless(string text, int longest)
     {
-        const int longest = 60;
-        var safe = new StringBuilder("'");
+        var safe = new StringBuilder();
         foreach (var rune in text.EnumerateRunes().Take(longest))
         {
             safe.Append(Rune.IsControl(rune) ? "?" : rune.ToString());
         }
 
-        return safe.Append(text.Length > longest ? "…'" : "'").ToString();
+        return safe.Append(text.Length > longest ? "…" : "").ToString();
     }
 
     public static string Count(int number, string one, string many) => Invariant($"{number} {(number == 1 ? one : many)}");

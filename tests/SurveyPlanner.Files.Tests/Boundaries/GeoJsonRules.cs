@@ -65,6 +65,15 @@ public class GeoJsonRules
         Assert.Equal((2, 27), (error.Problems[0].Line, error.Problems[0].Column));
     }
 
+    [Fact]
+    public void Hostile_text_in_a_message_is_harmless_and_short()
+    {
+        var refusal = InMemory.Refusal("{\"type\":nul\u001b[31m" + new string('x', 5000) + "}");
+
+        Assert.DoesNotContain('\u001b', refusal);
+        Assert.InRange(refusal.Length, 10, 300);
+    }
+
     [Theory]
     [InlineData("{0}")]
     [InlineData("""{{"type":"Feature","properties":null,"geometry":{0}}}""")]
