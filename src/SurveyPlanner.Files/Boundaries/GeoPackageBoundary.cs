@@ -25,7 +25,7 @@ internal static class GeoPackageBoundary
         }
         catch (SqliteException error)
         {
-            throw FileBytes.Refusal(source, $"the GeoPackage is damaged or cut short ({error.Message.TrimEnd('.')}); copy or export it again");
+            throw FileBytes.Refusal(source, $"the GeoPackage is damaged or cut short ({Wording.Harmless(error.Message.TrimEnd('.'), longest: 100)}); copy or export it again");
         }
         catch (Exception error) when (error is InvalidCastException or FormatException or OverflowException)
         {

@@ -1,4 +1,5 @@
 using SurveyPlanner.Files.Boundaries;
+using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Files.Tests.Boundaries;
 
@@ -62,6 +63,11 @@ public class DirtyBoundaries
 
         Assert.Equal(squareKilometres, AreaOf.SquareKilometres(boundary), 0.0006);
         Assert.Contains(told, string.Join("\n", boundary.Notices.Select(notice => notice.Message)), StringComparison.Ordinal);
+
+        // The core makes the same of it, in its plane and on the ellipsoid.
+        var region = RegionBuilder.Build(boundary, new RegionDesign(), []);
+        Assert.Equal(1, region.AreaKm2 / squareKilometres, 1e-6);
+        Assert.Equal(1, region.GeodesicAreaKm2 / squareKilometres, 1e-6);
     }
 
     [Theory]
@@ -129,6 +135,15 @@ public class DirtyBoundaries
         Assert.Equal(5, boundary.Features[0].Polygons.Length);
         var repair = Assert.Single(boundary.Notices, notice => notice.Kind == NoticeKind.Repair);
         Assert.Contains("longitude -16.483, latitude 63.902", repair.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Overlapping_strata_are_refused_by_the_core_with_their_overlap()
+    {
+        var boundary = BoundaryReader.Read(ReferenceFiles.Dirty("geom_overlapping_strata.geojson"));
+        var error = Assert.Throws<InputException>(() => RegionBuilder.Build(boundary, new RegionDesign(StratumField: "stratum"), []));
+
+        Assert.Contains("24.61", error.Message, StringComparison.Ordinal);
     }
 
     [Fact]
