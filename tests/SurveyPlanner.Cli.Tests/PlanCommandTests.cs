@@ -5,7 +5,7 @@ namespace SurveyPlanner.Cli.Tests;
 public class PlanCommandTests
 {
     private static readonly string[] Files =
-        ["coverage.csv", "record.json", "report.html", "summary.json", "transects.geojson", "transects.gpx", "waypoints.csv"];
+        ["coverage.csv", "record.json", "report.html", "summary.json", "survey.gpkg", "transects.geojson", "transects.gpx", "transects.kml", "waypoints.csv"];
 
     [Theory]
     [InlineData("island_iceland", "kind = \"parallel\"\nbearing = \"short-axis\"\nspacing = \"20 km\"\nhalf_width = \"500 m\"", 102356.769487)]

@@ -49,8 +49,8 @@ internal sealed record FieldMarks(ImmutableArray<FieldMark> Marks, ImmutableArra
 
             for (var i = 0; i < planned.Transect.Pieces.Length; i++)
             {
-                var stretch = Stretch(planned, i, stretchNames);
                 var wish = planned.Transect.Pieces.Length == 1 ? planned.Transect.Id : planned.Transect.Id + Letter(i);
+                var stretch = Stretch(planned, i, stretchNames.Take(wish));
                 stretches.Add(stretch);
                 marks.Add(Mark(stretch, MarkEnd.Start, markNames.Take(wish + "S")));
                 marks.Add(Mark(stretch, MarkEnd.End, markNames.Take(wish + "E")));
@@ -60,11 +60,10 @@ internal sealed record FieldMarks(ImmutableArray<FieldMark> Marks, ImmutableArra
         return new FieldMarks(marks.ToImmutable(), stretches.ToImmutable());
     }
 
-    private static FieldStretch Stretch(PlannedTransect planned, int index, ShortNames names)
+    private static FieldStretch Stretch(PlannedTransect planned, int index, string name)
     {
         var (transect, count) = (planned.Transect, planned.Transect.Pieces.Length);
         var part = count == 1 ? "" : $" part {index + 1} of {count}";
-        var name = names.Take(count == 1 ? transect.Id : transect.Id + Letter(index));
         return new FieldStretch(name, planned, transect.Pieces[index], $"{transect.Id}{part} {PlainText.Clean(planned.StratumName)}");
     }
 

@@ -13,6 +13,8 @@ public static class SurveyFiles
         [
             TransectsGeoJson.Write(plan),
             TransectsGpx.Write(plan),
+            TransectsKml.Write(plan),
+            SurveyGeoPackage.Write(plan),
             WaypointsCsv.Write(plan),
             CoverageCsv.Write(plan),
             SummaryWriter.Write(plan, draw),

@@ -21,11 +21,10 @@ public static class TransectsGeoJson
 
     private static ReadOnlyMemory<byte> Write(SurveyPlan plan, bool withCoverage)
     {
-        var transects = PlannedTransect.InOrder(plan);
-        var shapes = transects.Select(planned => Parts(planned, plan.Region.Projection)).ToList();
+        var transects = DrawnTransect.All(plan, withCoverage);
         var buffer = new ArrayBufferWriter<byte>();
         buffer.Write("{\"type\":\"FeatureCollection\","u8);
-        if (BoundingBox.Round(shapes.SelectMany(parts => parts.Select(part => (IReadOnlyList<LonLat>)part))) is { } box)
+        if (BoundingBox.Round(transects.SelectMany(transect => transect.Parts.Select(part => (IReadOnlyList<LonLat>)part))) is { } box)
         {
             buffer.Write("\"bbox\":"u8);
             buffer.Write(JsonText.Write(json => WriteNumbers(json, box.West, box.South, box.East, box.North), indented: false).Span);
@@ -36,32 +35,27 @@ public static class TransectsGeoJson
         for (var i = 0; i < transects.Count; i++)
         {
             buffer.Write(i == 0 ? "\n"u8 : ",\n"u8);
-            buffer.Write(JsonText.Write(json => WriteFeature(json, transects[i], shapes[i], withCoverage), indented: false).Span);
+            buffer.Write(JsonText.Write(json => WriteFeature(json, transects[i]), indented: false).Span);
         }
 
         buffer.Write("\n]}\n"u8);
         return buffer.WrittenMemory;
     }
 
-    private static ImmutableArray<ImmutableArray<LonLat>> Parts(PlannedTransect planned, EqualAreaProjection projection) =>
-        [.. planned.Transect.Pieces.SelectMany(piece => AntimeridianCut.Cut(LonLatPath.Of(piece, projection, planned.HalfWidthMetres)))];
-
-    private static void WriteFeature(
-        Utf8JsonWriter json, PlannedTransect planned, ImmutableArray<ImmutableArray<LonLat>> parts, bool withCoverage)
+    private static void WriteFeature(Utf8JsonWriter json, DrawnTransect transect)
     {
-        var transect = planned.Transect;
         json.WriteStartObject();
         json.WriteString("type", "Feature");
         json.WriteString("id", transect.Id);
-        json.Object("geometry", () => WriteGeometry(json, transect.IsPoint, parts));
+        json.Object("geometry", () => WriteGeometry(json, transect.IsPoint, transect.Parts));
         json.Object("properties", () =>
         {
             json.WriteString("id", transect.Id);
-            json.Text("stratum", planned.StratumName);
+            json.WriteString("stratum", transect.Stratum);
             json.WriteNumber("order", transect.Order);
-            if (!transect.IsPoint)
+            if (transect.LengthMetres is { } length)
             {
-                json.Figure("length_m", Figures.Metres(transect.LengthMetres));
+                json.Figure("length_m", Figures.Metres(length));
             }
 
             if (transect.BearingDegrees is { } bearing)
@@ -69,9 +63,9 @@ public static class TransectsGeoJson
                 json.Figure("bearing_deg", Figures.Bearing(bearing));
             }
 
-            if (withCoverage && planned.Coverage is { } mean)
+            if (transect.Coverage is { } coverage)
             {
-                json.Figure("coverage", Figures.Significant(mean, 6));
+                json.Figure("coverage", Figures.Significant(coverage, 6));
             }
         });
         json.WriteEndObject();

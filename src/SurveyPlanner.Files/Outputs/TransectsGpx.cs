@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Text;
 using System.Xml;
 using SurveyPlanner.Regions;
 
@@ -13,15 +12,13 @@ public static class TransectsGpx
 {
     private const string Namespace = "http://www.topografix.com/GPX/1/1";
 
-    private const string Caution =
+    internal const string Caution =
         "Planned survey transects, WGS 84, bearings true. Not for navigation: check hazards, weather, closed areas and permissions before going.";
 
     public static OutputFile Write(SurveyPlan plan)
     {
         var field = FieldMarks.Of(plan);
-        var settings = new XmlWriterSettings { Encoding = new UTF8Encoding(encoderShouldEmitUTF8Identifier: false), Indent = true, NewLineChars = "\n" };
-        using var stream = new MemoryStream();
-        using (var xml = XmlWriter.Create(stream, settings))
+        return new OutputFile(OutputNames.TransectsGpx, XmlText.Write(xml =>
         {
             xml.WriteStartElement("gpx", Namespace);
             xml.WriteAttributeString("version", "1.1");
@@ -34,10 +31,7 @@ public static class TransectsGpx
             WriteRoutes(xml, field.Stretches);
             WriteTracks(xml, plan);
             xml.WriteEndElement();
-        }
-
-        stream.WriteByte((byte)'\n');
-        return new OutputFile(OutputNames.TransectsGpx, stream.ToArray());
+        }));
     }
 
     private static void WriteMarks(XmlWriter xml, ImmutableArray<FieldMark> marks)

@@ -4,7 +4,7 @@ using SurveyPlanner.Files.Outputs;
 namespace SurveyPlanner.Files.Records;
 
 /// <summary>
-/// Everything a reviewer needs to re-create a layout and see that it is the same. Holds no absolute path of the user's own making.
+/// Everything a reviewer needs to re-create a layout and see that it is the same. The program adds no absolute path: those tell names of people and machines.
 /// </summary>
 /// <param name="Run">What made it, on what, and when.</param>
 /// <param name="SurveyName">Name of the survey.</param>

@@ -112,7 +112,7 @@ public sealed class SummaryWriterTests
     {
         var files = SurveyFiles.Of(TestPlans.TwoStrata(), draw: 1);
 
-        Assert.Equal(["transects.geojson", "transects.gpx", "waypoints.csv", "coverage.csv", "summary.json"], files.Select(file => file.Name));
+        Assert.Equal(["transects.geojson", "transects.gpx", "transects.kml", "survey.gpkg", "waypoints.csv", "coverage.csv", "summary.json"], files.Select(file => file.Name));
         Assert.All(files, file => Assert.Contains(file.Name, OutputNames.All));
         Assert.Equal(files.Select(file => file.Sha256), SurveyFiles.Of(TestPlans.TwoStrata(), draw: 1).Select(file => file.Sha256));
     }

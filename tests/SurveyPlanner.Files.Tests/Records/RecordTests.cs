@@ -199,7 +199,7 @@ public sealed class RecordTests : IDisposable
         var renamed = plan with { Design = plan.Design with { Name = "Another" } };
         var sameLayout = Replay.Compare(record, renamed, SurveyFiles.Of(renamed, draw: 2));
         Assert.True(sameLayout.IsSameLayout);
-        Assert.Equal(["transects.gpx", "summary.json"], sameLayout.ChangedOutputs);
+        Assert.Equal(["transects.gpx", "transects.kml", "summary.json"], sameLayout.ChangedOutputs);
 
         // One vertex moved by a centimetre: 1e-7 degrees.
         var moved = TestPlans.Plan(
