@@ -19,6 +19,9 @@ public sealed record StratumShare(string Name, double Effort, int? Transects, do
 public sealed record AllocationOption(
     Allocation Allocation, double RequiredEffort, ImmutableArray<StratumShare> Strata, double Effort, double? Cost, EffortPrecision Precision)
 {
+    /// <summary>More transects than this are not counted one by one.</summary>
+    private const int MostTransects = 1_000_000_000;
+
     internal static AllocationOption Of(EffortModel model, Allocation allocation, double required, EffortDesign design)
     {
         var strata = model.Strata.Select(stratum => Rounded(stratum, required * stratum.Share, design)).ToImmutableArray();
@@ -34,12 +37,13 @@ public sealed record AllocationOption(
 
     private static StratumShare Rounded(StratumModel stratum, double effort, EffortDesign design)
     {
-        int? transects = stratum.TransectEffort is { } one ? Math.Max(Whole(effort / one), design.MinLines) : null;
+        var whole = stratum.TransectEffort is { } one ? Math.Max(Whole(effort / one), design.MinLines) : double.PositiveInfinity;
+        int? transects = whole <= MostTransects ? (int)whole : null;
         var rounded = transects * stratum.TransectEffort ?? effort;
         return new StratumShare(
             stratum.Name, rounded, transects, design.CostPerUnit.TryGetValue(stratum.Name, out var cost) ? cost * rounded : null);
     }
 
     /// <summary>Rounded up; the small allowance keeps an exact whole number from being pushed up by rounding error.</summary>
-    internal static int Whole(double number) => (int)Math.Min(int.MaxValue, Math.Ceiling(number - (1e-9 * number)));
+    internal static double Whole(double number) => Math.Ceiling(number - (1e-9 * number));
 }

@@ -40,10 +40,7 @@ internal static class EffortAdvice
             "Simulated draws, see docs/methods/effort.md");
         if (plan.Uncertainty?.Measured is { } measured)
         {
-            yield return new Advice(
-                FormattableString.Invariant(
-                    $"In {MeasuredReliability.Pilots} simulated pilots of {measured.Transects} lines with {measured.DetectionsPerTransect:0} {(measured.DetectionsPerTransect == 1 ? "detection" : "detections")} each and counts {measured.Dispersion:0} times as variable as chance, the nearest to this one that was tried, such an interval held the truth in {100 * measured.Coverage:0} % of cases, and the effort assured at 0.8 was enough in {100 * measured.Assured:0} %."),
-                "Study of simulated pilots, see docs/methods/effort.md");
+            yield return new Advice(Reliability(measured), "Study of simulated pilots, see docs/methods/effort.md");
         }
     }
 
@@ -139,6 +136,15 @@ internal static class EffortAdvice
                     Replicates);
             }
         }
+    }
+
+    private static string Reliability(MeasuredReliability measured)
+    {
+        var each = FormattableString.Invariant($"{measured.DetectionsPerTransect:0} detection{(measured.DetectionsPerTransect == 1 ? "" : "s")} on each");
+        var spread = measured.Dispersion == 1 ? "as variable as chance" : FormattableString.Invariant($"{measured.Dispersion:0} times as variable as chance");
+        return FormattableString.Invariant($"Of simulated pilots of {measured.Transects} transects with {each} and counts {spread}, ")
+            + FormattableString.Invariant($"the nearest to this one that were tried, {100 * measured.Coverage:0} % gave an interval that held the truth, ")
+            + FormattableString.Invariant($"and {100 * measured.Assured:0} % an effort assured at 0.8 that was enough.");
     }
 
     private static string Figure(double value)

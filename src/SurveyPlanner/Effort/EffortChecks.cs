@@ -6,12 +6,15 @@ namespace SurveyPlanner.Effort;
 /// <summary>Finds what is wrong with the precision asked for and the figures given, before anything is computed.</summary>
 internal static class EffortChecks
 {
+    /// <summary>No survey of wild animals comes near this.</summary>
+    private const double SmallestTarget = 0.001;
+
     public static IEnumerable<Problem> Problems(EffortDesign design, PilotTable? pilot, IReadOnlyList<EffortStratum> strata)
     {
-        if (design.TargetCv is { } target && !(target > 0 && target <= 1))
+        if (design.TargetCv is { } target && !(target >= SmallestTarget && target <= 1))
         {
             yield return new Problem(
-                $"The target coefficient of variation is {Text(target)}; give a fraction above 0 and at most 1, such as 0.2"
+                $"The target coefficient of variation is {Text(target)}; give a fraction from {Text(SmallestTarget)} to 1, such as 0.2"
                     + (target is > 1 and <= 100 ? $" ({Text(target)} % is {Text(target / 100)})." : "."),
                 Key: "precision.target_cv");
         }

@@ -27,8 +27,14 @@ public sealed record EffortUncertainty(
             EffortDelta.Factors(basis, draws.Refits, model),
             assurance is { } share ? Quantile(share) : null,
             factors.Length,
-            basis.GivenB is null ? MeasuredReliability.Nearest(basis) : null);
+            basis.GivenB is null ? NearestMeasured(basis, model) : null);
 
         double Quantile(double probability) => factors[Math.Clamp((int)Math.Round((probability * factors.Length) - 0.5), 0, factors.Length - 1)];
+    }
+
+    private static MeasuredReliability? NearestMeasured(EffortBasis basis, EffortModel model)
+    {
+        var (transects, count) = (basis.Sources.Sum(source => source.Transects), basis.Sources.Sum(source => source.Count ?? 0));
+        return count == 0 ? null : MeasuredReliability.Nearest(transects, (double)count / transects, model.UnitRateCv2 * model.DetectionsPerEffort);
     }
 }

@@ -13,7 +13,7 @@ internal sealed record RateBasis(
 {
     /// <summary>One rate for all strata, with b as its dispersion.</summary>
     public static RateBasis Given(double rate, double b, int strata)
-        => new([new RateSource(rate, b, null, null)], [.. Enumerable.Repeat(0, strata)], [.. Enumerable.Repeat<EncounterRate?>(null, strata)], []);
+        => new([new RateSource(rate, b, null, null, 0)], [.. Enumerable.Repeat(0, strata)], [.. Enumerable.Repeat<EncounterRate?>(null, strata)], []);
 
     /// <summary>Each stratum's own rate where the pilot has one, otherwise the region's. A given b is the dispersion of all of them.</summary>
     public static RateBasis Of(PilotFigures figures, IReadOnlyList<EffortStratum> surveyed, double? givenB)
@@ -51,7 +51,7 @@ internal sealed record RateBasis(
 
         if (givenB is { } b)
         {
-            return new RateSource(used.Rate, b, null, used.Count);
+            return new RateSource(used.Rate, b, null, used.Count, used.Transects);
         }
 
         if (used.Variance is null || (own is null && figures.Strata.Length > 1))
@@ -64,7 +64,7 @@ internal sealed record RateBasis(
             var known = figures.Strata.Where(stratum => stratum.EncounterRate.Dispersion is not null);
             var dispersion = figures.Pooled.Dispersion!.Value;
             return new RateSource(
-                used.Rate, dispersion > 0 ? dispersion : 1, known.Sum(stratum => stratum.EncounterRate.Transects - 1), used.Count);
+                used.Rate, dispersion > 0 ? dispersion : 1, known.Sum(stratum => stratum.EncounterRate.Transects - 1), used.Count, used.Transects);
         }
 
         if (used.Variance == 0)

@@ -8,7 +8,8 @@ namespace SurveyPlanner.Effort;
 /// <param name="Dispersion">Variance-to-mean ratio of counts under the variance estimator in use.</param>
 /// <param name="DegreesOfFreedom">How well the dispersion is known, as those of a chi-square; null when it was given for certain.</param>
 /// <param name="Count">Detections behind the rate; null when it was given for certain.</param>
-internal sealed record RateSource(double Rate, double Dispersion, double? DegreesOfFreedom, int? Count)
+/// <param name="Transects">Transects behind the rate; 0 when it was given for certain.</param>
+internal sealed record RateSource(double Rate, double Dispersion, double? DegreesOfFreedom, int? Count, int Transects)
 {
     /// <summary>From transects with a variance. A variance of 0 is replaced by that of Poisson counts.</summary>
     public static RateSource Of(EncounterRate rate)
@@ -16,7 +17,8 @@ internal sealed record RateSource(double Rate, double Dispersion, double? Degree
             rate.Rate,
             rate.Variance > 0 ? rate.Variance.Value * rate.Effort / rate.Rate : 1,
             rate.Estimator.ChiSquareDegreesOfFreedom(rate.Transects),
-            rate.Count);
+            rate.Count,
+            rate.Transects);
 
     /// <summary>
     /// Degrees of freedom of the chi-square that the estimated dispersion follows nearly, given the rate. Counts more variable than chance have

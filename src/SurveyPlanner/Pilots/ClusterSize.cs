@@ -28,6 +28,11 @@ public sealed record ClusterSize(double Mean, double StandardDeviation, int? Det
         var squares = detections.Sum(detection => Math.Pow(detection.Size - mean, 2));
         var variance = squares / (detections.Length - 1);
 
+        if (variance == 0)
+        {
+            return new ClusterSize(mean, 0, detections.Length);
+        }
+
         // What each detection moves ln(variance / mean²) by, its influence.
         var influences = detections.Sum(detection => Math.Pow(
             (Math.Pow(detection.Size - mean, 2) / variance) - 1 - (2 * (detection.Size - mean) / mean), 2));

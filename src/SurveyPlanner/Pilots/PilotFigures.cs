@@ -36,18 +36,11 @@ public sealed record PilotFigures(
     /// <param name="pilot">A table without problems (see <see cref="PilotChecks"/>).</param>
     /// <param name="analysis">How.</param>
     /// <param name="areasKm2">Area by name of each stratum that is surveyed the way the pilot was, the weights of the pooled rate. At least one is in the pilot, if that names any.</param>
-    /// <exception cref="InputException">No detection is left within the truncation distance.</exception>
+    /// <exception cref="InputException">No detection is left within the truncation distance, or in the strata with a weight.</exception>
     public static PilotFigures Of(PilotTable pilot, PilotAnalysis analysis, IReadOnlyDictionary<string, double> areasKm2)
     {
         var truncationMetres = analysis.TruncationMetres;
         var within = pilot.Within(truncationMetres);
-        if (within.Transects.All(transect => transect.Count == 0))
-        {
-            throw new InputException(new Problem(
-                FormattableString.Invariant($"All {pilot.Detections.Length} detections of the pilot lie beyond the truncation distance of {truncationMetres:0.###} m; are the units right?"),
-                pilot.DetectionsSource ?? pilot.Source));
-        }
-
         var strata = within.Transects
             .GroupBy(transect => transect.Stratum)
             .Select(group => new StratumEncounterRate(
@@ -57,6 +50,11 @@ public sealed record PilotFigures(
             .ToImmutableArray();
         // A pilot that names no strata is one sample of the whole; strata surveyed another way have no weight.
         var weighted = strata.Where(stratum => stratum.Stratum.Length == 0 || areasKm2.ContainsKey(stratum.Stratum)).ToList();
+        if (weighted.All(stratum => stratum.EncounterRate.Count == 0))
+        {
+            throw new InputException(NothingLeft(pilot, truncationMetres));
+        }
+
         var sampledArea = weighted.Sum(stratum => areasKm2.GetValueOrDefault(stratum.Stratum, 1));
         return new PilotFigures(
             pilot.IsPoints,
@@ -67,6 +65,13 @@ public sealed record PilotFigures(
             ClusterSize.Of(within.Detections),
             Fits(within, analysis, within.Transects.Select(transect => transect.Id)));
     }
+
+    private static Problem NothingLeft(PilotTable pilot, double truncationMetres)
+        => pilot.Detections.IsEmpty || pilot.Detections.Any(detection => detection.DistanceMetres <= truncationMetres)
+            ? new Problem("The pilot has no detection in any stratum that is surveyed the way it was; give a pilot with detections there.", pilot.Source)
+            : new Problem(
+                FormattableString.Invariant($"All {pilot.Detections.Length} detections of the pilot lie beyond the truncation distance of {truncationMetres:0.###} m; are the units right?"),
+                pilot.DetectionsSource ?? pilot.Source);
 
     private static DetectionFits? Fits(PilotTable within, PilotAnalysis analysis, IEnumerable<string> transects)
     {

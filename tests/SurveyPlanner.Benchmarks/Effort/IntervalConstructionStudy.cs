@@ -22,7 +22,7 @@ internal static class IntervalConstructionStudy
     {
         public double LogEffort => Math.Log((Dispersion + DetectionPart) * Transects / Count);
 
-        public RateSource Source => new((double)Count / Transects, Dispersion, Transects - 1, Count);
+        public RateSource Source => new((double)Count / Transects, Dispersion, Transects - 1, Count, Transects);
 
         /// <summary>Standard error of the logarithm by the delta method, the same variances as <see cref="EffortDelta"/> takes.</summary>
         public double LogError

@@ -1,4 +1,6 @@
 using System.Collections.Immutable;
+using System.Text.Json;
+using CsCheck;
 using SurveyPlanner.Effort;
 using SurveyPlanner.Pilots;
 
@@ -96,11 +98,11 @@ public class EffortPlanningTests
     }
 
     [Theory]
-    [InlineData(0, "above 0")]
-    [InlineData(-0.1, "above 0")]
+    [InlineData(0, "from 0.001 to 1")]
+    [InlineData(-0.1, "from 0.001 to 1")]
     [InlineData(15, "15 % is 0.15")]
-    [InlineData(150, "at most 1")]
-    [InlineData(double.NaN, "above 0")]
+    [InlineData(150, "from 0.001 to 1")]
+    [InlineData(double.NaN, "from 0.001 to 1")]
     public void Impossible_targets_are_refused(double target, string says)
         => Assert.Contains(says, Refused(Target with { TargetCv = target, GivenEncounterRate = 1 }).Single().Message, StringComparison.Ordinal);
 
@@ -131,6 +133,41 @@ public class EffortPlanningTests
             () => EffortPlanning.For(Target, Pilot([1, 2]), [Whole with { IsPoints = true }], Seed)).Problems;
         Assert.Contains("give a pilot of points", Assert.Single(problems).Message, StringComparison.Ordinal);
     }
+
+    /// <summary>
+    /// Law: whatever the pilot, either a problem is told or every figure is finite (the serializer refuses NaN and infinity).
+    /// </summary>
+    [Fact]
+    public void No_figure_is_ever_NaN_or_infinite()
+        => Gen.Select(
+            Gen.Select(Gen.OneOf(Gen.Const("a"), Gen.Const("b"), Gen.Const("c")), Gen.Int[0, 4], Gen.Int[0, 130], Gen.Int[1, 3]).Array[1, 7],
+            Gen.Bool,
+            Gen.Bool,
+            Gen.Enum<Allocation>(),
+            Gen.Int[0, 2].Select(choice => choice == 0 ? null : (double?)(choice == 1 ? 0.05 : 0.4))).Sample(
+            (rows, withDistances, byStratum, allocation, givenCv) =>
+            {
+                var transects = rows.Select((row, i) => new PilotTransect(row.Item1, $"{i}", row.Item4, row.Item2)).ToImmutableArray();
+                var detections = transects.SelectMany((transect, i) => Enumerable.Range(0, transect.Count)
+                    .Select(k => new PilotDetection(transect.Id, (rows[i].Item3 + (7 * k)) % 130, 1 + ((i + k) % 3))));
+                var design = new EffortDesign(
+                    0.2, 0.8, null, null, null, allocation, DetectionDesign.None with { GivenCv = givenCv, ByStratum = byStratum, Models = byStratum ? [DetectionModel.HalfNormal] : [] }, null,
+                    ImmutableSortedDictionary<string, double>.Empty);
+                try
+                {
+                    var strata = new[] { "a", "b", "d" }.Select((name, i) => Whole with { Name = name, AreaKm2 = 10 + (50 * i) });
+                    var plan = EffortPlanning.For(
+                        design, new PilotTable(false, transects, withDistances ? [.. detections] : []), [.. strata, Whole with { Name = "c", IsPoints = true }], Seed);
+                    JsonSerializer.Serialize(plan);
+                    return true;
+                }
+                catch (InputException refused)
+                {
+                    return refused.Problems.Count > 0;
+                }
+            },
+            seed: "0000NoNaN003",
+            iter: 40);
 
     private static IReadOnlyList<Problem> Refused(EffortDesign design)
         => Assert.Throws<InputException>(() => EffortPlanning.For(design, null, [Whole], Seed)).Problems;

@@ -29,6 +29,29 @@ public class EffortUncertaintyTests
         Assert.Equal(0.8, Share(required => required.AssuredEffort >= truth.RequiredKm), 4 * Math.Sqrt(0.8 * 0.2 / results.Count));
     }
 
+    /// <summary>
+    /// The formula end to end: 400 surveys of the length that the truth asks for really have the target cv, within 4 standard errors of a
+    /// cv (1 / sqrt(2 n)) and 5 % for its small-sample excess. Seed 45.
+    /// </summary>
+    [Theory]
+    [InlineData(1)]
+    [InlineData(2.5)]
+    public void Surveys_of_the_required_length_have_the_target_cv(double dispersion)
+    {
+        const int surveys = 400;
+        var truth = new PilotTruth(0, 3, dispersion);
+        var whole = truth with { Transects = (int)Math.Round(truth.RequiredKm / 2) };
+        var densities = Enumerable.Range(0, surveys).Select(i =>
+        {
+            var table = whole.Draw(45, 1, (uint)i)!;
+            var fit = DetectionFitting.Fit([.. table.Detections.Select(detection => detection.DistanceMetres)], 100, false, [DetectionModel.HalfNormal]);
+            return table.Detections.Length / fit.Chosen!.EffectiveMetres!.Value;
+        }).ToList();
+        var mean = densities.Average();
+        var cv = Math.Sqrt(densities.Sum(density => (density - mean) * (density - mean)) / (surveys - 1)) / mean;
+        Assert.Equal(1, cv / 0.2, (4 / Math.Sqrt(2 * surveys)) + 0.05);
+    }
+
     [Fact]
     public void The_same_seed_gives_the_same_figures_and_another_seed_nearly_the_same()
     {
@@ -42,6 +65,18 @@ public class EffortUncertaintyTests
         Assert.Equal(1, other.AssuredFactor!.Value / a.AssuredFactor!.Value, 0.1);
 
         EffortUncertainty Of(ulong seed) => truth.Plan(pilot, 0.8, seed).Uncertainty!;
+    }
+
+    /// <summary>The measured figures shown are those of the nearest simulated pilots.</summary>
+    [Theory]
+    [InlineData(9, 2.5, 0.7, 10, 3, 1)]
+    [InlineData(60, 30, 9, 40, 10, 4)]
+    [InlineData(3, 0.5, 1.6, 5, 1, 2)]
+    public void The_nearest_measured_figures_stand_beside_the_interval(int lines, double perLine, double dispersion, int asLines, double asPerLine, double asDispersion)
+    {
+        var row = MeasuredReliability.Nearest(lines, perLine, dispersion);
+        Assert.Equal((asLines, asPerLine, asDispersion), (row.Transects, row.DetectionsPerTransect, row.Dispersion));
+        Assert.Equal(36, MeasuredReliability.Table.Distinct().Count());
     }
 
     [Fact]
