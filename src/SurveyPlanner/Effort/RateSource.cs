@@ -33,7 +33,7 @@ internal sealed record RateSource(double Rate, double Dispersion, double? Degree
     /// <summary>
     /// A rate and dispersion from the confidence distribution that the pilot leaves: c' = c df' / χ²(df'), and the rate as if n / c events
     /// of a Poisson process had been seen, gamma with shape n / c + 1/2. The two are drawn apart: what ties them under negative binomial
-    /// counts is already in df'. Drawing the rate with c' instead of c covers a little more than it should (docs/methods/effort.md).
+    /// counts is already in df'. Drawing the rate with c' instead of c assures a little less with few, overdispersed counts (docs/methods/effort.md).
     /// </summary>
     public (double Rate, double Dispersion) Draw(ref PhiloxStream random)
     {
