@@ -23,6 +23,21 @@ internal sealed class EdgeDensifier(EqualAreaProjection projection, double toler
         }
     }
 
+    /// <summary>Sum, over the edges of a closed ring, of the square root of how far the image of each strays: what its pieces are counted from.</summary>
+    public double RootOfStray(IReadOnlyList<LonLat> ring)
+    {
+        var total = 0.0;
+        var from = projection.Project(ring[0]);
+        for (var i = 1; i < ring.Count; i++)
+        {
+            var to = projection.Project(ring[i]);
+            total += Math.Sqrt(Stray(ring[i - 1], ring[i], from, to));
+            from = to;
+        }
+
+        return total;
+    }
+
     private void AddInside(PlaneShapeBuilder builder, LonLat from, LonLat to, PlanePoint fromPoint, PlanePoint toPoint)
     {
         var forward = IsFirst(from, to);
@@ -62,11 +77,14 @@ internal sealed class EdgeDensifier(EqualAreaProjection projection, double toler
 
     /// <summary>A bent edge cut into n strays by 1/n² of what the whole one does.</summary>
     private int Pieces(LonLat start, LonLat end, PlanePoint startPoint, PlanePoint endPoint)
+        => Math.Max(1, (int)Math.Ceiling(Math.Sqrt(Stray(start, end, startPoint, endPoint) / toleranceMetres)));
+
+    private double Stray(LonLat start, LonLat end, PlanePoint startPoint, PlanePoint endPoint)
     {
         var middle = projection.Project(Between(start, end, 0.5));
         var dx = middle.X - ((startPoint.X + endPoint.X) / 2);
         var dy = middle.Y - ((startPoint.Y + endPoint.Y) / 2);
-        return Math.Max(1, (int)Math.Ceiling(Math.Sqrt(Math.Sqrt((dx * dx) + (dy * dy)) / toleranceMetres)));
+        return Math.Sqrt((dx * dx) + (dy * dy));
     }
 
     private static LonLat Between(LonLat a, LonLat b, double share)

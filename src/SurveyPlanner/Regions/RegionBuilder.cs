@@ -24,6 +24,10 @@ public static class RegionBuilder
     // inside the promised 1e-6 even if all bend the same way.
     private const double AreaTolerance = 1e-6;
 
+    // Small outlines of long edges gain most, and cost nothing: their areas then hold to nine digits.
+    private const double FurtherVertices = 5000;
+    private const double FinestMetres = 1e-5;
+
     // Two outlines that share a border may cross it by rounding; a real overlap is wider than this.
     private const double BorderToleranceMetres = 0.01;
 
@@ -65,17 +69,26 @@ public static class RegionBuilder
             notices.ToImmutable());
     }
 
+    /// <summary>
+    /// As fine as a fair number of further vertices allows (three times as many as the outline has, and some thousands), and always fine enough
+    /// for the promised accuracy.
+    /// </summary>
     private static double Tolerance(IReadOnlyList<StratumGroup> groups, EqualAreaProjection projection)
     {
         var coarse = new EdgeDensifier(projection, double.PositiveInfinity);
-        var narrowest = double.PositiveInfinity;
+        var (narrowest, vertices, roots) = (double.PositiveInfinity, 0, 0.0);
         foreach (var feature in groups.SelectMany(group => group.Features))
         {
             var shape = Shape([feature], coarse);
             narrowest = Math.Min(narrowest, shape.AreaSquareMetres / Perimeter(shape));
+            vertices += shape.VertexCount;
+            roots += feature.Polygons.Sum(polygon => coarse.RootOfStray(polygon.Shell) + polygon.Holes.Sum(hole => coarse.RootOfStray(hole)));
         }
 
-        return Math.Clamp(AreaTolerance * narrowest, 1e-3, 0.25);
+        // An edge that strays by s is cut into the square root of s / tolerance pieces.
+        var affordable = Math.Pow(roots / ((2.0 * vertices) + FurtherVertices), 2);
+        var promised = Math.Clamp(AreaTolerance * narrowest, 1e-3, 0.25);
+        return Math.Clamp(affordable, FinestMetres, promised);
     }
 
     private static double Perimeter(PlaneShape shape)
