@@ -11,20 +11,16 @@ internal sealed class CellGrid
     private readonly SlotTable[] _rowPlaces;
     private readonly int[] _placeSlots;
 
-    /// <param name="sizeMetres">Side of an uncut cell, metres; 0 where places stand for no cells.</param>
     /// <param name="rowY">y of each row, ascending.</param>
     /// <param name="rowStarts">Index of the first place of each row, and the number of places as last entry.</param>
     /// <param name="x">x of each place, ascending within its row.</param>
-    /// <param name="areas">Area of each cell inside the stratum, square metres; empty where places stand for no cells.</param>
-    /// <param name="squareCentres">Centre of each cell's uncut square, in the turned frame; empty likewise.</param>
-    public CellGrid(double sizeMetres, double[] rowY, int[] rowStarts, double[] x, double[] areas, (double X, double Y)[] squareCentres)
+    /// <param name="cells">The cells that the places stand for; null where they stand for none.</param>
+    public CellGrid(double[] rowY, int[] rowStarts, double[] x, GridCells? cells)
     {
-        SizeMetres = sizeMetres;
         RowY = rowY;
         RowStarts = rowStarts;
         X = x;
-        Areas = areas;
-        SquareCentres = squareCentres;
+        Cells = cells;
         _rowSlots = new int[rowY.Length];
         _rows = new SlotTable(rowY, _rowSlots);
         _placeSlots = new int[x.Length];
@@ -36,8 +32,8 @@ internal sealed class CellGrid
         }
     }
 
-    /// <summary>Side of an uncut cell, metres.</summary>
-    public double SizeMetres { get; }
+    /// <summary>The cells that the places stand for, with the same index; null where they stand for none.</summary>
+    public GridCells? Cells { get; }
 
     /// <summary>y of each row, ascending.</summary>
     public double[] RowY { get; }
@@ -47,12 +43,6 @@ internal sealed class CellGrid
 
     /// <summary>x of each place, ascending within its row.</summary>
     public double[] X { get; }
-
-    /// <summary>Area of each cell inside the stratum, square metres.</summary>
-    public double[] Areas { get; }
-
-    /// <summary>Centre of each cell's uncut square, in the turned frame.</summary>
-    public (double X, double Y)[] SquareCentres { get; }
 
     public int Count => X.Length;
 
@@ -80,7 +70,7 @@ internal sealed class CellGrid
         }
 
         rowStarts.Add(sorted.Length);
-        return new CellGrid(0, [.. rowY], [.. rowStarts], Array.ConvertAll(sorted, entry => entry.X), [], []);
+        return new CellGrid([.. rowY], [.. rowStarts], Array.ConvertAll(sorted, entry => entry.X), cells: null);
     }
 
     /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
@@ -95,4 +85,19 @@ internal sealed class CellGrid
         ref readonly var places = ref _rowPlaces[row];
         return (start + places.FirstFrom(x, slots, low), start + places.FirstBeyond(x, slots, high));
     }
+}
+
+/// <summary>Square cells in columns and rows of the turned frame, cut at a stratum's boundary.</summary>
+/// <param name="SizeMetres">Side of an uncut cell, metres.</param>
+/// <param name="OriginX">x of the left side of column 0.</param>
+/// <param name="OriginY">y of the lower side of row 0.</param>
+/// <param name="Areas">Area of each cell inside the stratum, square metres.</param>
+/// <param name="Columns">Column of each cell.</param>
+internal sealed record GridCells(double SizeMetres, double OriginX, double OriginY, double[] Areas, int[] Columns)
+{
+    /// <summary>x of the middle of a column.</summary>
+    public double ColumnX(int column) => OriginX + ((column + 0.5) * SizeMetres);
+
+    /// <summary>Middle of the row of cells that a height lies in.</summary>
+    public double RowMiddle(double y) => OriginY + ((Math.Floor((y - OriginY) / SizeMetres) + 0.5) * SizeMetres);
 }

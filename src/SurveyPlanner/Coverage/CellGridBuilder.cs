@@ -1,4 +1,3 @@
-using System.Runtime.InteropServices;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Coverage;
@@ -27,9 +26,16 @@ internal sealed class CellGridBuilder
 
     private readonly List<double> _rowY = [];
     private readonly List<int> _rowStarts = [];
-    private readonly List<double> _x = [];
-    private readonly List<double> _cellAreas = [];
-    private readonly List<(double X, double Y)> _squares = [];
+
+    // Grown by a little where the first estimate of their number falls short: memory for a million cells is counted.
+    private double[] _x;
+    private double[] _cellAreas;
+    private int[] _cellColumns;
+    private int _count;
+
+    // The columns that edges of the current row touch: beyond them it holds nothing.
+    private int _lowColumn = int.MaxValue;
+    private int _highColumn = -1;
     private double[] _crossings = new double[64];
     private double _pendingArea;
 
@@ -47,6 +53,8 @@ internal sealed class CellGridBuilder
         _heights = new double[_columns + 1];
         _placeX = new double[_columns];
         _placeLine = new int[_columns];
+        var estimate = (int)(1.05 * shape.AreaSquareMetres / (size * size)) + 64;
+        (_x, _cellAreas, _cellColumns) = (new double[estimate], new double[estimate], new int[estimate]);
     }
 
     private int Rows { get; }
@@ -68,8 +76,11 @@ internal sealed class CellGridBuilder
     {
         var bottom = _originY + (row * _size);
         MeasureAreas(bottom);
-        FindPlaces(bottom);
-        Emit(bottom);
+        if (_lowColumn <= _highColumn)
+        {
+            FindPlaces(bottom);
+            Emit(bottom);
+        }
     }
 
     /// <summary>
@@ -78,8 +89,14 @@ internal sealed class CellGridBuilder
     /// </summary>
     private void MeasureAreas(double bottom)
     {
-        Array.Clear(_areas);
-        Array.Clear(_heights);
+        if (_lowColumn <= _highColumn)
+        {
+            // Only what the row before touched: a row may be wide and nearly empty.
+            Array.Clear(_areas, _lowColumn, _highColumn - _lowColumn + 1);
+            Array.Clear(_heights, _lowColumn, _highColumn - _lowColumn + 1);
+        }
+
+        (_lowColumn, _highColumn) = (int.MaxValue, -1);
         var top = bottom + _size;
         foreach (ref readonly var edge in _shape.EdgesBetween(bottom, top))
         {
@@ -92,7 +109,7 @@ internal sealed class CellGridBuilder
 
         // An edge's height counts in full for every cell to its left.
         var height = 0.0;
-        for (var column = _columns - 1; column >= 0; column--)
+        for (var column = _highColumn; column >= _lowColumn; column--)
         {
             _areas[column] += height * _size;
             height += _heights[column];
@@ -118,6 +135,7 @@ internal sealed class CellGridBuilder
             var height = sign * (nextY - y);
             _areas[column] += height * (((x + nextX) / 2) - (_originX + (column * _size)));
             _heights[column] += height;
+            (_lowColumn, _highColumn) = (Math.Min(_lowColumn, column), Math.Max(_highColumn, column));
             (x, y) = (nextX, nextY);
             if (column == lastColumn)
             {
@@ -130,11 +148,11 @@ internal sealed class CellGridBuilder
 
     private void FindPlaces(double bottom)
     {
-        Array.Fill(_placeLine, -1);
+        Array.Fill(_placeLine, -1, _lowColumn, _highColumn - _lowColumn + 1);
         for (var line = 0; line < LineShares.Length; line++)
         {
             var missing = false;
-            for (var column = 0; column < _columns && !missing; column++)
+            for (var column = _lowColumn; column <= _highColumn && !missing; column++)
             {
                 missing = _placeLine[column] < 0 && _areas[column] > NoArea;
             }
@@ -159,16 +177,15 @@ internal sealed class CellGridBuilder
         for (var pair = 0; pair < pairs; pair++)
         {
             var (low, high) = (_crossings[2 * pair], _crossings[(2 * pair) + 1]);
-            for (var column = Column(low); column <= Column(high); column++)
+            for (var column = Math.Max(Column(low), _lowColumn); column <= Math.Min(Column(high), _highColumn); column++)
             {
                 if ((_placeLine[column] >= 0 && _placeLine[column] != line) || _areas[column] <= NoArea)
                 {
                     continue;
                 }
 
-                var left = _originX + (column * _size);
-                var (from, to) = (Math.Max(low, left), Math.Min(high, left + _size));
-                var centre = left + (_size / 2);
+                var centre = _originX + ((column + 0.5) * _size);
+                var (from, to) = (Math.Max(low, centre - (_size / 2)), Math.Min(high, centre + (_size / 2)));
 
                 // On the boundary itself a place is neither in nor out: stay a millionth of a cell away from it.
                 var holdsCentre = from < centre - (1e-6 * _size) && to > centre + (1e-6 * _size);
@@ -193,7 +210,7 @@ internal sealed class CellGridBuilder
         foreach (var line in LinesAscending)
         {
             var started = false;
-            for (var column = 0; column < _columns; column++)
+            for (var column = _lowColumn; column <= _highColumn; column++)
             {
                 if (_placeLine[column] != line)
                 {
@@ -203,33 +220,50 @@ internal sealed class CellGridBuilder
                 if (!started)
                 {
                     _rowY.Add(bottom + (LineShares[line] * _size));
-                    _rowStarts.Add(_x.Count);
+                    _rowStarts.Add(_count);
                     started = true;
                 }
 
-                _x.Add(_placeX[column]);
-                _cellAreas.Add(_areas[column]);
-                _squares.Add((_originX + ((column + 0.5) * _size), bottom + (_size / 2)));
+                Add(column);
             }
         }
 
-        for (var column = 0; column < _columns; column++)
+        for (var column = _lowColumn; column <= _highColumn; column++)
         {
             _pendingArea += _placeLine[column] < 0 ? _areas[column] : 0;
         }
 
-        if (_cellAreas.Count > 0)
+        if (_count > 0)
         {
-            CollectionsMarshal.AsSpan(_cellAreas)[^1] += _pendingArea;
+            _cellAreas[_count - 1] += _pendingArea;
             _pendingArea = 0;
         }
     }
 
+    private void Add(int column)
+    {
+        if (_count == _x.Length)
+        {
+            Resize(_count + (_count / 8) + 64);
+        }
+
+        (_x[_count], _cellAreas[_count], _cellColumns[_count]) = (_placeX[column], _areas[column], column);
+        _count++;
+    }
+
     private static readonly int[] LinesAscending = [.. Enumerable.Range(0, LineShares.Length).OrderBy(line => LineShares[line])];
+
+    private void Resize(int length)
+    {
+        Array.Resize(ref _x, length);
+        Array.Resize(ref _cellAreas, length);
+        Array.Resize(ref _cellColumns, length);
+    }
 
     private CellGrid Finish()
     {
-        _rowStarts.Add(_x.Count);
-        return new CellGrid(_size, [.. _rowY], [.. _rowStarts], [.. _x], [.. _cellAreas], [.. _squares]);
+        _rowStarts.Add(_count);
+        Resize(_count);
+        return new CellGrid([.. _rowY], [.. _rowStarts], _x, new GridCells(_size, _originX, _originY, _cellAreas, _cellColumns));
     }
 }

@@ -70,28 +70,35 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
 
     private ImmutableArray<TransectCoverage> Along(LayoutGenerator generator, Layout layout, uint stratum)
     {
-        var places = CoverageAlong.Places(generator.Stratum, layout.Transects);
+        var places = CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.MostExactPlaces);
         var grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out var order);
-        var exact = ExactCoverage.At(generator, grid, stop);
-        var counts = exact is null
-            ? CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop)
-            : null;
-        var coverage = new double[places.Count];
-        for (var i = 0; i < coverage.Length; i++)
+        var coverage = ExactCoverage.At(generator, grid, stop);
+        var isExact = coverage is not null;
+        if (coverage is null)
         {
-            coverage[order[i]] = exact?[i] ?? counts!.Probability(i);
+            places = CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.MostSimulatedPlaces);
+            grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out order);
+            var counts = CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop);
+            coverage = [.. Enumerable.Range(0, grid.Count).Select(counts.Probability)];
         }
 
-        return CoverageAlong.Means(layout.Transects, places, coverage, exact is not null);
+        var inOrder = new double[places.Count];
+        for (var i = 0; i < inOrder.Length; i++)
+        {
+            inOrder[order[i]] = coverage[i];
+        }
+
+        return CoverageAlong.Means(layout.Transects, places, inOrder, isExact);
     }
 
-    private static StratumCoverage Judged(StratumCoverage coverage, LayoutGenerator generator, CellGrid grid)
+    private StratumCoverage Judged(StratumCoverage coverage, LayoutGenerator generator, CellGrid grid)
     {
         var (distances, along) = (new double[grid.Count], new double[grid.Count]);
-        var classWidth = EdgeProfile.ClassWidth(generator.Stratum.HalfWidthMetres, grid.SizeMetres);
+        var classWidth = EdgeProfile.ClassWidth(generator.Stratum.HalfWidthMetres, grid.Cells!.SizeMetres);
         var tiles = generator.Stratum.Region.Tiles;
         for (var row = 0; row < grid.RowY.Length; row++)
         {
+            stop.ThrowIfCancellationRequested();
             for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
             {
                 along[i] = grid.RowY[row];
@@ -106,20 +113,21 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
         };
     }
 
-    private static ImmutableArray<CoverageCell> Cells(
+    private ImmutableArray<CoverageCell> Cells(
         TurnedFrame frame, EqualAreaProjection projection, CellGrid grid, double[]? exact, CoverageCounts counts)
     {
-        var cells = ImmutableArray.CreateBuilder<CoverageCell>(grid.Count);
+        var (cells, squares) = (ImmutableArray.CreateBuilder<CoverageCell>(grid.Count), grid.Cells!);
         for (var row = 0; row < grid.RowY.Length; row++)
         {
+            stop.ThrowIfCancellationRequested();
             for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
             {
                 var place = frame.ToPlane(grid.X[i], grid.RowY[row]);
                 cells.Add(new CoverageCell(
                     place,
                     projection.Unproject(place),
-                    frame.ToPlane(grid.SquareCentres[i].X, grid.SquareCentres[i].Y),
-                    grid.Areas[i] / 1e6,
+                    frame.ToPlane(squares.ColumnX(squares.Columns[i]), squares.RowMiddle(grid.RowY[row])),
+                    squares.Areas[i] / 1e6,
                     exact?[i],
                     counts.Probability(i),
                     counts.ExpectedTimes(i),

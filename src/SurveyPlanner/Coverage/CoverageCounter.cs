@@ -13,9 +13,8 @@ namespace SurveyPlanner.Coverage;
 /// </remarks>
 internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 {
-    private readonly int[] _draws = new int[grid.Count + 1];
-    private readonly int[] _times = new int[grid.Count + 1];
-    private readonly int[] _again = new int[grid.Count + 1];
+    // One more than there are places: a run may end behind the last.
+    private readonly Ends[] _ends = new Ends[grid.Count + 1];
     private RowRuns _now = new(grid.RowY.Length);
     private RowRuns _before = new(grid.RowY.Length);
 
@@ -43,24 +42,23 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     /// <summary>The counts of several counters together.</summary>
     public static CoverageCounts Sum(IReadOnlyList<CoverageCounter> counters, int replicates)
     {
-        int[] Added(Func<CoverageCounter, int[]> ends)
+        var places = counters[0]._ends.Length - 1;
+        var counts = new CoverageCounts(replicates, new int[places], new int[places], new int[places]);
+        var sum = default(Ends);
+        for (var i = 0; i < places; i++)
         {
-            var total = ends(counters[0]);
-            foreach (var counter in counters.Skip(1))
+            foreach (var counter in counters)
             {
-                Add(total, ends(counter));
+                ref readonly var ends = ref counter._ends[i];
+                sum.Draws += ends.Draws;
+                sum.Times += ends.Times;
+                sum.Again += ends.Again;
             }
 
-            var running = 0;
-            for (var i = 0; i < total.Length; i++)
-            {
-                total[i] = running += total[i];
-            }
-
-            return total;
+            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Times, sum.Again);
         }
 
-        return new CoverageCounts(replicates, Added(one => one._draws), Added(one => one._times), Added(one => one._again));
+        return counts;
     }
 
     private void Cover(in Strip strip, bool onlyRemember)
@@ -83,7 +81,8 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
             _now.Add(row, first, end);
             if (!onlyRemember)
             {
-                CountRun(_times, first, end);
+                _ends[first].Times++;
+                _ends[end].Times--;
             }
         }
     }
@@ -94,14 +93,16 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         for (var run = _now.FirstOf(row); run != 0; run = _now[run].Next)
         {
             var (first, end) = (_now[run].First, _now[run].End);
-            CountRun(_draws, first, end);
+            _ends[first].Draws++;
+            _ends[end].Draws--;
             while (before != 0)
             {
                 ref readonly var earlier = ref _before[before];
                 var (from, to) = (Math.Max(first, earlier.First), Math.Min(end, earlier.End));
                 if (from < to)
                 {
-                    CountRun(_again, from, to);
+                    _ends[from].Again++;
+                    _ends[to].Again--;
                 }
 
                 // The earlier run may reach into the next one of this draw too.
@@ -115,17 +116,11 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         }
     }
 
-    private static void CountRun(int[] ends, int first, int end)
+    /// <summary>What changes from one place to the next; the three side by side, since they mostly change at the same places.</summary>
+    private struct Ends
     {
-        ends[first]++;
-        ends[end]--;
-    }
-
-    private static void Add(int[] into, int[] other)
-    {
-        for (var i = 0; i < into.Length; i++)
-        {
-            into[i] += other[i];
-        }
+        public int Draws;
+        public int Times;
+        public int Again;
     }
 }

@@ -10,16 +10,27 @@ internal sealed class DiskArea(FrameShape shape, double radius)
 {
     private readonly List<double> _angles = [];
 
-    /// <summary>Square metres that the disk round (x, y) shares with the shape.</summary>
+    // The number of the disk that each edge was last looked at for: an edge stands in several tiles.
+    private readonly int[] _lookedAt = new int[shape.Edges.Length];
+    private int _disk;
+
+    /// <summary>Square metres that the disk round (x, y), a place in the shape's bounding box, shares with the shape.</summary>
     public double At(double x, double y)
     {
-        _angles.Clear();
-        var twice = 0.0;
-        foreach (ref readonly var edge in shape.EdgesBetween(y - radius, y + radius))
+        if (shape.Tiles.Clearance(x, y) > radius)
         {
-            if (Math.Max(edge.LowX, edge.HighX) >= x - radius && Math.Min(edge.LowX, edge.HighX) <= x + radius)
+            return shape.Contains(x, y) ? Math.PI * radius * radius : 0;
+        }
+
+        _angles.Clear();
+        _disk++;
+        var twice = 0.0;
+        foreach (var number in shape.Tiles.In(x - radius, x + radius, y - radius, y + radius))
+        {
+            if (_lookedAt[number] != _disk)
             {
-                twice += EdgeInside(edge, x, y);
+                _lookedAt[number] = _disk;
+                twice += EdgeInside(shape.Edges[number], x, y);
             }
         }
 

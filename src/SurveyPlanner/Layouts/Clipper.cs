@@ -36,44 +36,12 @@ internal static class Clipper
             return;
         }
 
-        var count = SegmentCrossings(shape, fromX, fromY, dx / length, dy / length, length, output);
+        var segment = new Segment(fromX, fromY, dx / length, dy / length, length);
+        var isBeside = Math.Max(fromY, toY) < shape.MinY || Math.Min(fromY, toY) > shape.MaxY;
+        var count = isBeside ? 0 : output.SortCrossings(shape.Tiles.Crossings(segment, output));
         var cuts = output.Crossings.AsSpan(0, count);
-        cuts.Sort();
         var inside = IsInsideAtStart(shape, fromX, fromY, dx / length, dy / length, length, cuts);
         EmitSegment(cuts, inside, length, transect, (fromX, fromY, dx / length, dy / length), output);
-    }
-
-    /// <summary>Distances from the start at which the segment crosses the boundary, unsorted.</summary>
-    private static int SegmentCrossings(FrameShape shape, double x0, double y0, double ux, double uy, double length, PieceBuffer output)
-    {
-        var count = 0;
-        var endY = y0 + (uy * length);
-        foreach (ref readonly var edge in shape.EdgesBetween(Math.Min(y0, endY), Math.Max(y0, endY)))
-        {
-            // Height of the edge's ends over the infinite line; "on or below" is decided once a vertex, so crossings pair up.
-            var low = ((edge.LowY - y0) * ux) - ((edge.LowX - x0) * uy);
-            var high = ((edge.HighY - y0) * ux) - ((edge.HighX - x0) * uy);
-            if ((low <= 0) == (high <= 0))
-            {
-                continue;
-            }
-
-            var share = low / (low - high);
-            var x = edge.LowX + (share * (edge.HighX - edge.LowX));
-            var y = edge.LowY + (share * (edge.HighY - edge.LowY));
-            var along = ((x - x0) * ux) + ((y - y0) * uy);
-            if (along > 0 && along < length)
-            {
-                if (count == output.Crossings.Length)
-                {
-                    Array.Resize(ref output.Crossings, 2 * count);
-                }
-
-                output.Crossings[count++] = along;
-            }
-        }
-
-        return count;
     }
 
     /// <summary>

@@ -77,6 +77,45 @@ internal sealed class EdgeTiles
     public BoxTiles In(double lowX, double highX, double lowY, double highY)
         => new(this, Column(lowX), Column(highX), Row(lowY), Row(highY));
 
+    /// <summary>
+    /// Notes where a segment crosses edges: the distance from its start, and the edge, in no order and once for every tile that both run through.
+    /// Returns how many there are.
+    /// </summary>
+    public int Crossings(in Segment segment, PieceBuffer output)
+    {
+        var path = new TilePath(this, segment.Upwards);
+        var count = 0;
+        for (var row = path.FirstRow; row <= path.LastRow; row++)
+        {
+            var (column, last) = path.ColumnsIn(row);
+            while (column <= last)
+            {
+                var tile = (row * _columns) + column;
+                int empty = _tilesToEdge[tile];
+                if (empty == 0)
+                {
+                    CrossTile(tile, segment, ref count, output);
+                    empty = 1;
+                }
+
+                column += empty;
+            }
+        }
+
+        return count;
+    }
+
+    private void CrossTile(int tile, in Segment segment, ref int count, PieceBuffer output)
+    {
+        for (var i = _starts[tile]; i < _starts[tile + 1]; i++)
+        {
+            if (segment.Crosses(_edges[_indices[i]], out var along))
+            {
+                output.SetCrossing(count++, along, _indices[i]);
+            }
+        }
+    }
+
     private double Nearest(int tile, double x, double y, double nearest)
     {
         for (var i = _starts[tile]; i < _starts[tile + 1]; i++)
@@ -107,9 +146,10 @@ internal sealed class EdgeTiles
         var starts = new int[(_columns * _rows) + 1];
         foreach (ref readonly var edge in _edges.AsSpan())
         {
-            for (var row = Row(edge.LowY - (Margin * TileMetres)); row <= Row(edge.HighY + (Margin * TileMetres)); row++)
+            var path = new TilePath(this, edge);
+            for (var row = path.FirstRow; row <= path.LastRow; row++)
             {
-                var (from, to) = ColumnsIn(edge, row);
+                var (from, to) = path.ColumnsIn(row);
                 for (var column = from; column <= to; column++)
                 {
                     starts[(row * _columns) + column]++;
@@ -125,10 +165,10 @@ internal sealed class EdgeTiles
         var indices = new int[starts[^1]];
         for (var i = _edges.Length - 1; i >= 0; i--)
         {
-            ref readonly var edge = ref _edges[i];
-            for (var row = Row(edge.LowY - (Margin * TileMetres)); row <= Row(edge.HighY + (Margin * TileMetres)); row++)
+            var path = new TilePath(this, _edges[i]);
+            for (var row = path.FirstRow; row <= path.LastRow; row++)
             {
-                var (from, to) = ColumnsIn(edge, row);
+                var (from, to) = path.ColumnsIn(row);
                 for (var column = from; column <= to; column++)
                 {
                     indices[--starts[(row * _columns) + column]] = i;
@@ -137,17 +177,6 @@ internal sealed class EdgeTiles
         }
 
         return (starts, indices);
-    }
-
-    /// <summary>The columns that a line from low to high runs through in one row of tiles.</summary>
-    private (int From, int To) ColumnsIn(in FrameShape.Edge line, int row)
-    {
-        var margin = Margin * TileMetres;
-        var bottom = _originY + (row * TileMetres) - margin;
-        var top = bottom + TileMetres + (2 * margin);
-        var lowX = line.LowY >= bottom ? line.LowX : line.XAt(bottom);
-        var highX = line.HighY <= top ? line.HighX : line.XAt(top);
-        return (Column(Math.Min(lowX, highX) - margin), Column(Math.Max(lowX, highX) + margin));
     }
 
     /// <summary>
@@ -229,6 +258,36 @@ internal sealed class EdgeTiles
 
             Current = tiles._indices[_next++];
             return true;
+        }
+    }
+
+    /// <summary>The tiles that an edge, or any line from its lower end to its upper, comes within the margin of.</summary>
+    private readonly struct TilePath
+    {
+        private readonly EdgeTiles _tiles;
+        private readonly FrameShape.Edge _line;
+        private readonly double _slope;
+        private readonly double _margin;
+
+        public TilePath(EdgeTiles tiles, in FrameShape.Edge line)
+        {
+            (_tiles, _line, _margin) = (tiles, line, Margin * tiles.TileMetres);
+            _slope = (line.HighX - line.LowX) / (line.HighY - line.LowY);
+            (FirstRow, LastRow) = (tiles.Row(line.LowY - _margin), tiles.Row(line.HighY + _margin));
+        }
+
+        public int FirstRow { get; }
+
+        public int LastRow { get; }
+
+        public (int From, int To) ColumnsIn(int row)
+        {
+            // Only where the line goes on beyond the row is its x there asked for: a level line never divides by its height of nothing.
+            var bottom = _tiles._originY + (row * _tiles.TileMetres) - _margin;
+            var top = bottom + _tiles.TileMetres + (2 * _margin);
+            var lowX = _line.LowY >= bottom ? _line.LowX : _line.LowX + ((bottom - _line.LowY) * _slope);
+            var highX = _line.HighY <= top ? _line.HighX : _line.LowX + ((top - _line.LowY) * _slope);
+            return (_tiles.Column(Math.Min(lowX, highX) - _margin), _tiles.Column(Math.Max(lowX, highX) + _margin));
         }
     }
 }

@@ -34,7 +34,7 @@ internal sealed class FrameShape
     {
         var (x, y) = Turn(shape, frame, transposed);
         (MinX, MaxX, MinY, MaxY) = (x.Min(), x.Max(), y.Min(), y.Max());
-        _edges = Edges(shape, x, y, transposed);
+        _edges = EdgesOf(shape, x, y, transposed);
         var bands = BandsFor(_edges, MaxY - MinY);
         _bandsPerMetre = bands / Math.Max(MaxY - MinY, double.Epsilon);
         if (!double.IsFinite(_bandsPerMetre))
@@ -58,6 +58,9 @@ internal sealed class FrameShape
     public double MaxY { get; }
 
     public double AreaSquareMetres { get; }
+
+    /// <summary>All edges, by number.</summary>
+    public ReadOnlySpan<Edge> Edges => _edges;
 
     /// <summary>The edges in square tiles, for looking round a place or along a slanted line.</summary>
     public EdgeTiles Tiles => _tiles.Value;
@@ -147,7 +150,7 @@ internal sealed class FrameShape
         return transposed ? (y, x) : (x, y);
     }
 
-    private static Edge[] Edges(PlaneShape shape, double[] x, double[] y, bool transposed)
+    private static Edge[] EdgesOf(PlaneShape shape, double[] x, double[] y, bool transposed)
     {
         var edges = new Edge[shape.VertexCount];
         for (var part = 0; part < shape.PartCount; part++)

@@ -59,11 +59,11 @@ public class ParallelCoverageTests
         var lines = Lines(stratum);
         var grid = CellGridBuilder.Build(lines.Stratum.Region, 0.01);
         var exact = ExactCoverage.At(lines, grid)!;
-        var mean = exact.Zip(grid.Areas, (probability, area) => probability * area).Sum() / grid.Areas.Sum();
+        var mean = exact.Zip(grid.Cells!.Areas, (probability, area) => probability * area).Sum() / grid.Cells!.Areas.Sum();
 
         // Midpoint rule with cells of 0.01: error below 1e-6 where coverage is piecewise linear, 1e-5 along curved edges.
         Assert.Equal(expected, mean, 1e-5);
-        Assert.Equal(stratum.Shape.AreaSquareMetres, grid.Areas.Sum(), 1e-9 * stratum.Shape.AreaSquareMetres);
+        Assert.Equal(stratum.Shape.AreaSquareMetres, grid.Cells!.Areas.Sum(), 1e-9 * stratum.Shape.AreaSquareMetres);
     }
 
     [Fact]
