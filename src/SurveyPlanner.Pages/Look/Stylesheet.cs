@@ -33,9 +33,13 @@ internal static class Stylesheet
         $".pic .axis{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .band{{fill:{Tokens.Action};fill-opacity:.18}}",
         $".pic .curve{{stroke:{Tokens.Action};stroke-width:2;fill:none;stroke-linejoin:round}}",
-        $".pic .curve2{{stroke:{Tokens.Ink};stroke-width:2;fill:none;stroke-dasharray:7 4}}",
+        $".pic .curve2{{stroke:{Tokens.Ink};stroke-width:2;fill:none;stroke-dasharray:8 4}}",
+        $".pic .curve3{{stroke:{Tokens.Coast};stroke-width:2;fill:none;stroke-dasharray:2 3}}",
+        $".pic .curve4{{stroke:{Tokens.Muted};stroke-width:2;fill:none;stroke-dasharray:12 3 2 3}}",
+        $".pic .crowd{{stroke:{Tokens.Hairline};stroke-width:1;fill:none}}",
         $".pic .target{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .bar{{fill:{Tokens.Action}}}",
+        $".pic .class{{fill:{Tokens.StratumFills[0]};stroke:{Tokens.Coast};stroke-width:.9}}",
         $".pic .dot{{fill:{Tokens.Ink};stroke:{Tokens.Ground};stroke-width:2}}");
 
     /// <summary>The page.</summary>

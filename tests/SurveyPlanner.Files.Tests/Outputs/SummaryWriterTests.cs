@@ -21,7 +21,12 @@ public sealed class SummaryWriterTests
                 "transects", "expected_transects", "total_length_km", "expected_length_km", "length_km_over_draws", "coverage",
             ],
             Keys(root.GetProperty("strata")[0]));
-        Assert.Equal(["nominal", "mean", "min", "max", "cv", "simulated_mean"], Keys(root.GetProperty("strata")[0].GetProperty("coverage")));
+        Assert.Equal(
+            [
+                "nominal", "mean", "min", "max", "cv", "simulated_mean", "area_share_below_0_5_nominal", "area_share_below_0_9_nominal", "area_share_above_1_1_nominal",
+                "advice", "edge_profile", "transects",
+            ],
+            Keys(root.GetProperty("strata")[0].GetProperty("coverage")));
         Assert.Equal(
             ["name", "area_km2", "geodesic_area_km2", "kind", "bearing_deg", "spacing_m", "half_width_m", "points", "expected_points", "points_over_draws"],
             Keys(root.GetProperty("strata")[1]));
