@@ -1,9 +1,9 @@
 namespace SurveyPlanner.Pages.Look;
 
-/// <summary>The style sheets, made from the tokens: one for pictures (also inside a lone SVG file), one for the page around them.</summary>
+/// <summary>The style sheets, made from the tokens: one for all pictures (also inside a lone SVG file), one more for charts, one for the page around them.</summary>
 internal static class Stylesheet
 {
-    /// <summary>Maps and charts.</summary>
+    /// <summary>Maps, and what charts share with them.</summary>
     public static readonly string Pictures = string.Join('\n',
         ".pic{font-family:" + Tokens.Sans + ";font-size:12px;font-variant-numeric:tabular-nums}",
         $".pic text{{fill:{Tokens.Ink}}}",
@@ -29,7 +29,10 @@ internal static class Stylesheet
         $".pic .globe{{fill:{Tokens.StratumFills[0]};stroke:{Tokens.Coast};stroke-width:.9}}",
         $".pic .land{{fill:{Tokens.GlobeLand}}}",
         $".pic .equator{{stroke:{Tokens.Coast};stroke-width:.9;fill:none}}",
-        $".pic .here{{fill:none;stroke:{Tokens.Signal};stroke-width:2.2}}",
+        $".pic .here{{fill:none;stroke:{Tokens.Signal};stroke-width:2.2}}");
+
+    /// <summary>Charts, beside the sheet of all pictures.</summary>
+    public static readonly string Charts = string.Join('\n',
         $".pic .axis{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .band{{fill:{Tokens.Action};fill-opacity:.18}}",
         $".pic .curve{{stroke:{Tokens.Action};stroke-width:2;fill:none;stroke-linejoin:round}}",
