@@ -82,7 +82,7 @@ public partial class ReportTests
         var page = ReportRenderer.Render(SamplePlan.Archipelago, SamplePlan.Context);
         var ids = Id().Matches(page).Select(match => match.Groups[1].Value).ToArray();
         Assert.Equal(ids.Length, ids.Distinct().Count());
-        Assert.Equal(2, Picture().Count(page));
+        Assert.Equal(3, Picture().Count(page));
         foreach (Match match in Picture().Matches(page))
         {
             Assert.All(match.Groups[1].Value.Split(' '), id => Assert.Contains(id, ids));
@@ -119,9 +119,9 @@ public partial class ReportTests
         var transects = plan.Strata.Sum(stratum => stratum.Layout.Transects.Length);
         Assert.StartsWith($"{transects}\u00a0lines, ", answer, StringComparison.Ordinal);
         Assert.Contains($"{Words.FiguresTests.Shown(100 * plan.Delivered!.Cv)}\u00a0%", answer, StringComparison.Ordinal);
-        Assert.Contains("the target is 20.0\u00a0%", answer, StringComparison.Ordinal);
+        Assert.Contains("the target is 20\u00a0%", answer, StringComparison.Ordinal);
         Assert.Contains($">{Words.FiguresTests.Shown(plan.Effort!.Required!.Effort)}</th>", page, StringComparison.Ordinal);
-        Assert.Equal(3, Picture().Count(page));
+        Assert.Equal(5, Picture().Count(page));
     }
 
     [Theory]

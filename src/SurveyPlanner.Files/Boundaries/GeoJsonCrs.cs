@@ -9,7 +9,7 @@ namespace SurveyPlanner.Files.Boundaries;
 /// </summary>
 internal static class GeoJsonCrs
 {
-    public const string Default = "GeoJSON is always WGS 84 unless it says otherwise";
+    public const string Default = "the rule for GeoJSON files that name no other, RFC 7946";
 
     /// <summary>The system that an object declares; WGS 84 when it has no such member, null when it says that none is known.</summary>
     public static (CoordinateSystem? System, string Origin) Read(JsonElement element, string source, RepairLog log)

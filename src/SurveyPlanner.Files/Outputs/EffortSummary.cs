@@ -1,22 +1,19 @@
 using System.Text.Json;
 using SurveyPlanner.Effort;
-using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Files.Outputs;
 
 /// <summary>The <c>effort</c> parts of <c>summary.json</c>. Effort is kilometres of line or visits to points, and the keys say which.</summary>
 internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
 {
-    private const int Digits = 9;
+    private readonly PilotSummary _pilot = new(json, plan);
 
     private string EffortKey => plan.IsPoints ? "points" : "length_km";
-
-    private string RateKey => plan.IsPoints ? "encounter_rate_per_visit" : "encounter_rate_per_km";
 
     /// <summary>The members of the survey's <c>effort</c>.</summary>
     public void WriteWhole(EffortPrecision? delivered)
     {
-        Number(RateKey, plan.EncounterRate);
+        json.Number(_pilot.RateKey, plan.EncounterRate);
         if (plan.Estimator is { } estimator)
         {
             json.WriteString("variance_estimator", Words.Kebab(estimator));
@@ -26,16 +23,17 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
         json.Object("b", WriteB);
         if (plan.Pilot is { } pilot)
         {
-            json.Object("pilot", () => WritePilot(pilot));
+            json.Object("pilot", () => _pilot.WritePilot(pilot));
+        }
+
+        if (plan.Uncertainty is { } uncertainty)
+        {
+            json.Object("uncertainty", () => WriteUncertainty(uncertainty));
         }
 
         if (plan.Required is { } required)
         {
-            json.Object("required", () =>
-            {
-                Number("target_cv", required.TargetCv);
-                WritePrecision(required.Precision);
-            });
+            json.Object("required", () => WriteRequired(required));
         }
 
         if (delivered is not null)
@@ -43,92 +41,138 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
             json.Object("delivered", () => WritePrecision(delivered));
         }
 
+        if (plan.Allocations.Length > 0)
+        {
+            json.Array("allocations", plan.Allocations, WriteAllocation);
+        }
+
+        json.Object("curves", WriteCurves);
         json.Array("advice", plan.Advice, WriteAdvice);
     }
 
     /// <summary>The members of a stratum's <c>effort</c>.</summary>
     public void WriteStratum(StratumEffort stratum)
     {
-        Number(RateKey, stratum.EncounterRate);
-        Number("share", stratum.Share);
-        Number(EffortKey, stratum.Effort);
-        Number("expected_detections", stratum.ExpectedDetections);
-        Number("cv", stratum.Cv);
-        Number(EffortKey + "_for_own_target", stratum.EffortForOwnTarget);
-        if (stratum.Pilot is { } pilot)
+        json.Number(_pilot.RateKey, stratum.EncounterRate);
+        json.Number("share", stratum.Share);
+        json.Number(EffortKey, stratum.Effort);
+        WriteLines(stratum.Transects);
+        json.Number("expected_detections", stratum.ExpectedDetections);
+        json.Number("cv", stratum.Cv);
+        json.Number(EffortKey + "_for_own_target", stratum.EffortForOwnTarget);
+        if (stratum.Pilot is { } rate)
         {
-            json.Object("pilot", () => WriteRate(pilot));
+            json.Object("pilot", () => _pilot.WriteStratum(stratum.Name, rate));
         }
     }
 
     private void WriteB()
     {
-        Number("value", plan.B.Value);
+        json.Number("value", plan.B.Value);
         json.WriteString("origin", Words.Kebab(plan.B.Origin));
-        Number("encounter_rate_part", plan.B.EncounterRatePart);
-        Number("detection_part", plan.B.DetectionPart);
-        Number("cluster_size_part", plan.B.ClusterSizePart);
+        json.Number("encounter_rate_part", plan.B.EncounterRatePart);
+        json.Number("detection_part", plan.B.DetectionPart);
+        json.Number("cluster_size_part", plan.B.ClusterSizePart);
         json.Text("explanation", plan.B.Explanation);
     }
 
-    private void WritePilot(PilotFigures pilot)
+    private void WriteUncertainty(EffortUncertainty uncertainty)
     {
-        WriteRate(pilot.Pooled);
-        Number("truncation_m", pilot.TruncationMetres);
-        if (pilot.TruncationMetres is not null)
+        json.WriteNumber("draws", uncertainty.Draws);
+        WriteInterval("factor_interval_95", uncertainty.Factors);
+        WriteInterval("factor_interval_95_by_delta_method", uncertainty.DeltaFactors);
+        json.Number("assured_factor", uncertainty.AssuredFactor);
+        if (uncertainty.Measured is { } measured)
         {
-            json.WriteNumber("detections_beyond_truncation", pilot.BeyondTruncation);
-        }
-
-        if (pilot.ClusterSize is { } size)
-        {
-            json.Object("cluster_size", () =>
+            json.Object("measured", () =>
             {
-                Number("mean", size.Mean);
-                Number("standard_deviation", size.StandardDeviation);
-                Number("detections", size.Detections);
+                json.WriteNumber("simulated_pilots", MeasuredReliability.Pilots);
+                json.WriteNumber("transects", measured.Transects);
+                json.Number("detections_per_transect", measured.DetectionsPerTransect);
+                json.Number("dispersion", measured.Dispersion);
+                json.Number("share_of_intervals_that_held", measured.Coverage);
+                json.Number("share_of_efforts_assured_at_0_8_that_were_enough", measured.Assured);
             });
-        }
-
-        if (plan.PilotCv is { } density)
-        {
-            json.Object("density", () => WriteDecomposition(density));
         }
     }
 
-    private void WriteRate(EncounterRate rate)
+    private void WriteRequired(RequiredEffort required)
     {
-        json.WriteNumber("transects", rate.Transects);
-        Number(plan.IsPoints ? "visits" : "length_km", rate.Effort);
-        json.WriteNumber("detections", rate.Count);
-        Number(RateKey, rate.Rate);
-        Number("variance", rate.Variance);
-        Number("cv", rate.Cv);
-        Number("degrees_of_freedom", rate.DegreesOfFreedom);
-        Number("dispersion", rate.Dispersion);
+        json.Number("target_cv", required.TargetCv);
+        WritePrecision(required.Precision);
+        WriteInterval(EffortKey + "_interval_95", required.Interval);
+        WriteInterval(EffortKey + "_interval_95_by_delta_method", required.DeltaInterval);
+        json.Number("assurance", required.Assurance);
+        json.Number(EffortKey + "_assured", required.AssuredEffort);
+        json.Number(EffortKey + "_planned", required.Planned);
+    }
+
+    private void WriteAllocation(AllocationOption option)
+    {
+        json.WriteStartObject();
+        json.WriteString("allocation", Words.Kebab(option.Allocation));
+        json.Number(EffortKey + "_required", option.RequiredEffort);
+        json.Number("cost", option.Cost);
+        WritePrecision(option.Precision);
+        json.Array("strata", option.Strata, share =>
+        {
+            json.WriteStartObject();
+            json.Text("name", share.Name);
+            json.Number(EffortKey, share.Effort);
+            WriteLines(share.Transects);
+            json.Number("cost", share.Cost);
+            json.WriteEndObject();
+        });
+        json.WriteEndObject();
+    }
+
+    // Points are their own effort; lines are counted beside theirs.
+    private void WriteLines(int? transects)
+    {
+        if (!plan.IsPoints)
+        {
+            json.Number("lines", transects);
+        }
+    }
+
+    private void WriteCurves()
+    {
+        json.Array("cv_against_" + EffortKey, plan.Curves.CvAgainstEffort, point =>
+        {
+            json.WriteStartObject();
+            json.Number(EffortKey, point.Effort);
+            json.Number("cv", point.Cv);
+            json.Number("cv_lower_95", point.LowerCv);
+            json.Number("cv_upper_95", point.UpperCv);
+            json.WriteEndObject();
+        });
+        json.Array(EffortKey + "_against_target_cv", plan.Curves.EffortAgainstTarget, point =>
+        {
+            json.WriteStartObject();
+            json.Number("target_cv", point.TargetCv);
+            json.Number(EffortKey, point.Effort);
+            WriteInterval(EffortKey + "_interval_95", point.Interval);
+            json.WriteEndObject();
+        });
     }
 
     private void WritePrecision(EffortPrecision precision)
     {
-        Number(EffortKey, precision.Effort);
-        Number("expected_detections", precision.ExpectedDetections);
-        WriteDecomposition(precision.Decomposition);
+        json.Number(EffortKey, precision.Effort);
+        json.Number("expected_detections", precision.ExpectedDetections);
+        _pilot.WriteDecomposition(precision.Decomposition);
     }
 
-    private void WriteDecomposition(CvDecomposition decomposition)
+    private void WriteInterval(string key, EffortInterval? interval)
     {
-        Number("cv", decomposition.Cv);
-        Number("degrees_of_freedom", decomposition.DegreesOfFreedom);
-        Number("interval_factor_95", decomposition.IntervalFactor);
-        json.Array("components", decomposition.Components, component =>
+        if (interval is not null)
         {
-            json.WriteStartObject();
-            json.WriteString("source", Words.Kebab(component.Source));
-            Number("cv", component.Cv);
-            Number("degrees_of_freedom", component.DegreesOfFreedom);
-            Number("share", component.Share);
-            json.WriteEndObject();
-        });
+            json.Object(key, () =>
+            {
+                json.Number("lower", interval.Lower);
+                json.Number("upper", interval.Upper);
+            });
+        }
     }
 
     private void WriteAdvice(Advice advice)
@@ -137,13 +181,5 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
         json.Text("message", advice.Message);
         json.Text("source", advice.Source);
         json.WriteEndObject();
-    }
-
-    private void Number(string key, double? value)
-    {
-        if (value is { } number)
-        {
-            json.Figure(key, Figures.Significant(number, Digits));
-        }
     }
 }

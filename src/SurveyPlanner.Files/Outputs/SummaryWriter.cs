@@ -1,5 +1,4 @@
 using System.Text.Json;
-using SurveyPlanner.Coverage;
 using SurveyPlanner.Effort;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
@@ -128,7 +127,7 @@ public static class SummaryWriter
         WriteLayout(json, stratum.Layout);
         if (stratum.Coverage is { } coverage)
         {
-            json.Object("coverage", () => WriteCoverage(json, coverage));
+            json.Object("coverage", () => CoverageSummary.Write(json, coverage));
         }
 
         WriteEffort(json, stratum.Stratum.Name, effort);
@@ -168,17 +167,12 @@ public static class SummaryWriter
         json.Figure("largest", figure(spread.Largest));
     }
 
-    private static void WriteCoverage(Utf8JsonWriter json, StratumCoverage coverage)
+    /// <summary>A figure to 9 digits; what is not known or does not apply is left out.</summary>
+    internal static void Number(this Utf8JsonWriter json, string key, double? value)
     {
-        json.Figure("nominal", Figures.Significant(coverage.Nominal, Digits));
-        json.Figure("mean", Figures.Significant(coverage.Mean, Digits));
-        json.Figure("min", Figures.Significant(coverage.Min, Digits));
-        json.Figure("max", Figures.Significant(coverage.Max, Digits));
-        json.Figure("cv", Figures.Significant(coverage.Cv, Digits));
-        json.Figure("simulated_mean", Figures.Significant(coverage.SimulatedMean, Digits));
-        if (coverage.MaxAbsZ is { } z)
+        if (value is { } number)
         {
-            json.Figure("max_abs_z", Figures.Significant(z, Digits));
+            json.Figure(key, Figures.Significant(number, Digits));
         }
     }
 }

@@ -1,4 +1,5 @@
 using SurveyPlanner.Pages.Maps;
+using SurveyPlanner.Pages.Words;
 
 namespace SurveyPlanner.Pages.Charts;
 
@@ -8,10 +9,12 @@ internal sealed class ChartDrawing
     public const double Width = 680;
     public const double Height = 360;
     public const double Left = 60;
-    public const double Right = 20;
     public const double Top = 16;
     public const double Bottom = 48;
     private const double TextSize = 12;
+    private const double LabelStep = 17;
+    private const double NamesMargin = 190;
+    private const int LongestName = 20;
 
     private readonly Chart _chart;
     private readonly LabelPlacer _placer = new(Width, Height);
@@ -20,41 +23,116 @@ internal sealed class ChartDrawing
     public ChartDrawing(Chart chart)
     {
         _chart = chart;
-        foreach (var level in chart.Levels)
+        var named = chart.Lines.Where(line => line.Points.Count > 0 && line.Label.Length > 0).ToArray();
+        Right = named.Length > 1 ? NamesMargin : 20;
+        PlaceLevels();
+        PlaceDots();
+        if (named.Length > 1)
         {
-            Place(level.Label, Anchor.End, new(Width - Right, At(0, level.Y).Y - 5), new(Width - Right, At(0, level.Y).Y + 14));
+            Names = NamesBeside(named);
         }
-
-        foreach (var dot in chart.Dots)
+        else if (named is [var line])
         {
-            var at = At(dot.X, dot.Y);
-            _placer.TryPlaceBox(at, 5);
-            Place(dot.Label, Anchor.Start, new(at.X + 9, at.Y - 7), new(at.X + 9, at.Y + 16));
-            Place(dot.Label, Anchor.End, new(at.X - 9, at.Y - 7), new(at.X - 9, at.Y + 16));
-        }
-
-        foreach (var line in chart.Lines.Where(line => line.Points.Count > 0))
-        {
-            var end = At(line.Points[^1].X, line.Points[^1].Y);
-            Place(line.Label, Anchor.End, new(end.X, end.Y - 8), new(end.X, end.Y + 18), new(end.X, end.Y - 24), new(end.X, end.Y + 34));
+            PlaceName(line);
         }
     }
 
+    /// <summary>Margin on the right: wide where the names of several lines stand in it.</summary>
+    public double Right { get; }
+
+    public double PlotWidth => Width - Left - Right;
+
+    public static double PlotHeight => Height - Top - Bottom;
+
+    public static double Base => Height - Bottom;
+
     public IReadOnlyList<Label> Labels => _labels;
+
+    /// <summary>Names in the margin, each with its line's look, where that line ends, and the height of the name.</summary>
+    public IReadOnlyList<LineName> Names { get; } = [];
 
     public IEnumerable<(double At, string Text)> XTicks => _chart.X.Ticks.Select(tick => (At(tick, _chart.Y.Min).X, _chart.X.Text(tick)));
 
     public IEnumerable<(double At, string Text)> YTicks => _chart.Y.Ticks.Select(tick => (At(_chart.X.Min, tick).Y, _chart.Y.Text(tick)));
 
     public Pixel At(double x, double y) => new(
-        Left + ((x - _chart.X.Min) / (_chart.X.Max - _chart.X.Min) * (Width - Left - Right)),
-        Height - Bottom - ((y - _chart.Y.Min) / (_chart.Y.Max - _chart.Y.Min) * (Height - Top - Bottom)));
+        Left + ((x - _chart.X.Min) / (_chart.X.Max - _chart.X.Min) * PlotWidth),
+        Base - ((y - _chart.Y.Min) / (_chart.Y.Max - _chart.Y.Min) * PlotHeight));
 
     public string Path(Line line) => line.Points.Count == 0 ? "" : new PathData().Polyline([.. line.Points.Select(point => At(point.X, point.Y))]).ToString();
 
     public string Band(Line line) => line.Band.Count == 0
         ? ""
         : new PathData().Ring([.. line.Band.Select(b => At(b.X, b.High)), .. line.Band.Reverse().Select(b => At(b.X, b.Low))]).ToString();
+
+    public string Path(Level level)
+        => (level.IsUpright
+            ? new PathData().Polyline([new(At(level.At, 0).X, Base), new(At(level.At, 0).X, Top)])
+            : new PathData().Polyline([new(Left, At(0, level.At).Y), new(Width - Right, At(0, level.At).Y)])).ToString();
+
+    private void PlaceLevels()
+    {
+        foreach (var level in _chart.Levels)
+        {
+            if (level.IsUpright)
+            {
+                var x = At(level.At, 0).X;
+                Place(level.Label, Anchor.Start, new(x + 6, Top + 10), new(x + 6, Top + 26));
+                Place(level.Label, Anchor.End, new(x - 6, Top + 10), new(x - 6, Top + 26));
+            }
+            else
+            {
+                var y = At(0, level.At).Y;
+                Place(level.Label, Anchor.End, new(Width - Right, y - 5), new(Width - Right, y + 14));
+            }
+        }
+    }
+
+    private void PlaceDots()
+    {
+        foreach (var dot in _chart.Dots)
+        {
+            var at = At(dot.X, dot.Y);
+            _placer.TryPlaceBox(at, 5);
+            Place(dot.Label, Anchor.Start, new(at.X + 9, at.Y - 7), new(at.X + 9, at.Y + 16));
+            Place(dot.Label, Anchor.End, new(at.X - 9, at.Y - 7), new(at.X - 9, at.Y + 16));
+        }
+    }
+
+    // At the end of the line, above all of it that passes under the name, or below.
+    private void PlaceName(Line line)
+    {
+        var end = End(line);
+        var length = LabelPlacer.LengthOf(line.Label, TextSize);
+        var heights = line.Points.Select(point => At(point.X, point.Y)).Where(at => at.X >= end.X - length).Select(at => Math.Clamp(at.Y, Top, Base)).ToArray();
+        var (above, below) = (heights.Min() - 7, heights.Max() + 16);
+        Place(line.Label, Anchor.End, new(end.X, above), new(end.X, below), new(end.X, above - LabelStep), new(end.X, below + LabelStep));
+    }
+
+    // In the order in which the lines end, pushed down where they would touch, then up again from the base.
+    private List<LineName> NamesBeside(IEnumerable<Line> lines)
+    {
+        var names = lines.OrderBy(line => End(line).Y)
+            .Select(line => new LineName(PlainText.Shorten(line.Label, LongestName), line.Look, End(line), End(line).Y)).ToList();
+        for (var i = 1; i < names.Count; i++)
+        {
+            names[i] = names[i] with { Y = Math.Max(names[i].Y, names[i - 1].Y + LabelStep) };
+        }
+
+        for (var (i, lowest) = (names.Count - 1, Base); i >= 0; i--, lowest -= LabelStep)
+        {
+            names[i] = names[i] with { Y = Math.Min(names[i].Y, lowest) };
+        }
+
+        return names;
+    }
+
+    // Where the line is seen to end: it may run out of the plot above or below.
+    private Pixel End(Line line)
+    {
+        var end = At(line.Points[^1].X, line.Points[^1].Y);
+        return end with { Y = Math.Clamp(end.Y, Top, Base) };
+    }
 
     // Each label once: the second set of places is tried only where the first found no room.
     private void Place(string text, Anchor anchor, params Pixel[] places)
@@ -70,3 +148,10 @@ internal sealed class ChartDrawing
         }
     }
 }
+
+/// <summary>A name in the margin.</summary>
+/// <param name="Text">The name.</param>
+/// <param name="Look">The look of its line.</param>
+/// <param name="End">Where its line ends.</param>
+/// <param name="Y">Height of the name's middle.</param>
+internal sealed record LineName(string Text, LineLook Look, Pixel End, double Y);

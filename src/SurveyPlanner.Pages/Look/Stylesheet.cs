@@ -1,9 +1,9 @@
 namespace SurveyPlanner.Pages.Look;
 
-/// <summary>The style sheets, made from the tokens: one for pictures (also inside a lone SVG file), one for the page around them.</summary>
+/// <summary>The style sheets, made from the tokens: one for all pictures (also inside a lone SVG file), one more for charts, one for the page around them.</summary>
 internal static class Stylesheet
 {
-    /// <summary>Maps and charts.</summary>
+    /// <summary>Maps, and what charts share with them.</summary>
     public static readonly string Pictures = string.Join('\n',
         ".pic{font-family:" + Tokens.Sans + ";font-size:12px;font-variant-numeric:tabular-nums}",
         $".pic text{{fill:{Tokens.Ink}}}",
@@ -29,13 +29,20 @@ internal static class Stylesheet
         $".pic .globe{{fill:{Tokens.StratumFills[0]};stroke:{Tokens.Coast};stroke-width:.9}}",
         $".pic .land{{fill:{Tokens.GlobeLand}}}",
         $".pic .equator{{stroke:{Tokens.Coast};stroke-width:.9;fill:none}}",
-        $".pic .here{{fill:none;stroke:{Tokens.Signal};stroke-width:2.2}}",
+        $".pic .here{{fill:none;stroke:{Tokens.Signal};stroke-width:2.2}}");
+
+    /// <summary>Charts, beside the sheet of all pictures.</summary>
+    public static readonly string Charts = string.Join('\n',
         $".pic .axis{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .band{{fill:{Tokens.Action};fill-opacity:.18}}",
         $".pic .curve{{stroke:{Tokens.Action};stroke-width:2;fill:none;stroke-linejoin:round}}",
-        $".pic .curve2{{stroke:{Tokens.Ink};stroke-width:2;fill:none;stroke-dasharray:7 4}}",
+        $".pic .curve2{{stroke:{Tokens.Ink};stroke-width:2;fill:none;stroke-dasharray:8 4}}",
+        $".pic .curve3{{stroke:{Tokens.Coast};stroke-width:2;fill:none;stroke-dasharray:2 3}}",
+        $".pic .curve4{{stroke:{Tokens.Muted};stroke-width:2;fill:none;stroke-dasharray:12 3 2 3}}",
+        $".pic .crowd{{stroke:{Tokens.Hairline};stroke-width:1;fill:none}}",
         $".pic .target{{stroke:{Tokens.Muted};stroke-width:1;fill:none}}",
         $".pic .bar{{fill:{Tokens.Action}}}",
+        $".pic .class{{fill:{Tokens.StratumFills[0]};stroke:{Tokens.Coast};stroke-width:.9}}",
         $".pic .dot{{fill:{Tokens.Ink};stroke:{Tokens.Ground};stroke-width:2}}");
 
     /// <summary>The page.</summary>

@@ -21,7 +21,10 @@ internal sealed class LabelPlacer(double width, double height)
     private const double Square = 64;
     private readonly Dictionary<(int, int), List<Box>> _taken = [];
 
-    /// <summary>Whether there is room; if so it is taken. Width of text is estimated: 0.6 of its size a character (the map's text is short and mostly digits).</summary>
+    /// <summary>Length of a text, estimated: 0.6 of its size a character (texts are short and mostly digits).</summary>
+    public static double LengthOf(string text, double sizePixels) => text.Length * sizePixels * 0.6;
+
+    /// <summary>Whether there is room; if so it is taken.</summary>
     public bool TryPlace(Label label, double sizePixels)
     {
         return TryTake(BoxOf(label, sizePixels));
@@ -76,7 +79,7 @@ internal sealed class LabelPlacer(double width, double height)
 
     private static Box BoxOf(Label label, double size)
     {
-        var length = label.Text.Length * size * 0.6;
+        var length = LengthOf(label.Text, size);
         var left = label.Anchor switch { Anchor.Start => label.Place.X, Anchor.End => label.Place.X - length, _ => label.Place.X - (length / 2) };
         return new Box(left - 2, label.Place.Y - (0.85 * size), left + length + 2, label.Place.Y + (0.25 * size));
     }

@@ -1,46 +1,87 @@
 using SurveyPlanner.Effort;
 using SurveyPlanner.Pages.Charts;
 using SurveyPlanner.Pages.Words;
-using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Pages.Report;
 
-/// <summary>The tables of the section on effort.</summary>
+/// <summary>The tables of what effort buys.</summary>
 internal static class EffortTables
 {
+    /// <summary>The effort that the target asks for, with all that is known of how sure it is.</summary>
+    public static Table OfRequired(SurveyPlan plan, EffortPlan effort, RequiredEffort required)
+    {
+        var rows = new List<string[]>();
+        if (required is { AssuredEffort: { } assured, Assurance: { } assurance })
+        {
+            rows.Add(Expected($"Enough with an assurance of {Figures.ChosenPercent(assurance)}", effort.CvAt(assured)));
+        }
+
+        rows.Add(Expected("Plain estimate", required.Precision));
+        AddInterval("95 % interval of the effort that the truth asks for", required.Interval);
+        AddInterval("The same by the delta method, for comparison", required.DeltaInterval);
+        if (plan.Delivered is { } delivered)
+        {
+            rows.Add(Expected("Layout as drawn", delivered));
+        }
+
+        return new Table(
+            $"Effort for a coefficient of variation of {Figures.ChosenPercent(required.TargetCv)}",
+            [new("Figure", false), new(EffortWords.Unit(effort, capital: true)), new("Expected CV, %"), new("Expected detections")],
+            rows);
+
+        void AddInterval(string name, EffortInterval? interval)
+        {
+            if (interval is not null)
+            {
+                rows.Add([name, $"{Figures.Three(interval.Lower)} to {Figures.Three(interval.Upper)}", "", ""]);
+            }
+        }
+    }
+
+    private static string[] Expected(string name, EffortPrecision? precision) =>
+        [name, Figures.Three(precision?.Effort), Figures.Three(100 * precision?.Cv), Figures.Three(precision?.ExpectedDetections)];
+
     /// <summary>The curve at the ticks of its axis, at the effort required and at the effort drawn.</summary>
     public static Table OfCurve(SurveyPlan plan, EffortPlan effort, Axis axis) => new(
         "Precision by effort",
-        [new(EffortWords.Unit(effort, capital: true), false), new("CV, %"), new("Expected detections"), new("Remark", false)],
+        [new(EffortWords.Unit(effort, capital: true), false), new("Expected CV, %"), new("95 % band of the pilot, %"), new("Expected detections"), new("Remark", false)],
         [
             .. axis.Ticks.Select(tick => (Effort: tick, Remark: ""))
-                .Append((Effort: effort.Required?.Effort ?? 0, Remark: "target"))
+                .Append((Effort: effort.Required?.Effort ?? 0, Remark: "plain estimate for the target"))
+                .Append((Effort: effort.Required?.AssuredEffort ?? 0, Remark: "with the assurance asked for"))
                 .Append((Effort: plan.Delivered?.Effort ?? 0, Remark: "layout as drawn"))
                 .OrderBy(row => row.Effort)
                 .Select(row => (row.Remark, Precision: effort.CvAt(row.Effort)))
                 .Where(row => row.Precision is not null)
                 .Select(row => (string[])
                 [
-                    Figures.Three(row.Precision!.Effort), Figures.Three(100 * row.Precision.Cv), Figures.Three(row.Precision.ExpectedDetections), row.Remark,
+                    Figures.Three(row.Precision!.Effort), Figures.Three(100 * row.Precision.Cv), Band(effort, row.Precision.Effort),
+                    Figures.Three(row.Precision.ExpectedDetections), row.Remark,
                 ]),
         ]);
 
-    public static Table OfComponents(EffortPrecision delivered) => new(
-        "Where the uncertainty of the layout as drawn comes from",
-        [new("Component", false), new("CV, %"), new("Degrees of freedom"), new("Share of CV², %")],
+    // Twice the effort needed is as half the effort spent.
+    private static string Band(EffortPlan effort, double at) => effort.Uncertainty is { Factors: var factors }
+        ? $"{Figures.Three(100 * effort.CvAt(at / factors.Lower)?.Cv)} to {Figures.Three(100 * effort.CvAt(at / factors.Upper)?.Cv)}"
+        : Figures.None;
+
+    public static Table OfTargets(EffortPlan effort) => new(
+        "Effort by target",
+        [new("CV asked for, %", false), new(EffortWords.Unit(effort, capital: true)), new("95 % interval of the pilot")],
         [
-            .. delivered.Decomposition.Components.Select(component => (string[])
+            .. effort.Curves.EffortAgainstTarget.Select(point => (string[])
             [
-                Name(component.Source), Figures.Three(100 * component.Cv), Freedom(component.DegreesOfFreedom), Figures.Three(100 * component.Share),
+                Figures.Three(100 * point.TargetCv),
+                Figures.Three(point.Effort),
+                point.Interval is { } interval ? $"{Figures.Three(interval.Lower)} to {Figures.Three(interval.Upper)}" : Figures.None,
             ]),
-            ["together", Figures.Three(100 * delivered.Cv), Freedom(delivered.Decomposition.DegreesOfFreedom), "100"],
         ]);
 
     public static Table OfStrata(EffortPlan effort) => new(
         "Effort by stratum",
         [
-            new("Stratum", false), new(effort.IsPoints ? "Detections per visit" : "Detections per km"), new("Share of effort, %"),
-            new(EffortWords.Unit(effort, capital: true)), new("Expected detections"), new("CV of its own density, %"), new("Effort for the target in itself"),
+            new("Stratum", false), new(RateHeading(effort.IsPoints)), new("Share of effort, %"), new(EffortWords.Unit(effort, capital: true)),
+            .. Lines(effort, [new Column("Lines")]), new("Expected detections"), new("CV of its own density, %"), new("Effort for the target in it alone"),
         ],
         [
             .. effort.Strata.Select(stratum => (string[])
@@ -49,43 +90,16 @@ internal static class EffortTables
                 Figures.Three(stratum.EncounterRate),
                 Figures.Three(100 * stratum.Share),
                 Figures.Three(stratum.Effort),
+                .. Lines(effort, [stratum.Transects is { } lines ? Figures.Count(lines) : Figures.None]),
                 Figures.Three(stratum.ExpectedDetections),
                 Figures.Three(100 * stratum.Cv),
                 Figures.Three(stratum.EffortForOwnTarget),
             ]),
         ]);
 
-    public static Table OfPilot(PilotFigures pilot) => new(
-        "The pilot",
-        [
-            new("Stratum", false), new("Transects"), new(pilot.IsPoints ? "Visits" : "Length, km"), new("Detections"),
-            new(pilot.IsPoints ? "Detections per visit" : "Detections per km"), new("CV of that, %"), new("Degrees of freedom"), new("Variance-to-mean ratio"),
-        ],
-        [
-            .. pilot.Strata.Select(stratum => PilotRow(stratum.Stratum.Length == 0 ? "whole region" : stratum.Stratum, stratum.EncounterRate)),
-            .. pilot.Strata.Length > 1 ? [PilotRow("together", pilot.Pooled)] : Array.Empty<string[]>(),
-        ]);
+    /// <summary>The heading of an encounter rate.</summary>
+    public static string RateHeading(bool isPoints) => isPoints ? "Detections per visit" : "Detections per km";
 
-    private static string[] PilotRow(string name, EncounterRate rate) =>
-    [
-        name,
-        Figures.Count(rate.Transects),
-        Figures.Three(rate.Effort),
-        Figures.Count(rate.Count),
-        Figures.Three(rate.Rate),
-        Figures.Three(100 * rate.Cv),
-        rate.DegreesOfFreedom is null ? Figures.None : Freedom(rate.DegreesOfFreedom),
-        Figures.Three(rate.Dispersion),
-    ];
-
-    private static string Freedom(double? degrees) => degrees is null ? "many" : Figures.Three(degrees);
-
-    private static string Name(CvSource source) => source switch
-    {
-        CvSource.EncounterRate => "encounter rate",
-        CvSource.Detection => "detection",
-        CvSource.ClusterSize => "cluster size",
-        CvSource.EncounterRateAndDetection => "encounter rate and detection",
-        _ => throw new ArgumentOutOfRangeException(nameof(source), source, null),
-    };
+    // Points are their own effort; lines are counted beside it.
+    private static T[] Lines<T>(EffortPlan effort, T[] cells) => effort.IsPoints ? [] : cells;
 }

@@ -14,28 +14,121 @@ internal static class EffortWords
         _ => "km",
     };
 
-    /// <summary>First what was asked, then what the layout gives.</summary>
-    public static string Answer(SurveyPlan plan, EffortPlan effort)
+    /// <summary>What the target asks for, as honestly as the pilot allows: the assured effort first, then how far the pilot leaves it open.</summary>
+    public static string Answer(EffortPlan effort)
     {
-        var asked = effort.Required is { } required
-            ? $"A coefficient of variation of {Figures.Percent(required.TargetCv)} needs about {Amount(required.Effort, effort)}. "
-            : "";
-        return asked + (plan.Delivered is { } delivered
-            ? $"The layout as drawn has {Amount(delivered.Effort, effort)} and is expected to deliver {Figures.Percent(delivered.Cv)}, from about {Figures.Three(delivered.ExpectedDetections)} detections."
-            : "No layout drawn here is surveyed the way the pilot was, so nothing can be said of what it delivers.");
+        if (effort.Required is not { } required)
+        {
+            return $"The plan names no target, or none that effort can reach: at {Rate(effort)} these figures say what each effort gives.";
+        }
+
+        var target = $"a coefficient of variation of {Figures.ChosenPercent(required.TargetCv)}";
+        var plain = Amount(required.Effort, effort);
+        if (required.Interval is not { } interval)
+        {
+            return $"About {plain} reach {target}; there is no pilot to say how sure that is.";
+        }
+
+        var open = $"the pilot itself leaves anything from {Range(interval, effort)} open (95 % interval)";
+        return required is { AssuredEffort: { } assured, Assurance: { } assurance }
+            ? $"{Amount(assured, effort)} reach {target} with an assurance of {Figures.ChosenPercent(assurance)}; the plain estimate is {plain}, and {open}."
+            : $"About {plain} reach {target} by the plain estimate; {open}.";
     }
 
-    /// <summary>What the chart shows.</summary>
+    /// <summary>What the layout as drawn gives, beside what is planned for.</summary>
+    public static string OfDrawn(SurveyPlan plan, EffortPlan effort)
+    {
+        if (plan.Delivered is not { } delivered)
+        {
+            return "No layout drawn here is surveyed the way the pilot was, so nothing can be said of what it delivers.";
+        }
+
+        var gives = $"The layout as drawn has {Amount(delivered.Effort, effort)} and is expected to deliver {Figures.Percent(delivered.Cv)}, "
+            + $"from about {Figures.Three(delivered.ExpectedDetections)} detections";
+        return effort.Required is { } required ? $"{gives}: {Verdict(delivered.Effort, required)}." : gives + ".";
+    }
+
+    private static string Verdict(double drawn, RequiredEffort required)
+    {
+        if (drawn < required.Effort)
+        {
+            return "less than the plain estimate asks for";
+        }
+
+        return required switch
+        {
+            { AssuredEffort: { } assured } when drawn < assured => "more than the plain estimate, less than the assured effort",
+            { AssuredEffort: not null } => "at least the assured effort",
+            { Interval: { } interval } when drawn > interval.Upper => "more than all that the interval leaves open",
+            _ => "at least the plain estimate",
+        };
+    }
+
+    /// <summary>How such intervals did where the truth was known; null where that was not measured.</summary>
+    public static string? OfReliability(EffortPlan effort)
+    {
+        if (effort.Uncertainty?.Measured is not { } measured)
+        {
+            return null;
+        }
+
+        var pilots = $"{Figures.Count(MeasuredReliability.Pilots)} simulated pilots of {measured.Transects} transects with {Figures.Three(measured.DetectionsPerTransect)} detections on each "
+            + $"and counts {Figures.Three(measured.Dispersion)} times as variable as chance, the nearest to this one that were tried";
+        var found = $"How far to trust that: of {pilots}, {Figures.Percent(measured.Coverage)} gave a 95 % interval that held the truth";
+        return effort.Required?.AssuredEffort is null
+            ? found + "."
+            : $"{found}, and {Figures.Percent(measured.Assured)} an effort assured at 80 % that was enough.";
+    }
+
+    /// <summary>What the chart of precision against effort shows.</summary>
     public static string Finding(SurveyPlan plan, EffortPlan effort)
     {
         var target = effort.Required is { } required
-            ? $"{Amount(required.Effort, effort)} reach a coefficient of variation of {Figures.Percent(required.TargetCv)}"
+            ? $"{Amount(required.Effort, effort)} reach a CV of {Figures.ChosenPercent(required.TargetCv)}" + (required is { AssuredEffort: { } assured, Assurance: { } assurance }
+                ? $"; with the pilot's uncertainty, {Amount(assured, effort)} are needed to be {Figures.ChosenPercent(assurance)} sure"
+                : "")
             : null;
         var drawn = plan.Delivered is { } delivered ? $"the {Amount(delivered.Effort, effort)} drawn give {Figures.Percent(delivered.Cv)}" : null;
         var sentence = string.Join("; ", new[] { target, drawn }.OfType<string>()) + ".";
         return char.ToUpperInvariant(sentence[0]) + sentence[1..];
     }
 
-    private static string Amount(double amount, EffortPlan effort)
+    /// <summary>What the chart of effort against the target shows: what the next step of precision costs.</summary>
+    public static string TargetFinding(EffortPlan effort)
+    {
+        if (effort.Required is not { } required)
+        {
+            return "Twice the precision costs four times the effort.";
+        }
+
+        var finer = required.TargetCv / 2;
+        return effort.Model.EffortFor(finer) is { } more
+            ? $"Halving the CV from {Figures.ChosenPercent(required.TargetCv)} to {Figures.ChosenPercent(finer)} takes {Figures.Three(more / required.Effort)} times the effort, {Amount(more, effort)}."
+            : $"No effort halves the CV to {Figures.ChosenPercent(finer)}: detection, taken as given, stays as it is.";
+    }
+
+    /// <summary>What sharing the effort otherwise would change; the ways are those of <see cref="EffortPlan.Allocations"/>.</summary>
+    public static string OfAllocations(EffortPlan effort, Allocation chosen)
+    {
+        var planned = effort.Allocations.Single(option => option.Allocation == chosen);
+        var (least, word) = planned.Cost is null
+            ? (effort.Allocations.MinBy(option => option.RequiredEffort)!, "effort")
+            : (effort.Allocations.MinBy(option => option.Cost)!, "cost");
+        var (of, to) = planned.Cost is null ? (planned.RequiredEffort, least.RequiredEffort) : (planned.Cost.Value, least.Cost!.Value);
+        return least.Allocation == chosen || to >= of
+            ? $"Effort is shared by {Sentences.Word(chosen)} allocation, and of the three ways it reaches the target with the least {word}."
+            : $"Effort is shared by {Sentences.Word(chosen)} allocation; {Sentences.Word(least.Allocation)} allocation would reach the target with {Figures.Percent(1 - (to / of))} less {word}.";
+    }
+
+    /// <summary>Kilometres of line or points, with the unit.</summary>
+    public static string Amount(double amount, EffortPlan effort)
         => effort.IsPoints ? Figures.Counted((long)Math.Ceiling(amount), "point", "points") : Figures.Three(amount) + "\u00a0km";
+
+    private static string Range(EffortInterval interval, EffortPlan effort)
+        => effort.IsPoints
+            ? $"{Figures.Count((long)Math.Ceiling(interval.Lower))} to {Amount(interval.Upper, effort)}"
+            : $"{Figures.Three(interval.Lower)} to {Amount(interval.Upper, effort)}";
+
+    private static string Rate(EffortPlan effort)
+        => $"{Figures.Three(effort.EncounterRate)} detections a {(effort.IsPoints ? "visit" : "kilometre")}";
 }

@@ -33,6 +33,9 @@ internal static class Figures
     /// <summary>A share of one as a percentage with three significant figures and its sign.</summary>
     public static string Percent(double? share) => share is { } s && double.IsFinite(s) ? Three(s * 100) + "\u00a0%" : None;
 
+    /// <summary>A share of one that somebody chose, such as a target, as a percentage without digits that were not given.</summary>
+    public static string ChosenPercent(double share) => (100 * share).ToString("0.####", CultureInfo.InvariantCulture) + "\u00a0%";
+
     /// <summary>A count, exact, thousands set off by a narrow space.</summary>
     public static string Count(long value) => Grouped(value);
 

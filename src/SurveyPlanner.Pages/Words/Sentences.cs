@@ -58,7 +58,7 @@ internal static class Sentences
             return null;
         }
 
-        var target = plan.Effort?.Required is { } required ? $"; the target is {Figures.Percent(required.TargetCv)}" : "";
+        var target = plan.Effort?.Required is { } required ? $"; the target is {Figures.ChosenPercent(required.TargetCv)}" : "";
         return $"It is expected to estimate density with a coefficient of variation of {Figures.Percent(delivered.Cv)}{target}.";
     }
 
@@ -83,14 +83,6 @@ internal static class Sentences
                 $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true"));
         return $"{OfRegion(plan.Region)} {strata}. The table of transects has their positions.";
     }
-
-    /// <summary>How much coverage differs, by stratum.</summary>
-    public static string OfCoverageRange(IReadOnlyCollection<StratumCoverage> coverages) => coverages.Count > MostStrata
-        ? $"Coverage runs from {Figures.Three(coverages.Min(c => c.Min))} to {Figures.Three(coverages.Max(c => c.Max))} over {coverages.Count} strata; "
-            + $"its coefficient of variation within a stratum is at most {Figures.Percent(coverages.Max(c => c.Cv))}."
-        : string.Join(" ", coverages.Select(coverage =>
-            $"{(coverages.Count == 1 ? "Coverage" : coverage.Stratum + ": coverage")} averages {Figures.Three(coverage.Mean)} and runs from {Figures.Three(coverage.Min)} "
-            + $"to {Figures.Three(coverage.Max)}; its coefficient of variation over the area is {Figures.Percent(coverage.Cv)}."));
 
     /// <summary>What the map of coverage shows.</summary>
     public static string OfCoverage(IReadOnlyCollection<StratumCoverage> coverages, IReadOnlyList<CoverageClass> classes)

@@ -13,10 +13,13 @@ public sealed class DocumentationTests
     {
         var plan = TestPlans.WithEffort();
         using var summary = JsonDocument.Parse(SummaryWriter.Write(plan, draw: 1).Content);
+        using var full = JsonDocument.Parse(SummaryWriter.Write(TestPlans.WithDetections(), draw: 1).Content);
+        using var points = JsonDocument.Parse(SummaryWriter.Write(TestPlans.WithPoints(), draw: 1).Content);
         using var transects = JsonDocument.Parse(TransectsGeoJson.Write(plan).Content);
         var properties = transects.RootElement.GetProperty("features").EnumerateArray().SelectMany(feature => Keys(feature.GetProperty("properties")));
 
-        Assert.All(Keys(summary.RootElement).Concat(properties), AssertDocumented);
+        Assert.All(
+            new[] { summary, full, points }.SelectMany(document => Keys(document.RootElement)).Concat(properties).Distinct(), AssertDocumented);
     }
 
     [Fact]

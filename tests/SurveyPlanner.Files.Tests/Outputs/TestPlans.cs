@@ -23,6 +23,32 @@ internal static class TestPlans
             Line("A002", 2, 180, Path(-150.5, 63.2, -150.5, 63.15), Path(-150.5, 63.11, -150.5, 63.0))),
         Points(HostileName, Point("B001", 3, -150.4, 63.05), Point("B002", 4, -150.3, 63.05)));
 
+    /// <summary>
+    /// Two strata of lines, a pilot with distances and clusters in each, detection by stratum, costs, a target of 20 % and an assurance of 0.8:
+    /// all that a summary can hold of lines.
+    /// </summary>
+    public static SurveyPlan WithDetections()
+    {
+        var plan = Plan(Centre, Lines("Inner bay", Line("A001", 1, 0, Path(-150.6, 63.0, -150.6, 63.2))), Lines("Outer bay", Line("B001", 2, 0, Path(-150.4, 63.0, -150.4, 63.2))));
+        var transects = from stratum in plan.Strata from i in Enumerable.Range(1, 5) select new PilotTransect(stratum.Stratum.Name, $"{stratum.Stratum.Name} {i}", 2, 3 + i);
+        ImmutableArray<PilotTransect> pilotTransects = [.. transects];
+        var detections =
+            from transect in pilotTransects
+            from i in Enumerable.Range(0, transect.Count)
+            select new PilotDetection(transect.Id, 290.0 * i * i / (transect.Count * transect.Count), 1 + (i % 3));
+        var strata = plan.Strata.Select(stratum => new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, IsPoints: false, 300, IsSystematic: true, TransectLengthKm: 2));
+        var design = EffortDesign.None with
+        {
+            TargetCv = 0.2,
+            Assurance = 0.8,
+            Detection = DetectionDesign.None with { ByStratum = true },
+            CostPerUnit = ImmutableSortedDictionary<string, double>.Empty.Add("Inner bay", 100).Add("Outer bay", 250),
+        };
+        var effort = EffortPlanning.For(design, new PilotTable(false, pilotTransects, [.. detections]), [.. strata], seed: 1)!;
+        var measured = new MeasuredReliability(10, 5, 2, 0.935, 0.79);
+        return plan with { Effort = effort with { Uncertainty = effort.Uncertainty! with { Measured = measured } } };
+    }
+
     /// <summary>The same with a pilot of three lines over the strata with lines, and a target of 20 %.</summary>
     public static SurveyPlan WithEffort()
     {
@@ -31,6 +57,18 @@ internal static class TestPlans
         var strata = plan.Strata.Select(stratum =>
             new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 300, IsSystematic: false));
         return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, pilot, [.. strata], seed: 1) };
+    }
+
+    /// <summary>A pilot of points with radial distances over the stratum of points.</summary>
+    public static SurveyPlan WithPoints()
+    {
+        var plan = TwoStrata();
+        int[] counts = [1, 0, 2, 3, 1, 2];
+        ImmutableArray<PilotTransect> transects = [.. counts.Select((count, i) => new PilotTransect("", $"{i}", 1, count))];
+        var detections = from transect in transects from i in Enumerable.Range(0, transect.Count) select new PilotDetection(transect.Id, 40 + (30 * i), 1);
+        var strata = plan.Strata.Select(stratum =>
+            new EffortStratum(stratum.Stratum.Name, stratum.Stratum.AreaKm2, stratum.Layout.Design.IsPoints, 182.88, IsSystematic: false));
+        return plan with { Effort = EffortPlanning.For(EffortDesign.None with { TargetCv = 0.2 }, new PilotTable(true, transects, [.. detections]), [.. strata], seed: 1) };
     }
 
     /// <summary>One stratum of lines round any place, without coverage.</summary>
@@ -79,7 +117,11 @@ internal static class TestPlans
             let centre = new PlanePoint((column * 10_000) + 5000, (row * 10_000) + 5000)
             select new CoverageCell(
                 centre, projection.Unproject(centre), centre, 100, column < 0 ? null : 0.3, column < 0 ? 0.1 : 0.29, 0.31, 0.0123);
-        return new StratumCoverage(name, 0.2, 10_000, 0, 1000, [.. cells], 0.2, 0.1, 0.3, 0.5, 0.195, null);
+        return new StratumCoverage(name, 0.2, 10_000, 0, 1000, [.. cells], 0.2, 0.1, 0.3, 0.5, 0.195, null)
+        {
+            EdgeProfile = [new EdgeClass(0, 5000, 600, 0.15), new EdgeClass(5000, null, 200, 0.2)],
+            Advice = new CoverageAdvice(CoverageFinding.UnevenInside, 1, 0, "Coverage is uneven."),
+        };
     }
 
     private static StratumPlan Placed(StratumPlan stratum, EqualAreaProjection projection) => stratum with

@@ -38,7 +38,7 @@ public class ChartTests
     {
         var drawing = new ChartDrawing(new Chart("t", "d", new Axis("x", 0, 10, 2), new Axis("y", 0, 100, 20)));
         Assert.Equal((ChartDrawing.Left, ChartDrawing.Height - ChartDrawing.Bottom), (drawing.At(0, 0).X, drawing.At(0, 0).Y));
-        Assert.Equal((ChartDrawing.Width - ChartDrawing.Right, ChartDrawing.Top), (drawing.At(10, 100).X, drawing.At(10, 100).Y));
+        Assert.Equal((ChartDrawing.Width - drawing.Right, ChartDrawing.Top), (drawing.At(10, 100).X, drawing.At(10, 100).Y));
         Assert.Equal([.. drawing.XTicks.Select(tick => tick.Text)], ["0", "2", "4", "6", "8", "10"]);
     }
 
@@ -49,18 +49,23 @@ public class ChartTests
         var chart = new Chart("<title>", "a & b", Axis.Covering("Length of line, km", 0, 10), Axis.Covering("CV, %", 0, 100))
         {
             Bars = [new Bar(0, 1, 20), new Bar(1, 2, 30)],
-            Lines = [new Line("expected", points, [.. points.Select(p => (p.Item1, p.Item2 * 0.8, p.Item2 * 1.2))]), new Line("second", points, [], IsSecond: true)],
-            Levels = [new Level(20, "target 20 %")],
+            Lines =
+            [
+                new Line("expected", points) { Band = [.. points.Select(p => (p.Item1, p.Item2 * 0.8, p.Item2 * 1.2))] },
+                new Line("second", points) { Look = LineLook.Second },
+            ],
+            Levels = [new Level(20, "target 20 %"), new Level(4, "half-width 4 m", IsUpright: true)],
             Dots = [new Dot(5, 20, "layout as drawn")],
         };
         var document = Parse(RazorText.Render<ChartView>(new() { [nameof(ChartView.Chart)] = chart, [nameof(ChartView.Key)] = "c" }));
-        Assert.Equal(2, Count(document, "bar"));
+        Assert.Equal(2, Count(document, "class"));
         Assert.Equal(1, Count(document, "band"));
-        Assert.Equal(1, Count(document, "curve"));
-        Assert.Equal(1, Count(document, "curve2"));
-        Assert.Equal(1, Count(document, "target"));
+        // Each line has a sample beside its name in the margin.
+        Assert.Equal(2, Count(document, "curve"));
+        Assert.Equal(2, Count(document, "curve2"));
+        Assert.Equal(2, Count(document, "target"));
         Assert.Equal(1, Count(document, "dot"));
-        Assert.All(new[] { "expected", "second", "target 20 %", "layout as drawn" }, label => Assert.Single(document.GetElementsByTagName("text").Cast<XmlNode>(), text => text.InnerText == label));
+        Assert.All(new[] { "expected", "second", "target 20 %", "half-width 4 m", "layout as drawn" }, label => Assert.Single(document.GetElementsByTagName("text").Cast<XmlNode>(), text => text.InnerText == label));
     }
 
     [Fact]
