@@ -29,7 +29,7 @@ public class CoverageCounterTests
                 Assert.Equal(expectedDraws, counts.Draws);
                 Assert.Equal(expectedTimes, counts.Times);
                 Assert.Equal(expectedAgain, counts.Again);
-Assert.Equal(overlaps, counts.Times.Sum() > counts.Draws.Sum());
+                Assert.Equal(overlaps, counts.Times.Sum() > counts.Draws.Sum());
             }
         }
     }
