@@ -74,15 +74,15 @@ internal static class PlanKeys
 
     public static readonly PlanKey<Bearing> Bearing = Layout(
         "bearing", new BearingReader(), "\"short-axis\"", KindFilter.Any, (design, bearing) => design with { Bearing = bearing }, @default: new Bearing.ShortAxis(),
-        doc: "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum. A zigzag swings about it.");
+        doc: "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum; for segments also each at random. A zigzag swings about it.");
 
     public static readonly PlanKey<double> Spacing = Layout(
         "spacing", Length, "\"5 km\"", KindFilter.Any, (design, metres) => design with { Sizing = new Sizing.Spacing(metres) }, group: KeyGroup.Sizing,
-        doc: "Distance between neighbouring lines or points; of a zigzag, between its turning points along the axis.");
+        doc: "Distance between neighbouring lines, segments, loops or points; of a zigzag, between its turning points along the axis.");
 
     public static readonly PlanKey<long> Lines = Layout(
         "lines", new WholeReader(1, 100_000), "20", KindFilter.Lines, (design, count) => design with { Sizing = new Sizing.Number((int)count) }, group: KeyGroup.Sizing,
-        doc: "Instead of a spacing: expected number of lines, or of legs of a zigzag, in the stratum.");
+        doc: "Instead of a spacing: expected number of lines, segments or loops, or of legs of a zigzag, in the stratum.");
 
     public static readonly PlanKey<long> Points = Layout(
         "points", new WholeReader(1, 100_000), "60", KindFilter.Points, (design, count) => design with { Sizing = new Sizing.Number((int)count) }, group: KeyGroup.Sizing,
@@ -123,6 +123,30 @@ internal static class PlanKeys
     public static readonly PlanKey<double> MinLength = Layout(
         "min_length", new LengthReader(zeroIsAllowed: true), "\"200 m\"", KindFilter.Lines, (design, metres) => design with { MinLengthMetres = metres }, @default: 0.0,
         doc: "Stretches of line shorter than this are left out: splinters between islands.");
+
+    public static readonly PlanKey<LinePlacement> Placement = Layout(
+        "placement", new ChoiceReader<LinePlacement>(), "\"one-per-band\"", KindFilter.Only(LayoutKind.RandomParallel), (design, placement) => design with { Placement = placement }, @default: LinePlacement.Independent,
+        doc: "Whether each line lies anywhere, or one in each of as many equal bands as there are lines.");
+
+    public static readonly PlanKey<double> SegmentLength = Layout(
+        "length", Length, "\"1 km\"", KindFilter.Only(LayoutKind.Segments), (design, metres) => design with { SegmentMetres = metres }, isRequired: true,
+        doc: "Length of each segment. Required for segments.");
+
+    public static readonly PlanKey<double> Side = Layout(
+        "side", Length, "\"500 m\"", KindFilter.Only(LayoutKind.Loops), (design, metres) => design with { SideMetres = metres }, isRequired: true,
+        doc: "Side of each square circuit. Required for loops.");
+
+    public static readonly PlanKey<CrossingRule> Crossing = Layout(
+        "crossing", new ChoiceReader<CrossingRule>(), "\"keep\"", KindFilter.Only(LayoutKind.Segments, LayoutKind.Loops), (design, crossing) => design with { Crossing = crossing }, @default: CrossingRule.Clip,
+        doc: "Whether segments and loops that cross the boundary are cut there (clip), or kept whole if they start inside and left out if not (keep).");
+
+    public static readonly PlanKey<double> Step = Layout(
+        "step", Length, "\"400 m\"", KindFilter.Only(LayoutKind.PointsOnLines), (design, metres) => design with { StepMetres = metres }, isRequired: true,
+        doc: "Distance from one point to the next along a line; spacing is that between lines. Required for points on lines.");
+
+    public static readonly PlanKey<long> Reserve = Layout(
+        "reserve", new WholeReader(0, 100_000), "20", KindFilter.Only(LayoutKind.RandomPoints, LayoutKind.BalancedPoints), (design, count) => design with { Reserve = (int)count }, @default: 0L,
+        doc: "Number of spare points, listed in the order in which they are to be used.");
 
     // [stratum."name"] only
     public static readonly PlanKey<Money> CostPerKm = Add(

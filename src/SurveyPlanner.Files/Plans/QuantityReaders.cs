@@ -42,19 +42,21 @@ internal sealed class BearingReader : ValueReader<Layouts.Bearing>
 {
     private const string LongAxis = "long-axis";
     private const string ShortAxis = "short-axis";
+    private const string Random = "random";
 
-    public override string Takes => "degrees from 0 to below 360, \"long-axis\" or \"short-axis\"";
+    public override string Takes => "degrees from 0 to below 360, \"long-axis\", \"short-axis\" or, for segments, \"random\"";
 
     public override Parsed<Layouts.Bearing> Read(SettingValue value, Sample sample) => value switch
     {
         SettingValue.Text { Value: LongAxis } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.LongAxis()),
         SettingValue.Text { Value: ShortAxis } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.ShortAxis()),
+        SettingValue.Text { Value: Random } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.Random()),
         SettingValue.Whole whole => Degrees(whole.Value, sample),
         SettingValue.Number number when double.IsFinite(number.Value) => Degrees(number.Value, sample),
         SettingValue.Text text when DecimalText.Read(text.Value.TrimEnd('°')) is { IsGood: true } number =>
             Parsed.Bad<Layouts.Bearing>($"write {sample.With(DecimalText.Write(number.Good))} without quotes: degrees are a plain number"),
         SettingValue.Text text => Parsed.Bad<Layouts.Bearing>(
-            $"{Quoted.Short(text.Value)} is not {Takes}{Spelling.Hint(text.Value, [LongAxis, ShortAxis])}"),
+            $"{Quoted.Short(text.Value)} is not {Takes}{Spelling.Hint(text.Value, [LongAxis, ShortAxis, Random])}"),
         _ => WrongType(value, sample),
     };
 
@@ -62,6 +64,7 @@ internal sealed class BearingReader : ValueReader<Layouts.Bearing>
     {
         Layouts.Bearing.LongAxis => Quoted.Text(LongAxis),
         Layouts.Bearing.ShortAxis => Quoted.Text(ShortAxis),
+        Layouts.Bearing.Random => Quoted.Text(Random),
         Layouts.Bearing.Degrees degrees => DecimalText.Write(degrees.Value),
         _ => throw new ArgumentOutOfRangeException(nameof(value), value, "a bearing without a word"),
     };

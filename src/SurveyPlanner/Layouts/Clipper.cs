@@ -44,6 +44,23 @@ internal static class Clipper
         EmitSegment(cuts, inside, length, transect, (fromX, fromY, dx / length, dy / length), output);
     }
 
+    /// <summary>The x between which a shape lies at the heights from low to high; low above high when it has no part there.</summary>
+    public static (double Low, double High) ExtentBetween(FrameShape shape, double lowY, double highY)
+    {
+        var (low, high) = (double.PositiveInfinity, double.NegativeInfinity);
+        foreach (ref readonly var edge in shape.EdgesBetween(lowY, highY))
+        {
+            var (from, to) = (Math.Max(lowY, edge.LowY), Math.Min(highY, edge.HighY));
+            if (from <= to)
+            {
+                var (x0, x1) = from < to || edge.HighY > edge.LowY ? (edge.XAt(from), edge.XAt(to)) : (edge.LowX, edge.HighX);
+                (low, high) = (Math.Min(low, Math.Min(x0, x1)), Math.Max(high, Math.Max(x0, x1)));
+            }
+        }
+
+        return (low, high);
+    }
+
     /// <summary>
     /// Whether the stretch before the first crossing is inside. Asked within the longest stretch, where rounding cannot matter,
     /// and counted back: every crossing changes sides.

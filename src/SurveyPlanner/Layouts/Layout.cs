@@ -10,7 +10,8 @@ namespace SurveyPlanner.Layouts;
 /// <param name="Design">The design it was drawn from.</param>
 /// <param name="BearingDegrees">True bearing of its lines at the stratum's centre, degrees in [0, 180) (for points: of the grid's rows).</param>
 /// <param name="SpacingMetres">The spacing that the sizing came to, metres.</param>
-/// <param name="OffsetMetres">The random offset(s) drawn, metres: across the lines; a point grid has a second along its rows.</param>
+/// <param name="OffsetMetres">The random offset(s) drawn, metres: across the lines; grids have two, along their rows and across them;
+/// a zigzag has the share of its period, along its axis; kinds without a start for the whole have none.</param>
 /// <param name="Transects">Lines or points in the order to be visited.</param>
 /// <param name="ExpectedLengthMetres">Lines: expected total length over the random offset, metres in the plane. Null for points.</param>
 /// <param name="ExpectedCount">Expected number of points; for lines, of lines.</param>
@@ -28,6 +29,12 @@ public sealed record Layout(
     EffortSpread Spread,
     ImmutableArray<Notice> Notices)
 {
+    /// <summary>
+    /// Spare points, to be used strictly in this order, each for the next point that cannot be visited; their <see cref="Transect.Order"/> counts
+    /// from 1 within this list. Empty unless the design asks for them.
+    /// </summary>
+    public ImmutableArray<Transect> Reserve { get; init; } = [];
+
     /// <summary>Total length of the drawn lines on the ellipsoid, metres; 0 for points.</summary>
     public double TotalLengthMetres => Transects.Sum(transect => transect.LengthMetres);
 }

@@ -6,11 +6,29 @@ public enum LayoutKind
     /// <summary>Parallel lines one spacing apart, random start.</summary>
     Parallel,
 
+    /// <summary>Parallel lines at random distances.</summary>
+    RandomParallel,
+
     /// <summary>A continuous zigzag across the convex hull of the stratum, random start.</summary>
     Zigzag,
 
+    /// <summary>Short lines of a fixed length on a square grid, random start along both axes.</summary>
+    Segments,
+
+    /// <summary>Closed square circuits on a square grid, random start along both axes.</summary>
+    Loops,
+
     /// <summary>Points on a grid, random start along both axes.</summary>
     PointGrid,
+
+    /// <summary>Points at even steps along systematic parallel lines, random start along both axes.</summary>
+    PointsOnLines,
+
+    /// <summary>Points at random, each by itself.</summary>
+    RandomPoints,
+
+    /// <summary>Random points spread out evenly (balanced acceptance sampling).</summary>
+    BalancedPoints,
 }
 
 /// <summary>What happens at the stratum's boundary.</summary>
@@ -28,6 +46,26 @@ public enum GridShape
 {
     Square,
     Triangular,
+}
+
+/// <summary>How lines at random distances are placed.</summary>
+public enum LinePlacement
+{
+    /// <summary>Each line anywhere, independently of the others.</summary>
+    Independent,
+
+    /// <summary>The stratum is cut into equal bands along the lines, and each gets one line, anywhere in it.</summary>
+    OnePerBand,
+}
+
+/// <summary>What happens to a segment or loop that crosses the boundary.</summary>
+public enum CrossingRule
+{
+    /// <summary>It is cut there: whatever lies inside is kept, wherever it starts.</summary>
+    Clip,
+
+    /// <summary>It is kept whole if it starts inside, and left out if not.</summary>
+    Keep,
 }
 
 /// <summary>How a zigzag turns.</summary>
@@ -60,6 +98,9 @@ public abstract record Bearing
 
     /// <summary>Along its short side.</summary>
     public sealed record ShortAxis : Bearing;
+
+    /// <summary>Segments: each its own, at random. Their grid then lies along the long axis.</summary>
+    public sealed record Random : Bearing;
 }
 
 /// <summary>What fixes the amount of effort.</summary>
@@ -104,15 +145,36 @@ public sealed record LayoutDesign(
     GridShape Grid = GridShape.Square,
     ZigzagTurning Turning = ZigzagTurning.EqualSpaced)
 {
+    /// <summary>Lines at random distances: how they are placed.</summary>
+    public LinePlacement Placement { get; init; }
+
     /// <summary>Zigzags: a second, mirrored pass on the way back.</summary>
     public bool Crossed { get; init; }
 
     /// <summary>Lines: stretches shorter than this are left out, metres; 0 leaves none out.</summary>
     public double MinLengthMetres { get; init; }
 
-    /// <summary>Whether animals are counted around points rather than along lines.</summary>
-    public bool IsPoints => Kind is LayoutKind.PointGrid;
+    /// <summary>Segments: length of each, metres.</summary>
+    public double? SegmentMetres { get; init; }
 
-    /// <summary>Whether transects lie at fixed distances from each other, so that neighbours can be compared.</summary>
-    public bool IsSystematic => Kind is LayoutKind.Parallel or LayoutKind.Zigzag or LayoutKind.PointGrid;
+    /// <summary>Loops: side of the square, metres.</summary>
+    public double? SideMetres { get; init; }
+
+    /// <summary>Segments and loops: what happens to those that cross the boundary.</summary>
+    public CrossingRule Crossing { get; init; }
+
+    /// <summary>Points on lines: distance from one to the next along a line, metres.</summary>
+    public double? StepMetres { get; init; }
+
+    /// <summary>Random and balanced points: length of the list of spare points, to be used strictly in its order.</summary>
+    public int Reserve { get; init; }
+
+    /// <summary>Whether animals are counted around points rather than along lines.</summary>
+    public bool IsPoints => Kind is LayoutKind.PointGrid or LayoutKind.PointsOnLines or LayoutKind.RandomPoints or LayoutKind.BalancedPoints;
+
+    /// <summary>
+    /// Whether transects follow one another at a fixed spacing from a random start, so that each can be compared with the next. Grids of segments
+    /// and loops are systematic too, but have no single order.
+    /// </summary>
+    public bool IsSystematic => Kind is LayoutKind.Parallel or LayoutKind.Zigzag or LayoutKind.PointGrid or LayoutKind.PointsOnLines;
 }

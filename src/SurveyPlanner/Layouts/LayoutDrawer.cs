@@ -12,7 +12,7 @@ internal static class LayoutDrawer
     public static ImmutableArray<Layout> Draw(IReadOnlyList<LayoutGenerator> generators, EqualAreaProjection projection, ulong seed)
     {
         var realisations = generators.Select((generator, i) => Realise(generator, seed, (uint)i)).ToList();
-        var ids = new TransectIds([.. realisations.Select(realisation => realisation.Transects)]);
+        var ids = new TransectIds([.. realisations.Select(realisation => realisation.Transects)], [.. generators.Select(generator => generator.ReserveCount)]);
         var order = 0;
         var layouts = ImmutableArray.CreateBuilder<Layout>(generators.Count);
         for (var i = 0; i < generators.Count; i++)
@@ -24,7 +24,8 @@ internal static class LayoutDrawer
         return layouts.MoveToImmutable();
     }
 
-    private static Realisation Realise(LayoutGenerator generator, ulong seed, uint stratum)
+    /// <summary>One stratum's draw in its turned frame.</summary>
+    public static Realisation Realise(LayoutGenerator generator, ulong seed, uint stratum)
     {
         var random = new PhiloxStream(seed, RandomPurpose.Layout, stratum, replicate: 0);
         var offsets = new double[generator.OffsetRanges.Length];
@@ -33,9 +34,11 @@ internal static class LayoutDrawer
             offsets[axis] = random.NextDouble();
         }
 
-        var buffer = new PieceBuffer();
+        var again = random;
+        var (buffer, reserve) = (new PieceBuffer(), new PieceBuffer());
         generator.Realise(offsets, ref random, buffer);
-        return new Realisation(offsets, [.. buffer.Pieces]);
+        generator.RealiseReserve(offsets, ref again, reserve);
+        return new Realisation(offsets, [.. buffer.Pieces], [.. reserve.Pieces]);
     }
 
     private static Layout Describe(
@@ -57,7 +60,10 @@ internal static class LayoutDrawer
             generator.Design.IsPoints ? null : generator.ExpectedLength ?? spread.Mean,
             generator.ExpectedCount ?? meanCount,
             spread,
-            Notices(generator, transects.Length));
+            Notices(generator, transects.Length))
+        {
+            Reserve = [.. realisation.Reserve.Select(piece => builder.Build(ids.OfReserve(stratum, piece.Transect), piece.Transect + 1, [piece]))],
+        };
     }
 
     private static ImmutableArray<Notice> Notices(LayoutGenerator generator, int transects)
@@ -76,7 +82,7 @@ internal static class LayoutDrawer
             notices.Add(new Notice(NoticeKind.Warning, warning));
         }
 
-        if (2 * generator.Stratum.HalfWidthMetres > generator.SpacingMetres)
+        if (generator.Design.IsSystematic && 2 * generator.Stratum.HalfWidthMetres > generator.SpacingMetres)
         {
             var (what, reach) = generator.Design.IsPoints ? ("radius", "disks") : ("half-width", "strips");
             notices.Add(new Notice(NoticeKind.Warning, string.Create(
@@ -87,7 +93,8 @@ internal static class LayoutDrawer
         return notices.ToImmutable();
     }
 
-    private sealed record Realisation(double[] Offsets, Piece[] Pieces)
+    /// <summary>A draw: the offsets as shares of their ranges, its pieces, and its spare points in order.</summary>
+    internal sealed record Realisation(double[] Offsets, Piece[] Pieces, Piece[] Reserve)
     {
         public int Transects => Pieces.Length == 0 ? 0 : Pieces[^1].Transect + 1;
     }

@@ -41,4 +41,14 @@ internal abstract class LayoutGenerator(StratumFrame stratum, LayoutDesign desig
     /// <paramref name="random"/> supplies whatever else a kind draws.
     /// </summary>
     public abstract void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output);
+
+    /// <summary>Number of spare points beside the layout.</summary>
+    public virtual int ReserveCount => 0;
+
+    /// <summary>
+    /// Writes the spare points that belong to a realisation, in the order to be used: same offsets, and the stream as it was before that was drawn.
+    /// </summary>
+    public virtual void RealiseReserve(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
+    {
+    }
 }

@@ -9,12 +9,19 @@ internal static class LayoutKinds
     /// <exception cref="InputException">The design cannot work in this stratum.</exception>
     public static LayoutGenerator Prepare(Stratum stratum, LayoutDesign design)
     {
+        LayoutOptions.RefuseMisplaced(stratum, design);
         var frame = new StratumFrame(stratum, design);
         return design.Kind switch
         {
             LayoutKind.Parallel => new ParallelLines(frame, design),
+            LayoutKind.RandomParallel => new RandomParallelLines(frame, design),
             LayoutKind.Zigzag => new Zigzag(frame, design),
+            LayoutKind.Segments => new Segments(frame, design),
+            LayoutKind.Loops => new Loops(frame, design),
             LayoutKind.PointGrid => new PointGrid(frame, design),
+            LayoutKind.PointsOnLines => new PointsOnLines(frame, design),
+            LayoutKind.RandomPoints => new RandomPoints(frame, design),
+            LayoutKind.BalancedPoints => new BalancedPoints(frame, design),
             _ => throw new InvalidOperationException($"layout kind {design.Kind} is not in the list"),
         };
     }

@@ -26,7 +26,7 @@ internal sealed class ParallelLines : LayoutGenerator
 
     public override double? ExpectedLength => Stratum.Lines.AreaSquareMetres / SpacingMetres;
 
-    public override double? ExpectedCount => SizingRules.CoveredExtent(Stratum.Lines) / SpacingMetres;
+    public override double? ExpectedCount => new CoveredRanges(Stratum.Lines).Length / SpacingMetres;
 
     public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
     {
@@ -52,7 +52,7 @@ internal sealed class ParallelLines : LayoutGenerator
     private static double SpacingFor(StratumFrame stratum, Sizing sizing) => sizing switch
     {
         Sizing.Spacing spacing => spacing.Metres,
-        Sizing.Number number => SizingRules.CoveredExtent(stratum.Lines) / number.Count,
+        Sizing.Number number => new CoveredRanges(stratum.Lines).Length / number.Count,
         Sizing.TotalLength length => stratum.Lines.AreaSquareMetres / length.Metres,
         _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
     };

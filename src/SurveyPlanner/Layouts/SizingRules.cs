@@ -7,18 +7,8 @@ internal static class SizingRules
 {
     private const int MaxTransects = 100_000;
 
-    /// <summary>Length across the lines that is covered by any part of the shape: gaps between islands do not count. Metres.</summary>
-    public static double CoveredExtent(FrameShape shape)
-    {
-        var (total, reached) = (0.0, double.NegativeInfinity);
-        foreach (var (low, high) in shape.PartRanges.OrderBy(range => range.Low))
-        {
-            total += Math.Max(0, high - Math.Max(low, reached));
-            reached = Math.Max(reached, high);
-        }
-
-        return total;
-    }
+    /// <summary>A number of transects that is at least what is asked for; a billionth more is rounding.</summary>
+    public static int WholeNumber(double wanted) => (int)Math.Max(1, Math.Ceiling(wanted - 1e-9));
 
     /// <summary>Refuses transects so far apart that most draws would place none.</summary>
     /// <param name="stratum">The stratum.</param>
@@ -64,6 +54,23 @@ internal static class SizingRules
         _ => "layout.spacing",
     };
 
-    public static InputException LengthForPoints(StratumFrame stratum) => new(new Problem(
-        $"stratum '{stratum.Stratum.Name}' has points, and points have no length; give spacing or points instead", Key: "layout.total_length"));
+    /// <summary>Refuses segments or loops that would run into their neighbours.</summary>
+    public static void RefuseLongTracks(StratumFrame stratum, LayoutDesign design, double metres, double spacingMetres)
+    {
+        if (metres > spacingMetres)
+        {
+            var (what, key) = design.Kind == LayoutKind.Loops ? ("a side", "layout.side") : ("a length", "layout.length");
+            throw new InputException(new Problem(
+                string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"{what} of {metres / 1000:0.###} km is more than the spacing of {spacingMetres / 1000:0.###} km that the layout of stratum '{stratum.Stratum.Name}' comes to, so neighbours would overlap; choose shorter ones or ask for less"),
+                Key: key));
+        }
+    }
+
+    /// <summary>What remains when points are sized neither by spacing nor by number.</summary>
+    public static Exception NotForPoints(StratumFrame stratum, LayoutDesign design) => design.Sizing is Sizing.TotalLength
+        ? new InputException(new Problem(
+            $"stratum '{stratum.Stratum.Name}' has points, and points have no length; give spacing or points instead", Key: "layout.total_length"))
+        : new InvalidOperationException("size_from = \"precision\" is turned into a number before a layout is made");
 }

@@ -52,6 +52,9 @@ internal sealed class StratumFrame
     /// <summary>Length of the stratum across its lines, metres: what the lines are spread over.</summary>
     public double ExtentAcross => Clip.MaxY - Clip.MinY;
 
+    /// <summary>Length of the stratum along its lines, metres.</summary>
+    public double ExtentAlong => Clip.MaxX - Clip.MinX;
+
     private FrameShape LinesFor(double minLengthMetres, bool transposed)
     {
         if (minLengthMetres <= 0)
@@ -73,7 +76,7 @@ internal sealed class StratumFrame
         var degrees = bearing switch
         {
             Bearing.Degrees given => given.Value,
-            Bearing.LongAxis => stratum.LongAxisBearing,
+            Bearing.LongAxis or Bearing.Random => stratum.LongAxisBearing,
             Bearing.ShortAxis => stratum.LongAxisBearing + 90,
             _ => throw new InvalidOperationException($"unknown bearing {bearing}"),
         };
