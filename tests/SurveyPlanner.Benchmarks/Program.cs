@@ -1,4 +1,6 @@
 using System.Globalization;
+using BenchmarkDotNet.Running;
+using SurveyPlanner.Benchmarks;
 using SurveyPlanner.Benchmarks.Effort;
 
 switch (args)
@@ -15,7 +17,13 @@ switch (args)
     case ["interval-constructions"]:
         IntervalConstructionStudy.Run(Console.Out);
         break;
+    case ["coverage-memory", .. var choices]:
+        CoverageMemory.Run(choices);
+        break;
+    case [var option, ..] when option.StartsWith("--", StringComparison.Ordinal):
+        BenchmarkSwitcher.FromAssembly(typeof(CoverageMemory).Assembly).Run(args);
+        break;
     default:
-        Console.Error.WriteLine("Give the name of a study: detection-fits, pilot-intervals [PILOTS], interval-constructions.");
+        Console.Error.WriteLine("Give the name of a study: detection-fits, pilot-intervals [PILOTS], interval-constructions, coverage-memory [KIND THREADS CELLS VERTICES]; or options of BenchmarkDotNet, such as --filter '*'.");
         break;
 }

@@ -6,7 +6,7 @@ namespace SurveyPlanner.Coverage;
 /// <param name="Replicates">Number of draws.</param>
 /// <param name="Draws">Draws that covered the place at least once.</param>
 /// <param name="Times">Times the place was covered, over all draws.</param>
-/// <param name="Again">Draws that covered the place, as the draw before had.</param>
+/// <param name="Again">Draws that covered the place as their neighbour before did; the neighbour before the first is the last.</param>
 internal sealed record CoverageCounts(int Replicates, int[] Draws, int[] Times, int[] Again)
 {
     /// <summary>Share of draws that covered a place.</summary>
@@ -55,7 +55,7 @@ internal static class CoverageSimulation
         void Report() => progress?.Add((double)DrawsPerReport / replicates);
         void Work(int worker)
         {
-            // Each worker takes a run of neighbouring draws and first looks at the one before it.
+            // Each worker takes a run of neighbouring draws.
             var (first, end) = ((int)((long)replicates * worker / workers), (int)((long)replicates * (worker + 1) / workers));
             counters[worker] = CountRun(generator, grid, offsets, first, end, Report, stop);
         }
@@ -78,14 +78,21 @@ internal static class CoverageSimulation
     {
         var counter = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
         var buffer = new PieceBuffer();
-        Span<double> drawn = stackalloc double[generator.OffsetRanges.Length];
-        for (var draw = Math.Max(0, first - 1); draw < end; draw++)
+        var drawn = new double[generator.OffsetRanges.Length];
+        void Draw(int draw, bool onlyRemember)
         {
-            stop.ThrowIfCancellationRequested();
             var random = offsets.Fill(draw, drawn);
             buffer.Clear();
             generator.Realise(drawn, ref random, buffer);
-            counter.Count(buffer.Pieces, onlyRemember: draw < first);
+            counter.Count(buffer.Pieces, onlyRemember);
+        }
+
+        // The neighbour before the first: the range of the offset is a circle, so that of the very first is the last.
+        Draw(first == 0 ? offsets.Draws - 1 : first - 1, onlyRemember: true);
+        for (var draw = first; draw < end; draw++)
+        {
+            stop.ThrowIfCancellationRequested();
+            Draw(draw, onlyRemember: false);
             if ((draw - first) % DrawsPerReport == DrawsPerReport - 1)
             {
                 report();

@@ -12,6 +12,9 @@ internal sealed class StratifiedOffsets(ulong seed, uint stratum, int draws, int
     // Two axes: a grid as square as the number of draws allows; what is left over is drawn plainly.
     private readonly int _across = axes < 2 ? draws : (int)Math.Sqrt(draws);
 
+    /// <summary>Number of draws.</summary>
+    public int Draws => draws;
+
     /// <summary>Fills the offsets of one draw and leaves the stream for whatever else the kind draws.</summary>
     public PhiloxStream Fill(int draw, Span<double> offsets)
     {

@@ -66,6 +66,15 @@ public class ParallelCoverageTests
         Assert.Equal(stratum.Shape.AreaSquareMetres, grid.Cells!.Areas.Sum(), 1e-9 * stratum.Shape.AreaSquareMetres);
     }
 
+    /// <summary>
+    /// Where the boundary is tangent to the lines across: nothing at the place itself, and a hair inside, at depth t, a chord of 2 sqrt(2 a t).
+    /// </summary>
+    [Theory]
+    [InlineData(1e-9)]
+    [InlineData(1e-6)]
+    public void Disk_where_its_edge_runs_across_the_lines(double depth)
+        => Assert.Equal(2 * Math.Sqrt(2 * 5 * depth) / 4, PlaneStrata.ExactAt(Lines(PlaneStrata.Disk(5)), 0, 5 - depth), 1e-5);
+
     [Fact]
     public void Plus_sampling_is_even_to_the_edge()
     {

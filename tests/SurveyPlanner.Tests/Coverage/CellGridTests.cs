@@ -23,7 +23,9 @@ public class CellGridTests
                     Assert.True(shape.Contains(grid.X[i], grid.RowY[row]));
                     Assert.InRange(Math.Abs(grid.X[i] - cells.ColumnX(cells.Columns[i])), 0, 225 + 1e-6);
                     Assert.InRange(Math.Abs(grid.RowY[row] - cells.RowMiddle(grid.RowY[row])), 0, 225);
-                    Assert.InRange(cells.Areas[i], 0, (450 * 450) + 1e-3);
+
+                    // A sliver that no look finds a place in is joined to the cell before it.
+                    Assert.InRange(cells.Areas[i], 0, 1.05 * 450 * 450);
                 }
             }
         }

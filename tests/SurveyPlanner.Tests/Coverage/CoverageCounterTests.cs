@@ -54,9 +54,11 @@ public class CoverageCounterTests
         var offsets = new StratifiedOffsets(Judge.Seed, 0, draws, generator.OffsetRanges.Length);
         var drawn = new double[generator.OffsetRanges.Length];
         var buffer = new PieceBuffer();
-        for (var draw = 0; draw < draws; draw++)
+
+        // Round the circle of offsets: the last draw stands before the first.
+        for (var draw = -1; draw < draws; draw++)
         {
-            var random = offsets.Fill(draw, drawn);
+            var random = offsets.Fill((draw + draws) % draws, drawn);
             buffer.Clear();
             generator.Realise(drawn, ref random, buffer);
             for (var row = 0; row < grid.RowY.Length; row++)
@@ -64,9 +66,13 @@ public class CoverageCounterTests
                 for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
                 {
                     var covering = CoveringPieces(buffer, grid.X[i], grid.RowY[row], generator.Stratum.HalfWidthMetres);
-                    times[i] += covering;
-                    total[i] += covering > 0 ? 1 : 0;
-                    again[i] += covering > 0 && before[i] ? 1 : 0;
+                    if (draw >= 0)
+                    {
+                        times[i] += covering;
+                        total[i] += covering > 0 ? 1 : 0;
+                        again[i] += covering > 0 && before[i] ? 1 : 0;
+                    }
+
                     before[i] = covering > 0;
                 }
             }
