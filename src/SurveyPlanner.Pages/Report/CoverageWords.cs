@@ -89,9 +89,9 @@ internal static class CoverageWords
         var near = profile[0].ToMetres is { } to
             ? $"within {Figures.Distance(to)} of the boundary coverage averages {Figures.Three(Nearest(coverage))} of nominal"
             : $"coverage averages {Figures.Three(Nearest(coverage))} of nominal";
-        return even < profile.Length
-            ? $"{near}, and from {Figures.Distance(profile[even].FromMetres)} inwards it is within a tenth of nominal"
-            : $"{near}, and farther in than {Figures.Distance(profile[^1].FromMetres)} it still averages {Figures.Three(profile[^1].MeanCoverage / coverage.Nominal)}";
+        return profile.Length == 1 ? near
+            : even < profile.Length ? $"{near}, and from {Figures.Distance(profile[even].FromMetres)} inwards it is within a tenth of nominal"
+            : $"{near}, and farther in than {Figures.Distance(profile[^1].FromMetres)} it still averages {Figures.Three(profile[^1].MeanCoverage / coverage.Nominal)} of nominal";
     }
 
     private static string Capital(string sentence) => char.ToUpperInvariant(sentence[0]) + sentence[1..];
