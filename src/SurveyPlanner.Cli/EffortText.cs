@@ -18,7 +18,7 @@ internal static class EffortText
         }
 
         WriteAllocations(output, effort);
-        foreach (var advice in effort.Advice)
+        foreach (var advice in effort.Advice.Where(advice => !advice.RepeatsFigures))
         {
             output.WriteLine();
             output.WriteLine(advice.Source is { } source ? $"{advice.Message} ({source})" : advice.Message);

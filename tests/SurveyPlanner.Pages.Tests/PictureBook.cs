@@ -1,3 +1,4 @@
+using SurveyPlanner.Effort;
 using SurveyPlanner.Pages.Tests.Fixtures;
 
 namespace SurveyPlanner.Pages.Tests;
@@ -16,6 +17,21 @@ public class PictureBook
 
         Directory.CreateDirectory(folder);
         File.WriteAllText(Path.Combine(folder, "pilot.html"), ReportRenderer.Render(SamplePlan.WithPilot, SamplePlan.Context));
+        File.WriteAllText(Path.Combine(folder, "distances.html"), ReportRenderer.Render(SamplePlan.WithDistances, SamplePlan.Context));
+        File.WriteAllText(Path.Combine(folder, "at-points.html"), ReportRenderer.Render(SamplePlan.AtPoints, SamplePlan.Context));
+        var sea = SamplePlan.Of(
+            SampleBoundary.Read("marine_archipelago_sea"), SamplePlan.Parallel(10_000), effort: SamplePlan.InventedEffort,
+            pilot: SamplePlan.InventedPilotWithDistances(isPoints: false, ""));
+        File.WriteAllText(Path.Combine(folder, "sea-with-pilot.html"), ReportRenderer.Render(sea, SamplePlan.Context));
+        var counties = SamplePlan.Of(
+            SampleBoundary.Read("strata_maine_counties"), SamplePlan.Zigzag(15_000), "name", effort: SamplePlan.InventedEffort,
+            pilot: SamplePlan.InventedPilotWithDistances(isPoints: false, ""));
+        File.WriteAllText(Path.Combine(folder, "counties-with-pilot.html"), ReportRenderer.Render(counties, SamplePlan.Context));
+        var programme = new TrendDesign(0.2);
+        File.WriteAllText(Path.Combine(folder, "trend.html"), TrendRenderer.RenderHtml(TrendSheet.Of("Archipelago, sea ducks by boat", programme, "the plan's target", 10, 0.8), "0.1.0"));
+        File.WriteAllText(Path.Combine(folder, "trend.svg"), TrendRenderer.RenderSvg(TrendSheet.Of("Archipelago", programme, "the plan's target", 10, 0.8)));
+        var simulated = programme with { Shape = TrendShape.Linear, CvModel = TrendCvModel.InverseRootOfAbundance, YearsBetweenSurveys = 2 };
+        File.WriteAllText(Path.Combine(folder, "trend-simulated.html"), TrendRenderer.RenderHtml(TrendSheet.Of("Archipelago", simulated, "as given", 8, 0.8), "0.1.0"));
         var points = SamplePlan.Of(SampleBoundary.Read("inland_county_polygon"), SamplePlan.Grid(4000));
         File.WriteAllText(Path.Combine(folder, "points.html"), ReportRenderer.Render(points, SamplePlan.Context));
         var zigzag = SamplePlan.Of(SampleBoundary.Read("lake_caspian_with_islands"), SamplePlan.Zigzag(60_000));

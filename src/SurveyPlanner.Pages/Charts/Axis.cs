@@ -41,6 +41,6 @@ public sealed record Axis(string Title, double Min, double Max, double Step)
     {
         var decimals = Math.Max(0, -(int)Math.Floor(Math.Log10(Step) + 1e-9));
         var text = (Math.Abs(tick) < Step / 2 ? 0 : tick).ToString("N" + Math.Min(decimals, 10), CultureInfo.InvariantCulture);
-        return text.Replace(',', '\u202f');
+        return text.Replace(',', '\u202f').Replace('-', '−');
     }
 }

@@ -8,10 +8,10 @@ internal sealed class ChartDrawing
 {
     public const double Width = 680;
     public const double Height = 360;
-    public const double Left = 60;
     public const double Top = 16;
     public const double Bottom = 48;
     private const double TextSize = 12;
+    private const double TitleWidth = 24;
     private const double LabelStep = 17;
     private const double NamesMargin = 190;
     private const int LongestName = 20;
@@ -23,6 +23,7 @@ internal sealed class ChartDrawing
     public ChartDrawing(Chart chart)
     {
         _chart = chart;
+        Left = TitleWidth + LabelPlacer.LengthOf(chart.Y.Ticks.Select(chart.Y.Text).MaxBy(text => text.Length) ?? "", TextSize) + 12;
         var named = chart.Lines.Where(line => line.Points.Count > 0 && line.Label.Length > 0).ToArray();
         Right = named.Length > 1 ? NamesMargin : 20;
         PlaceLevels();
@@ -36,6 +37,9 @@ internal sealed class ChartDrawing
             PlaceName(line);
         }
     }
+
+    /// <summary>Margin on the left: room for the ticks and the axis title.</summary>
+    public double Left { get; }
 
     /// <summary>Margin on the right: wide where the names of several lines stand in it.</summary>
     public double Right { get; }
@@ -74,16 +78,18 @@ internal sealed class ChartDrawing
     {
         foreach (var level in _chart.Levels)
         {
+            var at = At(level.At, level.At);
+            var (above, below, right) = (at.Y - 5, at.Y + 14, Width - Right);
             if (level.IsUpright)
             {
-                var x = At(level.At, 0).X;
-                Place(level.Label, Anchor.Start, new(x + 6, Top + 10), new(x + 6, Top + 26));
-                Place(level.Label, Anchor.End, new(x - 6, Top + 10), new(x - 6, Top + 26));
+                Place(
+                    level.Label,
+                    (Anchor.Start, new(at.X + 6, Top + 10)), (Anchor.Start, new(at.X + 6, Top + 26)), (Anchor.End, new(at.X - 6, Top + 10)), (Anchor.End, new(at.X - 6, Top + 26)));
             }
             else
             {
-                var y = At(0, level.At).Y;
-                Place(level.Label, Anchor.End, new(Width - Right, y - 5), new(Width - Right, y + 14));
+                Place(
+                    level.Label, (Anchor.End, new(right, above)), (Anchor.End, new(right, below)), (Anchor.Start, new(Left + 4, above)), (Anchor.Start, new(Left + 4, below)));
             }
         }
     }
@@ -94,19 +100,16 @@ internal sealed class ChartDrawing
         {
             var at = At(dot.X, dot.Y);
             _placer.TryPlaceBox(at, 5);
-            Place(dot.Label, Anchor.Start, new(at.X + 9, at.Y - 7), new(at.X + 9, at.Y + 16));
-            Place(dot.Label, Anchor.End, new(at.X - 9, at.Y - 7), new(at.X - 9, at.Y + 16));
+            Place(
+                dot.Label,
+                (Anchor.Start, new(at.X + 9, at.Y - 7)), (Anchor.Start, new(at.X + 9, at.Y + 16)), (Anchor.End, new(at.X - 9, at.Y - 7)), (Anchor.End, new(at.X - 9, at.Y + 16)));
         }
     }
 
-    // At the end of the line, above all of it that passes under the name, or below.
     private void PlaceName(Line line)
     {
         var end = End(line);
-        var length = LabelPlacer.LengthOf(line.Label, TextSize);
-        var heights = line.Points.Select(point => At(point.X, point.Y)).Where(at => at.X >= end.X - length).Select(at => Math.Clamp(at.Y, Top, Base)).ToArray();
-        var (above, below) = (heights.Min() - 7, heights.Max() + 16);
-        Place(line.Label, Anchor.End, new(end.X, above), new(end.X, below), new(end.X, above - LabelStep), new(end.X, below + LabelStep));
+        Place(line.Label, [.. new[] { -8, 18, -25, 35, -42, 52 }.Select(rise => (Anchor.End, new Pixel(end.X, end.Y + rise)))]);
     }
 
     // In the order in which the lines end, pushed down where they would touch, then up again from the base.
@@ -134,18 +137,29 @@ internal sealed class ChartDrawing
         return end with { Y = Math.Clamp(end.Y, Top, Base) };
     }
 
-    // Each label once: the second set of places is tried only where the first found no room.
-    private void Place(string text, Anchor anchor, params Pixel[] places)
+    // The first place that is free and that no line runs through; without one, the first that is free; without one, none.
+    private void Place(string text, params (Anchor Anchor, Pixel At)[] places)
     {
-        if (_labels.Any(label => label.Text == text))
-        {
-            return;
-        }
-
-        if (places.Select(place => new Label(text, place, anchor)).FirstOrDefault(label => _placer.TryPlace(label, TextSize)) is { } free)
+        var labels = places.Select(place => new Label(text, place.At, place.Anchor)).ToArray();
+        if (labels.OrderBy(IsCrossed).FirstOrDefault(label => _placer.TryPlace(label, TextSize)) is { } free)
         {
             _labels.Add(free);
         }
+    }
+
+    private bool IsCrossed(Label label)
+    {
+        var (left, top, right, bottom) = LabelPlacer.Extent(label, TextSize);
+        return _chart.Lines.Where(line => line.Look != LineLook.Quiet).Any(line => line.Points.Zip(line.Points.Skip(1)).Any(leg =>
+        {
+            var (from, to) = (At(leg.First.X, leg.First.Y), At(leg.Second.X, leg.Second.Y));
+            var steps = Math.Clamp((int)from.DistanceTo(to) / 4, 1, 500);
+            return Enumerable.Range(0, steps + 1).Any(i =>
+            {
+                var (x, y) = (from.X + ((to.X - from.X) * i / steps), from.Y + ((to.Y - from.Y) * i / steps));
+                return x > left && x < right && y > top && y < bottom;
+            });
+        }));
     }
 }
 

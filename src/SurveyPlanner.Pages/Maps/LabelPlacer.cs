@@ -77,11 +77,18 @@ internal sealed class LabelPlacer(double width, double height)
 
     private static Box Around(Pixel centre, double half) => new(centre.X - half, centre.Y - half, centre.X + half, centre.Y + half);
 
+    /// <summary>The room that a label takes.</summary>
+    public static (double Left, double Top, double Right, double Bottom) Extent(Label label, double sizePixels)
+    {
+        var length = LengthOf(label.Text, sizePixels);
+        var left = label.Anchor switch { Anchor.Start => label.Place.X, Anchor.End => label.Place.X - length, _ => label.Place.X - (length / 2) };
+        return (left - 2, label.Place.Y - (0.85 * sizePixels), left + length + 2, label.Place.Y + (0.25 * sizePixels));
+    }
+
     private static Box BoxOf(Label label, double size)
     {
-        var length = LengthOf(label.Text, size);
-        var left = label.Anchor switch { Anchor.Start => label.Place.X, Anchor.End => label.Place.X - length, _ => label.Place.X - (length / 2) };
-        return new Box(left - 2, label.Place.Y - (0.85 * size), left + length + 2, label.Place.Y + (0.25 * size));
+        var (left, top, right, bottom) = Extent(label, size);
+        return new Box(left, top, right, bottom);
     }
 
     private readonly record struct Box(double Left, double Top, double Right, double Bottom)

@@ -20,8 +20,8 @@ internal static class AllocationTables
                 .. effort.Allocations.Select(option => (string[])
                 [
                     Sentences.Word(option.Allocation),
-                    Figures.Three(option.RequiredEffort),
-                    Figures.Three(option.Effort),
+                    EffortWords.Number(option.RequiredEffort, effort),
+                    EffortWords.Number(option.Effort, effort),
                     Figures.Three(option.Precision.ExpectedDetections),
                     Figures.Three(100 * option.Precision.Cv),
                     .. hasCosts ? [Money(option.Cost)] : Array.Empty<string>(),
@@ -39,7 +39,7 @@ internal static class AllocationTables
             [
                 stratum.Name,
                 .. effort.Allocations.Select(option => option.Strata[i]).Select(share =>
-                    Figures.Three(share.Effort) + (share.Transects is { } lines && !effort.IsPoints ? $" ({Figures.Count(lines)})" : "")),
+                    EffortWords.Number(share.Effort, effort) + (share.Transects is { } lines && !effort.IsPoints ? $" ({Figures.Count(lines)})" : "")),
             ]),
         ]);
 

@@ -27,7 +27,7 @@ internal static class ComponentTables
             [
                 .. sources.Select(source => (string[])[Name(source), .. shown.SelectMany(one => Cells(one.Parts, source))]),
                 ["together", .. shown.SelectMany(one => (string[])[Figures.Three(100 * one.Parts.Cv), "100", Freedom(one.Parts.DegreesOfFreedom)])],
-                ["95 % interval, times and divided by", .. shown.SelectMany(one => (string[])[Figures.Three(one.Parts.IntervalFactor), "", ""])],
+                ["95\u00a0% interval, times and divided by", .. shown.SelectMany(one => (string[])[Figures.Three(one.Parts.IntervalFactor), "", ""])],
             ]);
     }
 

@@ -6,14 +6,17 @@ namespace SurveyPlanner.Pages.Report;
 /// <summary>The sentences of the section on coverage.</summary>
 internal static class CoverageWords
 {
-    /// <summary>More strata than this are a list of their own: those that are even are only counted.</summary>
+    /// <summary>More strata than this are told together, a finding at a time.</summary>
     private const int MostStrata = 4;
+
+    /// <summary>More names than this are left to the table.</summary>
+    private const int MostNames = 6;
 
     /// <summary>Coverage within a tenth of nominal counts as even, as in the core's advice.</summary>
     private const double Tenth = 0.1;
 
-    /// <summary>What coverage means for the survey, a sentence or two each, with the stratum's name where there are several.</summary>
-    public static IReadOnlyList<(string? Stratum, string Sentence)> Advice(IReadOnlyCollection<StratumCoverage> coverages)
+    /// <summary>What coverage means for the survey: a sentence or two a stratum, with its name where there are several; of many strata, a finding at a time.</summary>
+    public static IReadOnlyList<(string? Heading, string Sentence)> Advice(IReadOnlyCollection<StratumCoverage> coverages)
     {
         var judged = coverages.Where(coverage => coverage.Advice is not null).ToArray();
         if (judged.Length <= MostStrata)
@@ -21,13 +24,28 @@ internal static class CoverageWords
             return [.. judged.Select(coverage => (coverages.Count == 1 ? null : coverage.Stratum, coverage.Advice!.Sentence))];
         }
 
-        var good = judged.Where(coverage => coverage.Advice is { Finding: CoverageFinding.Even, NeverCoveredKm2: 0 }).ToArray();
+        var never = judged.Where(coverage => coverage.Advice!.NeverCoveredKm2 > 0).ToArray();
         return
         [
-            (null, $"Coverage is even, and no place is without it, in {Figures.Count(good.Length)} of {Figures.Counted(judged.Length, "stratum", "strata")}."),
-            .. judged.Except(good).Select(coverage => ((string?)coverage.Stratum, coverage.Advice!.Sentence)),
+            .. judged.GroupBy(coverage => coverage.Advice!.Finding).OrderBy(group => group.Key).Select(group => Of(group.Key, [.. group], judged.Length)),
+            .. never.Length == 0
+                ? Array.Empty<(string?, string)>()
+                : [("Without coverage", $"{Figures.Three(never.Sum(coverage => coverage.Advice!.NeverCoveredKm2))} km² in {Names(never)}: no estimate speaks for those places.")],
         ];
     }
+
+    // What to do is the same within a finding; the most uneven stratum says it with its figures.
+    private static (string? Heading, string Sentence) Of(CoverageFinding finding, IReadOnlyList<StratumCoverage> strata, int all)
+    {
+        var heading = $"{Capital(Name(finding))}, {strata.Count} of {Figures.Counted(all, "stratum", "strata")}";
+        var worst = strata.MaxBy(coverage => coverage.Advice!.UnevenShare)!;
+        return (heading, finding == CoverageFinding.Even ? Names(strata) + "."
+            : strata.Count == 1 ? $"{worst.Stratum}. {worst.Advice!.Sentence}"
+            : $"{Names(strata)}. The most uneven is {worst.Stratum}. {worst.Advice!.Sentence}");
+    }
+
+    private static string Names(IReadOnlyList<StratumCoverage> strata) => string.Join(", ", strata.Take(MostNames).Select(coverage => coverage.Stratum))
+        + (strata.Count > MostNames ? $" and {strata.Count - MostNames} more" : "");
 
     /// <summary>What the finding is called in a table.</summary>
     public static string Name(CoverageFinding finding) => finding switch
@@ -71,9 +89,9 @@ internal static class CoverageWords
         var near = profile[0].ToMetres is { } to
             ? $"within {Figures.Distance(to)} of the boundary coverage averages {Figures.Three(Nearest(coverage))} of nominal"
             : $"coverage averages {Figures.Three(Nearest(coverage))} of nominal";
-        return even < profile.Length
-            ? $"{near}, and from {Figures.Distance(profile[even].FromMetres)} inwards it is within a tenth of nominal"
-            : $"{near}, and farther in than {Figures.Distance(profile[^1].FromMetres)} it still averages {Figures.Three(profile[^1].MeanCoverage / coverage.Nominal)}";
+        return profile.Length == 1 ? near
+            : even < profile.Length ? $"{near}, and from {Figures.Distance(profile[even].FromMetres)} inwards it is within a tenth of nominal"
+            : $"{near}, and farther in than {Figures.Distance(profile[^1].FromMetres)} it still averages {Figures.Three(profile[^1].MeanCoverage / coverage.Nominal)} of nominal";
     }
 
     private static string Capital(string sentence) => char.ToUpperInvariant(sentence[0]) + sentence[1..];

@@ -19,7 +19,7 @@ internal static class DetectionWords
 
         var cv = chosen.EffectiveCv is { } known ? $", with a coefficient of variation of {Figures.Percent(known)}{(fits.IsPoints ? " of its square" : "")}" : ", its variance unknown";
         var among = fits.Fits.Length > 1 ? $" has the smallest AIC of {fits.Fits.Length} models and" : "";
-        return $"{Name(chosen.Model)}{among} gives an effective {(fits.IsPoints ? "radius" : "half-width")} of {Figures.Distance(chosen.EffectiveMetres ?? 0)}"
+        return $"The {Name(chosen.Model)} model{among} gives an effective {(fits.IsPoints ? "radius" : "half-width")} of {Figures.Distance(chosen.EffectiveMetres ?? 0)}"
             + $"{cv}, from {Figures.Counted(chosen.Detections, "distance", "distances")} up to {Figures.Distance(fits.TruncationMetres)}.";
     }
 

@@ -7,7 +7,7 @@ namespace SurveyPlanner.Pages.Report;
 /// <summary>Precision against effort, and effort against the target; both with the pilot's band and the layout as drawn.</summary>
 internal static class EffortChart
 {
-    private const int Samples = 120;
+    private const int Samples = 160;
 
     // The curve climbs without end towards no effort at all: shown up to so many times the precision that matters.
     private const double HighestTimes = 2.5;
@@ -27,7 +27,7 @@ internal static class EffortChart
 
         var x = Axis.Covering(EffortWords.Unit(effort, capital: true), 0, reach);
         var highest = 100 * HighestTimes * Math.Max(required?.TargetCv ?? 0, delivered?.Cv ?? 0);
-        var efforts = Enumerable.Range(1, Samples).Select(i => x.Max * i / Samples).Where(at => CvPercent(effort, at) <= 2 * highest).ToArray();
+        var efforts = Steps(x).Where(at => CvPercent(effort, at) <= 2 * highest).ToArray();
         return new Chart(
             "Coefficient of variation against effort",
             EffortWords.Finding(plan, effort) + " The table has the figures.",
@@ -38,10 +38,8 @@ internal static class EffortChart
             [
                 new Line("expected", [.. efforts.Select(at => (at, CvPercent(effort, at)))])
                 {
-                    // Twice the effort needed is as half the effort spent: the band is the curve moved along the axis.
-                    Band = effort.Uncertainty is { Factors: var factors }
-                        ? [.. efforts.Select(at => (at, CvPercent(effort, at / factors.Lower), CvPercent(effort, at / factors.Upper)))]
-                        : [],
+                    Band = [.. efforts.Select(at => (At: at, Band: EffortBand.At(effort, at))).Where(one => one.Band is not null)
+                        .Select(one => (one.At, 100 * one.Band!.Value.Lower, 100 * one.Band.Value.Upper))],
                 },
             ],
             Levels = required is null ? [] : [new Level(100 * required.TargetCv, Target(required))],
@@ -61,8 +59,7 @@ internal static class EffortChart
         var (delivered, required) = (plan.Delivered, effort.Required);
         var reach = 100 * HighestTimes * Math.Max(required?.TargetCv ?? 0, delivered?.Cv ?? 0);
         var x = Axis.Covering("Coefficient of variation asked for, %", 0, Math.Min(reach, 100));
-        var points = Enumerable.Range(1, Samples)
-            .Select(i => x.Max * i / Samples)
+        var points = Steps(x)
             .Select(percent => (Percent: percent, Effort: effort.Model.EffortFor(percent / 100)))
             .Where(point => point.Effort <= 2 * most)
             .Select(point => (point.Percent, Effort: point.Effort!.Value))
@@ -86,6 +83,9 @@ internal static class EffortChart
             Dots = delivered is null ? [] : [new Dot(100 * delivered.Cv, delivered.Effort, "layout as drawn")],
         };
     }
+
+    // Closer together towards 0, where the curves are steep.
+    private static IEnumerable<double> Steps(Axis axis) => Enumerable.Range(1, Samples).Select(i => axis.Max * i * i / (Samples * Samples));
 
     private static double Greatest(SurveyPlan plan, EffortPlan effort)
         => Math.Max(plan.Delivered?.Effort ?? 0, effort.Required?.Planned ?? 0);

@@ -13,15 +13,20 @@ internal static class EffortTables
         var rows = new List<string[]>();
         if (required is { AssuredEffort: { } assured, Assurance: { } assurance })
         {
-            rows.Add(Expected($"Enough with an assurance of {Figures.ChosenPercent(assurance)}", effort.CvAt(assured)));
+            rows.Add(Expected(effort, $"Enough with an assurance of {Figures.ChosenPercent(assurance)}", effort.CvAt(assured)));
         }
 
-        rows.Add(Expected("Plain estimate", required.Precision));
-        AddInterval("95 % interval of the effort that the truth asks for", required.Interval);
+        rows.Add(Expected(effort, "Plain estimate", required.Precision));
+        AddInterval("95\u00a0% interval of the effort that the truth asks for", required.Interval);
         AddInterval("The same by the delta method, for comparison", required.DeltaInterval);
+        if (InWholeTransects(plan, effort) is { } whole)
+        {
+            rows.Add(Expected(effort, $"Planned, in whole transects, at least {plan.Design.Effort.MinLines} a stratum", whole));
+        }
+
         if (plan.Delivered is { } delivered)
         {
-            rows.Add(Expected("Layout as drawn", delivered));
+            rows.Add(Expected(effort, "Layout as drawn", delivered));
         }
 
         return new Table(
@@ -33,18 +38,24 @@ internal static class EffortTables
         {
             if (interval is not null)
             {
-                rows.Add([name, $"{Figures.Three(interval.Lower)} to {Figures.Three(interval.Upper)}", "", ""]);
+                rows.Add([name, EffortWords.Range(interval, effort), "", ""]);
             }
         }
     }
 
-    private static string[] Expected(string name, EffortPrecision? precision) =>
-        [name, Figures.Three(precision?.Effort), Figures.Three(100 * precision?.Cv), Figures.Three(precision?.ExpectedDetections)];
+    private static EffortPrecision? InWholeTransects(SurveyPlan plan, EffortPlan effort) => effort.Strata switch
+    {
+        [{ Transects: not null, Effort: { } whole }] => effort.CvAt(whole),
+        _ => effort.Allocations.FirstOrDefault(option => option.Allocation == plan.Design.Effort.Allocation && option.Strata.All(share => share.Transects is not null))?.Precision,
+    };
+
+    private static string[] Expected(EffortPlan effort, string name, EffortPrecision? precision) =>
+        [name, EffortWords.Number(precision?.Effort, effort), Figures.Three(100 * precision?.Cv), Figures.Three(precision?.ExpectedDetections)];
 
     /// <summary>The curve at the ticks of its axis, at the effort required and at the effort drawn.</summary>
     public static Table OfCurve(SurveyPlan plan, EffortPlan effort, Axis axis) => new(
         "Precision by effort",
-        [new(EffortWords.Unit(effort, capital: true), false), new("Expected CV, %"), new("95 % band of the pilot, %"), new("Expected detections"), new("Remark", false)],
+        [new(EffortWords.Unit(effort, capital: true), false), new("Expected CV, %"), new("95\u00a0% band of the pilot, %"), new("Expected detections"), new("Remark", false)],
         [
             .. axis.Ticks.Select(tick => (Effort: tick, Remark: ""))
                 .Append((Effort: effort.Required?.Effort ?? 0, Remark: "plain estimate for the target"))
@@ -55,25 +66,23 @@ internal static class EffortTables
                 .Where(row => row.Precision is not null)
                 .Select(row => (string[])
                 [
-                    Figures.Three(row.Precision!.Effort), Figures.Three(100 * row.Precision.Cv), Band(effort, row.Precision.Effort),
+                    EffortWords.Number(row.Precision!.Effort, effort), Figures.Three(100 * row.Precision.Cv), Band(effort, row.Precision.Effort),
                     Figures.Three(row.Precision.ExpectedDetections), row.Remark,
                 ]),
         ]);
 
-    // Twice the effort needed is as half the effort spent.
-    private static string Band(EffortPlan effort, double at) => effort.Uncertainty is { Factors: var factors }
-        ? $"{Figures.Three(100 * effort.CvAt(at / factors.Lower)?.Cv)} to {Figures.Three(100 * effort.CvAt(at / factors.Upper)?.Cv)}"
-        : Figures.None;
+    private static string Band(EffortPlan effort, double at)
+        => EffortBand.At(effort, at) is var (lower, upper) ? $"{Figures.Three(100 * lower)} to {Figures.Three(100 * upper)}" : Figures.None;
 
     public static Table OfTargets(EffortPlan effort) => new(
         "Effort by target",
-        [new("CV asked for, %", false), new(EffortWords.Unit(effort, capital: true)), new("95 % interval of the pilot")],
+        [new("CV asked for, %", false), new(EffortWords.Unit(effort, capital: true)), new("95\u00a0% interval of the pilot")],
         [
             .. effort.Curves.EffortAgainstTarget.Select(point => (string[])
             [
                 Figures.Three(100 * point.TargetCv),
-                Figures.Three(point.Effort),
-                point.Interval is { } interval ? $"{Figures.Three(interval.Lower)} to {Figures.Three(interval.Upper)}" : Figures.None,
+                EffortWords.Number(point.Effort, effort),
+                point.Interval is { } interval ? EffortWords.Range(interval, effort) : Figures.None,
             ]),
         ]);
 
@@ -89,11 +98,11 @@ internal static class EffortTables
                 stratum.Name,
                 Figures.Three(stratum.EncounterRate),
                 Figures.Three(100 * stratum.Share),
-                Figures.Three(stratum.Effort),
+                EffortWords.Number(stratum.Effort, effort),
                 .. Lines(effort, [stratum.Transects is { } lines ? Figures.Count(lines) : Figures.None]),
                 Figures.Three(stratum.ExpectedDetections),
                 Figures.Three(100 * stratum.Cv),
-                Figures.Three(stratum.EffortForOwnTarget),
+                EffortWords.Number(stratum.EffortForOwnTarget, effort),
             ]),
         ]);
 

@@ -29,7 +29,7 @@ internal static class EffortWords
             return $"About {plain} reach {target}; there is no pilot to say how sure that is.";
         }
 
-        var open = $"the pilot itself leaves anything from {Range(interval, effort)} open (95 % interval)";
+        var open = $"the pilot itself leaves anything from {Range(interval, effort)} {Unit(effort)} open (95\u00a0% interval)";
         return required is { AssuredEffort: { } assured, Assurance: { } assurance }
             ? $"{Amount(assured, effort)} reach {target} with an assurance of {Figures.ChosenPercent(assurance)}; the plain estimate is {plain}, and {open}."
             : $"About {plain} reach {target} by the plain estimate; {open}.";
@@ -43,26 +43,22 @@ internal static class EffortWords
             return "No layout drawn here is surveyed the way the pilot was, so nothing can be said of what it delivers.";
         }
 
-        var gives = $"The layout as drawn has {Amount(delivered.Effort, effort)} and is expected to deliver {Figures.Percent(delivered.Cv)}, "
-            + $"from about {Figures.Three(delivered.ExpectedDetections)} detections";
-        return effort.Required is { } required ? $"{gives}: {Verdict(delivered.Effort, required)}." : gives + ".";
+        var open = EffortBand.At(effort, delivered.Effort) is var (lower, upper)
+            ? $" (the pilot leaves {Figures.Percent(lower)} to {Figures.Percent(upper)} open)"
+            : "";
+        var gives = $"The layout as drawn has {Amount(delivered.Effort, effort)} and is expected to deliver {Figures.Percent(delivered.Cv)}{open}, "
+            + $"from about {Figures.Three(delivered.ExpectedDetections)} detections.";
+        return effort.Required is { } required ? $"{gives} That is {Verdict(delivered.Effort, required)}." : gives;
     }
 
-    private static string Verdict(double drawn, RequiredEffort required)
+    private static string Verdict(double drawn, RequiredEffort required) => required switch
     {
-        if (drawn < required.Effort)
-        {
-            return "less than the plain estimate asks for";
-        }
-
-        return required switch
-        {
-            { AssuredEffort: { } assured } when drawn < assured => "more than the plain estimate, less than the assured effort",
-            { AssuredEffort: not null } => "at least the assured effort",
-            { Interval: { } interval } when drawn > interval.Upper => "more than all that the interval leaves open",
-            _ => "at least the plain estimate",
-        };
-    }
+        _ when drawn < required.Effort => "less than the plain estimate asks for",
+        { AssuredEffort: { } assured } when drawn < assured => "more than the plain estimate, but not enough for the assurance asked for",
+        { Interval: { } interval } when drawn > interval.Upper => "more than all that the interval leaves open",
+        { AssuredEffort: not null } => "enough for the assurance asked for",
+        _ => "at least the plain estimate",
+    };
 
     /// <summary>How such intervals did where the truth was known; null where that was not measured.</summary>
     public static string? OfReliability(EffortPlan effort)
@@ -74,10 +70,10 @@ internal static class EffortWords
 
         var pilots = $"{Figures.Count(MeasuredReliability.Pilots)} simulated pilots of {measured.Transects} transects with {Figures.Three(measured.DetectionsPerTransect)} detections on each "
             + $"and counts {Figures.Three(measured.Dispersion)} times as variable as chance, the nearest to this one that were tried";
-        var found = $"How far to trust that: of {pilots}, {Figures.Percent(measured.Coverage)} gave a 95 % interval that held the truth";
+        var found = $"How far to trust that: of {pilots}, {Figures.Percent(measured.Coverage)} gave a 95\u00a0% interval that held the truth";
         return effort.Required?.AssuredEffort is null
             ? found + "."
-            : $"{found}, and {Figures.Percent(measured.Assured)} an effort assured at 80 % that was enough.";
+            : $"{found}, and {Figures.Percent(measured.Assured)} an effort assured at 80\u00a0% that was enough.";
     }
 
     /// <summary>What the chart of precision against effort shows.</summary>
@@ -101,9 +97,9 @@ internal static class EffortWords
             return "Twice the precision costs four times the effort.";
         }
 
-        var finer = required.TargetCv / 2;
+        var (finer, now) = (required.TargetCv / 2, effort.Model.EffortFor(required.TargetCv));
         return effort.Model.EffortFor(finer) is { } more
-            ? $"Halving the CV from {Figures.ChosenPercent(required.TargetCv)} to {Figures.ChosenPercent(finer)} takes {Figures.Three(more / required.Effort)} times the effort, {Amount(more, effort)}."
+            ? $"Halving the CV from {Figures.ChosenPercent(required.TargetCv)} to {Figures.ChosenPercent(finer)} takes {Figures.Three(more / now)} times the effort, {Amount(more, effort)}."
             : $"No effort halves the CV to {Figures.ChosenPercent(finer)}: detection, taken as given, stays as it is.";
     }
 
@@ -122,12 +118,17 @@ internal static class EffortWords
 
     /// <summary>Kilometres of line or points, with the unit.</summary>
     public static string Amount(double amount, EffortPlan effort)
-        => effort.IsPoints ? Figures.Counted((long)Math.Ceiling(amount), "point", "points") : Figures.Three(amount) + "\u00a0km";
+        => effort.IsPoints ? Figures.Counted(Whole(amount), "point", "points") : Figures.Three(amount) + "\u00a0km";
 
-    private static string Range(EffortInterval interval, EffortPlan effort)
-        => effort.IsPoints
-            ? $"{Figures.Count((long)Math.Ceiling(interval.Lower))} to {Amount(interval.Upper, effort)}"
-            : $"{Figures.Three(interval.Lower)} to {Amount(interval.Upper, effort)}";
+    /// <summary>The same without the unit.</summary>
+    public static string Number(double? amount, EffortPlan effort)
+        => effort.IsPoints && amount is { } points ? Figures.Count(Whole(points)) : Figures.Three(amount);
+
+    /// <summary>Both ends, without the unit.</summary>
+    public static string Range(EffortInterval interval, EffortPlan effort) => $"{Number(interval.Lower, effort)} to {Number(interval.Upper, effort)}";
+
+    // There is no half a point; the small allowance keeps a whole number from being pushed up by rounding error.
+    private static long Whole(double points) => (long)Math.Min(Math.Ceiling(points - (1e-9 * points)), 1e15);
 
     private static string Rate(EffortPlan effort)
         => $"{Figures.Three(effort.EncounterRate)} detections a {(effort.IsPoints ? "visit" : "kilometre")}";

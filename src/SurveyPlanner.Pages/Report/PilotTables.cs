@@ -8,21 +8,21 @@ namespace SurveyPlanner.Pages.Report;
 internal static class PilotTables
 {
     public static Table OfRates(PilotFigures pilot) => new(
-        "The pilot",
+        "Encounter rates of the pilot",
         [
             new("Stratum", false), new("Transects"), new(pilot.IsPoints ? "Visits" : "Length, km"), new("Detections"),
             new(EffortTables.RateHeading(pilot.IsPoints)), new("CV of that, %"), new("Degrees of freedom"), new("Variance-to-mean ratio"),
         ],
         [
-            .. pilot.Strata.Select(stratum => Row(stratum.Stratum.Length == 0 ? "whole region" : stratum.Stratum, stratum.EncounterRate)),
-            .. pilot.Strata.Length > 1 ? [Row("together", pilot.Pooled)] : Array.Empty<string[]>(),
+            .. pilot.Strata.Select(stratum => Row(stratum.Stratum.Length == 0 ? "whole region" : stratum.Stratum, stratum.EncounterRate, pilot.IsPoints)),
+            .. pilot.Strata.Length > 1 ? [Row("together", pilot.Pooled, pilot.IsPoints)] : Array.Empty<string[]>(),
         ]);
 
-    private static string[] Row(string name, EncounterRate rate) =>
+    private static string[] Row(string name, EncounterRate rate, bool isPoints) =>
     [
         name,
         Figures.Count(rate.Transects),
-        Figures.Three(rate.Effort),
+        rate.Effort % 1 == 0 && isPoints ? Figures.Count((long)rate.Effort) : Figures.Three(rate.Effort),
         Figures.Count(rate.Count),
         Figures.Three(rate.Rate),
         Figures.Three(100 * rate.Cv),

@@ -59,7 +59,10 @@ internal static class Sentences
         }
 
         var target = plan.Effort?.Required is { } required ? $"; the target is {Figures.ChosenPercent(required.TargetCv)}" : "";
-        return $"It is expected to estimate density with a coefficient of variation of {Figures.Percent(delivered.Cv)}{target}.";
+        var open = EffortBand.At(plan.Effort!, delivered.Effort) is var (lower, upper)
+            ? $"; the pilot leaves {Figures.Percent(lower)} to {Figures.Percent(upper)} open"
+            : "";
+        return $"It is expected to estimate density with a coefficient of variation of {Figures.Percent(delivered.Cv)}{open}{target}.";
     }
 
     // A closed form knows that a place can never be covered; a simulation only that it never saw it.

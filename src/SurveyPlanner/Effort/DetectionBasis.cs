@@ -60,7 +60,7 @@ internal sealed record DetectionBasis(
         var why = fits is null ? "The pilot has no distances" : $"No detection function could be fitted with a variance{where}";
         advice.Add(new Advice(
             FormattableString.Invariant($"{why}, so what detection adds to b is taken from half-normal theory: {theory:0.00}."),
-            "Arithmetic of half-normal theory, see docs/methods/effort.md"));
+            "Arithmetic of half-normal theory"));
         return new DetectionSource(theory, null);
     }
 }

@@ -5,7 +5,13 @@ namespace SurveyPlanner.Effort;
 /// <summary>The sentences that go with an effort plan.</summary>
 internal static class EffortAdvice
 {
-    private const string Minima = "Buckland and others 2001, Introduction to Distance Sampling, section 7.2 (from memory)";
+    // From memory.
+    private const string Minima = "Buckland and others 2001, Introduction to Distance Sampling, section 7.2";
+    /// <summary>More strata with too few transects than this are told together.</summary>
+    private const int MostNamed = 4;
+
+    private const int FewestTransects = 10;
+
     private const string Replicates = "Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13";
 
     public static IEnumerable<Advice> For(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
@@ -37,10 +43,11 @@ internal static class EffortAdvice
         yield return new Advice(
             FormattableString.Invariant(
                 $"The pilot leaves the effort open: the truth may ask for anything from {Figure(interval.Lower)} to {Figure(interval.Upper)} {unit} (95 % interval){assured}."),
-            "Simulated draws, see docs/methods/effort.md");
+            "Simulated draws")
+        { RepeatsFigures = true };
         if (plan.Uncertainty?.Measured is { } measured)
         {
-            yield return new Advice(Reliability(measured), "Study of simulated pilots, see docs/methods/effort.md");
+            yield return new Advice(Reliability(measured), "Study of simulated pilots") { RepeatsFigures = true };
         }
     }
 
@@ -63,7 +70,7 @@ internal static class EffortAdvice
         {
             yield return new Advice(
                 "The rule of thumb for b was made for lines; at points the same precision needs more detections (with a half-normal detection function 0.5 to 1.5 more on b), so give b from a pilot of points if you can.",
-                "Arithmetic of half-normal theory, see docs/methods/effort.md");
+                "Arithmetic of half-normal theory");
         }
     }
 
@@ -99,7 +106,7 @@ internal static class EffortAdvice
             var part = plan.IsPoints ? "1 to 2.6" : "0.5 to 1.1";
             yield return new Advice(
                 $"No detection function is planned for: the figures hold only if everything out to the half-width is seen. If one will be fitted, expect about {part} more on b.",
-                "Arithmetic of half-normal theory, see docs/methods/effort.md");
+                "Arithmetic of half-normal theory");
         }
 
         if (plan.Model.RateIncludesDetection && design.Detection.GivenCv is not null)
@@ -125,16 +132,25 @@ internal static class EffortAdvice
                 Minima);
         }
 
-        foreach (var stratum in plan.Model.Strata.Where(stratum => stratum.TransectEffort is not null))
+        var few = plan.Model.Strata
+            .Where(stratum => stratum.TransectEffort is not null)
+            .Select(stratum => (stratum.Name, Transects: required.Effort * stratum.Share / stratum.TransectEffort!.Value))
+            .Where(stratum => stratum.Transects < FewestTransects)
+            .ToList();
+        var unit = plan.IsPoints ? "points" : "lines";
+        if (few.Count > MostNamed)
         {
-            var transects = required.Effort * stratum.Share / stratum.TransectEffort!.Value;
-            if (transects < 10)
-            {
-                yield return new Advice(
-                    FormattableString.Invariant(
-                        $"Stratum '{stratum.Name}' would get about {transects:0.#} {(plan.IsPoints ? "points" : "lines")}; at least 10 to 20 in each stratum are advised."),
-                    Replicates);
-            }
+            yield return new Advice(
+                FormattableString.Invariant(
+                    $"{few.Count} of {plan.Model.Strata.Length} strata would get fewer than {FewestTransects} {unit} each, '{few.MinBy(stratum => stratum.Transects).Name}' about {few.Min(stratum => stratum.Transects):0.#}; at least 10 to 20 in each stratum are advised."),
+                Replicates);
+            yield break;
+        }
+
+        foreach (var (name, transects) in few)
+        {
+            yield return new Advice(
+                FormattableString.Invariant($"Stratum '{name}' would get about {transects:0.#} {unit}; at least 10 to 20 in each stratum are advised."), Replicates);
         }
     }
 

@@ -129,4 +129,10 @@ public sealed record StratumEffort(
 /// <summary>A sentence the user should read.</summary>
 /// <param name="Message">The sentence.</param>
 /// <param name="Source">Where the advice comes from; null when it is plain arithmetic on the input.</param>
-public sealed record Advice(string Message, string? Source = null);
+public sealed record Advice(string Message, string? Source = null)
+{
+    /// <summary>
+    /// Whether it only puts into words the interval, the assured effort and the reliability measured: who shows those as figures need not repeat it.
+    /// </summary>
+    public bool RepeatsFigures { get; init; }
+}

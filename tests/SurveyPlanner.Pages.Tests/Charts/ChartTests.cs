@@ -37,7 +37,7 @@ public class ChartTests
     public void Values_lie_where_the_axes_put_them()
     {
         var drawing = new ChartDrawing(new Chart("t", "d", new Axis("x", 0, 10, 2), new Axis("y", 0, 100, 20)));
-        Assert.Equal((ChartDrawing.Left, ChartDrawing.Height - ChartDrawing.Bottom), (drawing.At(0, 0).X, drawing.At(0, 0).Y));
+        Assert.Equal((drawing.Left, ChartDrawing.Height - ChartDrawing.Bottom), (drawing.At(0, 0).X, drawing.At(0, 0).Y));
         Assert.Equal((ChartDrawing.Width - drawing.Right, ChartDrawing.Top), (drawing.At(10, 100).X, drawing.At(10, 100).Y));
         Assert.Equal([.. drawing.XTicks.Select(tick => tick.Text)], ["0", "2", "4", "6", "8", "10"]);
     }

@@ -18,8 +18,12 @@ public class ContrastTests
     [
         (Tokens.Coast, Tokens.Paper), (Tokens.Hatch, Tokens.Paper), (Tokens.Sketch, Tokens.Paper), (Tokens.Muted, Tokens.Ground),
         (Tokens.Action, Tokens.Ground), (Tokens.Signal, Tokens.StratumFills[0]),
+        (Tokens.Action, Tokens.StratumFills[0]), (Tokens.Coast, Tokens.Ground), (Tokens.Ink, Band), (Tokens.Action, Band), (Tokens.Muted, Band),
         .. Tokens.StratumFills.SelectMany(fill => new (string, string)[] { (Tokens.Ink, fill), (Tokens.Coast, fill), (Tokens.Signal, fill) }),
     ];
+
+    /// <summary>The action colour at 18 % opacity on the page: the band of a chart.</summary>
+    private static string Band => "#" + string.Concat(new[] { 1, 3, 5 }.Select(at => ((int)Math.Round((0.18 * Byte(Tokens.Action, at)) + (0.82 * Byte(Tokens.Ground, at)))).ToString("x2", CultureInfo.InvariantCulture)));
 
     [Theory]
     [MemberData(nameof(TextPairs))]
@@ -64,9 +68,11 @@ public class ContrastTests
 
     private static double Luminance(string colour) => (0.2126 * Channel(colour, 1)) + (0.7152 * Channel(colour, 3)) + (0.0722 * Channel(colour, 5));
 
+    private static int Byte(string colour, int at) => int.Parse(colour.AsSpan(at, 2), NumberStyles.HexNumber, CultureInfo.InvariantCulture);
+
     private static double Channel(string colour, int at)
     {
-        var share = int.Parse(colour.AsSpan(at, 2), NumberStyles.HexNumber, CultureInfo.InvariantCulture) / 255.0;
+        var share = Byte(colour, at) / 255.0;
         return share <= 0.04045 ? share / 12.92 : Math.Pow((share + 0.055) / 1.055, 2.4);
     }
 

@@ -11,7 +11,7 @@ public class FiguresTests
     internal static string Shown(double value)
     {
         var text = ((decimal)value).ToString("G3", System.Globalization.CultureInfo.InvariantCulture);
-        var digits = text.Count(char.IsDigit);
+        var digits = text.TrimStart('0', '.').Count(char.IsDigit);
         return digits >= 3 ? text : text + (text.Contains('.', StringComparison.Ordinal) ? "" : ".") + new string('0', 3 - digits);
     }
 

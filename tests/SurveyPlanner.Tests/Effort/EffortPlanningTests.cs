@@ -58,6 +58,15 @@ public class EffortPlanningTests
     }
 
     [Fact]
+    public void Many_strata_with_too_few_lines_are_told_in_one_sentence()
+    {
+        EffortStratum[] strata = [.. Enumerable.Range(1, 6).Select(i => Whole with { Name = $"s{i}", AreaKm2 = 100 * i, TransectLengthKm = 50 })];
+        var plan = EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), strata, Seed)!;
+        var advice = Assert.Single(plan.Advice, advice => advice.Message.Contains("at least 10 to 20", StringComparison.Ordinal));
+        Assert.StartsWith("6 of 6 strata would get fewer than 10 lines each, 's1' about ", advice.Message, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void Equal_counts_do_not_promise_a_variance_of_nothing()
     {
         var plan = EffortPlanning.For(Target, Pilot([4, 4, 4, 4]), [Whole], Seed)!;
