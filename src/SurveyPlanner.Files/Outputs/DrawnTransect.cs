@@ -13,7 +13,11 @@ internal sealed record DrawnTransect(PlannedTransect Planned, ImmutableArray<Imm
 
     public string Stratum => PlainText.WellFormed(Planned.StratumName);
 
-    public int Order => Planned.Transect.Order;
+    /// <summary>Order of visit; null for a spare point.</summary>
+    public int? Order => Planned.IsReserve ? null : Planned.Transect.Order;
+
+    /// <summary>Place of a spare point in its stratum's list; null for a transect to be visited.</summary>
+    public int? Reserve => Planned.IsReserve ? Planned.Transect.Order : null;
 
     public bool IsPoint => Planned.Transect.IsPoint;
 

@@ -10,6 +10,9 @@ internal enum MarkEnd
     Start,
     End,
     Point,
+
+    /// <summary>A spare point.</summary>
+    Reserve,
 }
 
 /// <summary>A waypoint: where counting starts or stops, or a point to be visited.</summary>
@@ -42,8 +45,12 @@ internal sealed record FieldMarks(ImmutableArray<FieldMark> Marks, ImmutableArra
         {
             if (planned.Transect.IsPoint)
             {
-                var description = $"{planned.Transect.Id} {PlainText.Clean(planned.StratumName)}, point";
-                marks.Add(new FieldMark(markNames.Take(planned.Transect.Id), planned, MarkEnd.Point, planned.Transect.Start, description));
+                var what = planned.IsReserve
+                    ? FormattableString.Invariant($"spare point {planned.Transect.Order}, to be used strictly in order")
+                    : "point";
+                var description = $"{planned.Transect.Id} {PlainText.Clean(planned.StratumName)}, {what}";
+                var end = planned.IsReserve ? MarkEnd.Reserve : MarkEnd.Point;
+                marks.Add(new FieldMark(markNames.Take(planned.Transect.Id), planned, end, planned.Transect.Start, description));
                 continue;
             }
 

@@ -13,7 +13,7 @@ public static class SurveyGeoPackage
 
     private static readonly (string, string)[] TransectColumns =
     [
-        ("id", "TEXT"), ("stratum", "TEXT"), ("order", "INTEGER"), ("length_m", "DOUBLE"), ("bearing_deg", "DOUBLE"), ("coverage", "DOUBLE"),
+        ("id", "TEXT"), ("stratum", "TEXT"), ("order", "INTEGER"), ("length_m", "DOUBLE"), ("bearing_deg", "DOUBLE"), ("coverage", "DOUBLE"), ("reserve", "INTEGER"),
     ];
 
     private static readonly (string, string)[] CoverageColumns =
@@ -63,7 +63,7 @@ public static class SurveyGeoPackage
     private static (Geometry, object?[]) Row(DrawnTransect transect) => (
         transect.IsPoint ? Nts.Factory.CreatePoint(Coordinates(transect.Parts[0])[0]) : Nts.Factory.CreateMultiLineString(
             [.. transect.Parts.Select(part => Nts.Factory.CreateLineString(Coordinates(part)))]),
-        [transect.Id, transect.Stratum, transect.Order, transect.LengthMetres, transect.BearingDegrees, transect.Coverage]);
+        [transect.Id, transect.Stratum, transect.Order, transect.LengthMetres, transect.BearingDegrees, transect.Coverage, transect.Reserve]);
 
     /// <summary>One type for the whole layer where it can be: GIS programs then know what to draw.</summary>
     private static string TransectType(IReadOnlyList<DrawnTransect> transects) =>

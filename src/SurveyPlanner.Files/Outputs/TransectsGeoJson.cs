@@ -52,7 +52,16 @@ public static class TransectsGeoJson
         {
             json.WriteString("id", transect.Id);
             json.WriteString("stratum", transect.Stratum);
-            json.WriteNumber("order", transect.Order);
+            if (transect.Order is { } order)
+            {
+                json.WriteNumber("order", order);
+            }
+
+            if (transect.Reserve is { } reserve)
+            {
+                json.WriteNumber("reserve", reserve);
+            }
+
             if (transect.LengthMetres is { } length)
             {
                 json.Figure("length_m", Figures.Metres(length));

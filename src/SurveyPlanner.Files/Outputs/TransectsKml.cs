@@ -53,7 +53,8 @@ public static class TransectsKml
         Element(xml, "styleUrl", "#transect");
         xml.WriteStartElement("ExtendedData", Namespace);
         Datum(xml, "stratum", transect.Stratum);
-        Datum(xml, "order", transect.Order.ToString(CultureInfo.InvariantCulture));
+        Datum(xml, "order", transect.Order?.ToString(CultureInfo.InvariantCulture));
+        Datum(xml, "reserve", transect.Reserve?.ToString(CultureInfo.InvariantCulture));
         Datum(xml, "length_m", transect.LengthMetres is { } length ? Figures.Metres(length) : null);
         Datum(xml, "bearing_deg", transect.BearingDegrees is { } bearing ? Figures.Bearing(bearing) : null);
         Datum(xml, "coverage", transect.Coverage is { } coverage ? Figures.Significant(coverage, 6) : null);

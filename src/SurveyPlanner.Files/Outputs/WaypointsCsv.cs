@@ -31,6 +31,7 @@ public static class WaypointsCsv
     {
         MarkEnd.Start => "start",
         MarkEnd.End => "end",
+        MarkEnd.Reserve => "reserve",
         _ => "point",
     };
 }
