@@ -24,6 +24,11 @@ internal static class CheckText
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
             $"area         {region.AreaKm2:#,0.######} km² in the plane, {region.GeodesicAreaKm2:#,0.######} km² on the ellipsoid"));
+        if (region.Strata.Any(stratum => !stratum.Closed.IsEmpty))
+        {
+            output.WriteLine($"closed       {Closed(region)}");
+        }
+
         output.WriteLine();
         WriteStrata(output, region);
     }
@@ -46,6 +51,17 @@ internal static class CheckText
         }
 
         table.Write(output);
+    }
+
+    /// <summary>What closed areas took from which stratum.</summary>
+    private static string Closed(Region region)
+    {
+        var parts = region.Strata
+            .Where(stratum => stratum.ClosedKm2 > 0)
+            .Select(stratum => $"{stratum.ClosedKm2.ToString("#,0.###", CultureInfo.InvariantCulture)} km² out of {new string([.. stratum.Name.Where(c => !char.IsControl(c))])}")
+            .DefaultIfEmpty("nothing");
+        var buffer = region.ExclusionBufferMetres > 0 ? FormattableString.Invariant($", {region.ExclusionBufferMetres:0.###} m kept from them included") : "";
+        return string.Join(", ", parts) + buffer;
     }
 
     private static string Extent(Region region)

@@ -31,9 +31,9 @@ internal static class EffortText
         var unit = Unit(effort);
         var text = string.Create(
             CultureInfo.InvariantCulture,
-            $"Precision: {TextTable.Figure(delivered.Effort)} {unit} as drawn deliver a CV of {100 * delivered.Cv:0.#} % and about {delivered.ExpectedDetections:0} detections");
+            $"Precision: {Amount(effort, delivered.Effort)} {unit} as drawn deliver a CV of {100 * delivered.Cv:0.#} % and about {delivered.ExpectedDetections:0} detections");
         return effort.Required is { } required
-            ? string.Create(CultureInfo.InvariantCulture, $"{text}; the target of {100 * required.TargetCv:0.#} % needs {TextTable.Figure(required.Effort)} {unit}.")
+            ? string.Create(CultureInfo.InvariantCulture, $"{text}; the target of {100 * required.TargetCv:0.#} % needs {Amount(effort, required.Effort)} {unit}.")
             : text + ".";
     }
 
@@ -110,7 +110,7 @@ internal static class EffortText
         {
             table.Add(
                 stratum.Name,
-                stratum.Effort is { } amount ? TextTable.Figure(amount) : "",
+                stratum.Effort is { } amount ? Amount(effort, amount) : "",
                 TextTable.Figure(100 * stratum.Share),
                 stratum.ExpectedDetections is { } detections ? TextTable.Figure(detections) : "",
                 stratum.Cv is { } own ? TextTable.Figure(100 * own) : "");
@@ -127,20 +127,28 @@ internal static class EffortText
             return;
         }
 
-        var table = new TextTable("allocation", Unit(effort), "cv %", "cost", "by stratum");
+        var hasCosts = effort.Allocations.Any(option => option.Cost is not null);
+        string[] header = ["allocation", Unit(effort), "cv %", "by stratum"];
+        var table = new TextTable(hasCosts ? [.. header, "cost"] : header);
         foreach (var option in effort.Allocations)
         {
-            table.Add(
+            string[] row =
+            [
                 option.Allocation.ToString().ToLowerInvariant(),
-                TextTable.Figure(option.Effort),
+                Amount(effort, option.Effort),
                 TextTable.Figure(100 * option.Precision.Cv),
-                option.Cost is { } cost ? cost.ToString("#,0", CultureInfo.InvariantCulture) : "",
-                string.Join(" + ", option.Strata.Select(stratum => TextTable.Figure(stratum.Effort))));
+                string.Join(" + ", option.Strata.Select(stratum => Amount(effort, stratum.Effort))),
+            ];
+            table.Add(hasCosts ? [.. row, option.Cost is { } cost ? cost.ToString("#,0", CultureInfo.InvariantCulture) : ""] : row);
         }
 
         output.WriteLine();
         table.Write(output);
     }
+
+    /// <summary>Points are whole.</summary>
+    private static string Amount(EffortPlan effort, double value)
+        => effort.IsPoints && value == Math.Round(value) ? value.ToString("#,0", CultureInfo.InvariantCulture) : TextTable.Figure(value);
 
     private static string Unit(EffortPlan effort) => effort.IsPoints ? "points" : "km";
 

@@ -15,9 +15,18 @@ namespace SurveyPlanner.Cli;
 /// <param name="Source">The same files as the record keeps them.</param>
 internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedFromSystem, SurveyInputs Inputs, PlanSource Source)
 {
+    private static readonly string[] BoundaryEndings = [".geojson", ".json", ".kml", ".kmz", ".gpkg", ".shp", ".zip", ".csv"];
+
     /// <summary>Reads a plan file and all that it names.</summary>
     public static LoadedPlan Read(string path, IReadOnlyList<string> sets)
-        => Complete(PlanFileReader.Read(path, sets), System.IO.File.ReadAllBytes(path));
+    {
+        if (BoundaryEndings.Contains(Path.GetExtension(path).ToLowerInvariant()) && System.IO.File.Exists(path))
+        {
+            throw new InputException(new Problem($"this is a boundary file, not a plan; make a plan for it with: survey-planner new {path}", path));
+        }
+
+        return Complete(PlanFileReader.Read(path, sets), System.IO.File.ReadAllBytes(path));
+    }
 
     /// <summary>The plan of a record, its inputs taken from a folder.</summary>
     public static LoadedPlan FromRecord(SurveyRecord record, string folder)

@@ -11,7 +11,7 @@ internal static class PlanText
     {
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
-            $"{Amount(plan)} in {plan.Region.AreaKm2:#,0.#} km² of {plan.Design.Name} ({draw}, seed {plan.Design.Seed})."));
+            $"{Amount(plan)} in {Amount(plan.Region.AreaKm2)} km² of {plan.Design.Name} ({draw}, seed {plan.Design.Seed})."));
         output.WriteLine();
         WriteStrata(output, plan);
         if (plan.Strata.All(stratum => stratum.Coverage is not null))
@@ -97,6 +97,9 @@ internal static class PlanText
         table.Write(output);
     }
 
+    /// <summary>One decimal for what is large, three figures for what is small.</summary>
+    private static string Amount(double value) => value >= 100 ? value.ToString("#,0.0", CultureInfo.InvariantCulture) : TextTable.Figure(value);
+
     private static string Amount(SurveyPlan plan)
     {
         var layouts = plan.Strata.Select(stratum => stratum.Layout).ToList();
@@ -106,7 +109,7 @@ internal static class PlanText
         var parts = new List<string>();
         if (lines > 0 || points == 0)
         {
-            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{lines} {(lines == 1 ? "transect" : "transects")}, {km:#,0.#} km"));
+            parts.Add(string.Create(CultureInfo.InvariantCulture, $"{lines} {(lines == 1 ? "transect" : "transects")}, {Amount(km)} km"));
         }
 
         if (points > 0)

@@ -40,7 +40,7 @@ public static class PlanSurvey
         var layouts = LayoutDrawer.Draw(generators, region.Projection, design.Seed);
         var coverage = ComputeCoverage(design, region, generators, layouts, options);
         var strata = region.Strata.Select((stratum, i) => new StratumPlan(stratum, layouts[i], coverage[i]));
-        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, inputs.Pilot, layouts));
+        return new SurveyPlan(design, region, [.. strata], effort, Notices(design, region, inputs.Pilot, layouts));
     }
 
     /// <summary>The plan without coverage: region, effort and the drawn layout.</summary>
@@ -50,7 +50,7 @@ public static class PlanSurvey
         var effort = PlanEffort(design, region, inputs.Pilot);
         var layouts = LayoutDrawer.Draw(Prepare(design, region, effort), region.Projection, design.Seed);
         var strata = region.Strata.Select((stratum, i) => new StratumPlan(stratum, layouts[i], Coverage: null));
-        return new SurveyPlan(design, region, [.. strata], effort, Notices(region, inputs.Pilot, layouts));
+        return new SurveyPlan(design, region, [.. strata], effort, Notices(design, region, inputs.Pilot, layouts));
     }
 
     /// <summary>The region alone, as the boundary and the plan describe it.</summary>
@@ -70,7 +70,7 @@ public static class PlanSurvey
         var strata = region.Strata.Select(stratum =>
         {
             var layout = design.LayoutOf(stratum.Name);
-            return new EffortStratum(stratum.Name, stratum.AreaKm2, layout.IsPoints, layout.HalfWidthMetres, layout.IsSystematic);
+            return new EffortStratum(stratum.Name, stratum.AreaKm2, layout.IsPoints, layout.HalfWidthMetres, layout.IsSystematic, LayoutKinds.MeanLineLength(stratum, layout) / 1000);
         });
         return EffortPlanning.For(design.Effort, pilot, [.. strata], design.Seed);
     }
@@ -137,6 +137,24 @@ public static class PlanSurvey
         }
     }
 
-    private static ImmutableArray<Notice> Notices(Region region, PilotTable? pilot, ImmutableArray<Layout> layouts)
-        => [.. region.Notices, .. pilot?.Notices ?? [], .. layouts.SelectMany(layout => layout.Notices)];
+    private static ImmutableArray<Notice> Notices(SurveyDesign design, Region region, PilotTable? pilot, ImmutableArray<Layout> layouts)
+        => [.. region.Notices, .. pilot?.Notices ?? [], .. SharedAmount(design, layouts), .. layouts.SelectMany(layout => layout.Notices)];
+
+    /// <summary>An amount under [layout] is meant for each stratum; with several of them the sum surprises.</summary>
+    private static IEnumerable<Notice> SharedAmount(SurveyDesign design, ImmutableArray<Layout> layouts)
+    {
+        var sharing = layouts.Count(layout => !design.StratumLayouts.ContainsKey(layout.Stratum));
+        var amount = design.Layout.Sizing switch
+        {
+            Sizing.TotalLength length => FormattableString.Invariant($"total_length = \"{length.Metres / 1000:0.###} km\""),
+            Sizing.Number number => FormattableString.Invariant($"{(design.Layout.IsPoints ? "points" : "lines")} = {number.Count}"),
+            _ => null,
+        };
+        if (amount is not null && sharing > 1)
+        {
+            yield return new Notice(
+                NoticeKind.Warning,
+                $"{amount} under [layout] holds in each of {sharing} strata, {sharing} times that in all; give each stratum its own under [stratum.\"name\"] if the sum was meant");
+        }
+    }
 }

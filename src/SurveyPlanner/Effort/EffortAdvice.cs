@@ -123,26 +123,27 @@ internal static class EffortAdvice
         }
 
         var (low, high) = plan.IsPoints ? (75, 100) : (60, 80);
-        var detections = required.Precision.ExpectedDetections;
+        var detections = plan.CvAt(required.Planned)?.ExpectedDetections ?? required.Precision.ExpectedDetections;
         if (detections < high)
         {
             yield return new Advice(
                 FormattableString.Invariant(
-                    $"The effort brings about {detections:0} detections; at least {low} to {high} are advised {(plan.IsPoints ? "at points" : "along lines")} to fit a detection function."),
+                    $"The effort planned brings about {detections:0} detections; at least {low} to {high} are advised {(plan.IsPoints ? "at points" : "along lines")} to fit a detection function."),
                 Minima);
         }
 
+        // What is planned already has the least number of transects; what is told is where the target alone would ask for fewer.
         var few = plan.Model.Strata
             .Where(stratum => stratum.TransectEffort is not null)
-            .Select(stratum => (stratum.Name, Transects: required.Effort * stratum.Share / stratum.TransectEffort!.Value))
-            .Where(stratum => stratum.Transects < FewestTransects)
+            .Select(stratum => (stratum.Name, Transects: required.Planned * stratum.Share / stratum.TransectEffort!.Value))
+            .Where(stratum => stratum.Transects < FewestTransects - 0.5)
             .ToList();
         var unit = plan.IsPoints ? "points" : "lines";
         if (few.Count > MostNamed)
         {
             yield return new Advice(
                 FormattableString.Invariant(
-                    $"{few.Count} of {plan.Model.Strata.Length} strata would get fewer than {FewestTransects} {unit} each, '{few.MinBy(stratum => stratum.Transects).Name}' about {few.Min(stratum => stratum.Transects):0.#}; at least 10 to 20 in each stratum are advised."),
+                    $"In {few.Count} of {plan.Model.Strata.Length} strata the target alone would ask for fewer than {FewestTransects} {unit} each, in '{few.MinBy(stratum => stratum.Transects).Name}' for about {few.Min(stratum => stratum.Transects):0.#}; at least 10 to 20 in each stratum are advised, and the table plans for the least number (min_lines)."),
                 Replicates);
             yield break;
         }
@@ -150,7 +151,9 @@ internal static class EffortAdvice
         foreach (var (name, transects) in few)
         {
             yield return new Advice(
-                FormattableString.Invariant($"Stratum '{name}' would get about {transects:0.#} {unit}; at least 10 to 20 in each stratum are advised."), Replicates);
+                FormattableString.Invariant(
+                    $"In stratum '{name}' the target alone would ask for about {transects:0.#} {unit}; at least 10 to 20 in each stratum are advised, and the table plans for the least number (min_lines)."),
+                Replicates);
         }
     }
 

@@ -8,6 +8,9 @@ namespace SurveyPlanner.Layouts;
 /// <summary>Draws the layout that will be surveyed: one random offset for each stratum, from the seed.</summary>
 internal static class LayoutDrawer
 {
+    // Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13: at least 10 to 20 in each stratum.
+    private const double FewestTransects = 10;
+
     /// <summary>Draws all strata; ids and order run through the whole survey.</summary>
     public static ImmutableArray<Layout> Draw(IReadOnlyList<LayoutGenerator> generators, EqualAreaProjection projection, ulong seed)
     {
@@ -60,13 +63,13 @@ internal static class LayoutDrawer
             generator.Design.IsPoints ? null : generator.ExpectedLength ?? spread.Mean,
             generator.ExpectedCount ?? meanCount,
             spread,
-            Notices(generator, transects.Length))
+            Notices(generator, transects.Length, generator.ExpectedCount ?? meanCount))
         {
             Reserve = [.. realisation.Reserve.Select(piece => builder.Build(ids.OfReserve(stratum, piece.Transect), piece.Transect + 1, [piece]))],
         };
     }
 
-    private static ImmutableArray<Notice> Notices(LayoutGenerator generator, int transects)
+    private static ImmutableArray<Notice> Notices(LayoutGenerator generator, int transects, double expectedCount)
     {
         var notices = ImmutableArray.CreateBuilder<Notice>();
         var name = generator.Stratum.Stratum.Name;
@@ -75,6 +78,14 @@ internal static class LayoutDrawer
             notices.Add(new Notice(
                 NoticeKind.Warning,
                 $"this draw places no transect in stratum '{name}', although the spacing fits; a stratum this small against its spacing needs a smaller one"));
+        }
+
+        if (expectedCount < FewestTransects - 0.5)
+        {
+            var what = generator.Design.IsPoints ? "points" : "lines";
+            notices.Add(new Notice(NoticeKind.Warning, string.Create(
+                CultureInfo.InvariantCulture,
+                $"stratum '{name}' gets about {expectedCount:0.#} {what} only; at least 10 to 20 are advised (Thomas, Williams and Sandilands 2007), and from a single one no variance can be estimated; choose a smaller spacing there")));
         }
 
         if (generator.Warning is { } warning)

@@ -5,6 +5,26 @@ namespace SurveyPlanner.Layouts;
 /// <summary>The one list of layout kinds.</summary>
 internal static class LayoutKinds
 {
+    /// <summary>
+    /// About how long one line of a design is, metres: what turns kilometres into lines. Area over the length covered across the lines, or the
+    /// fixed length of segments and circuits; null for points.
+    /// </summary>
+    public static double? MeanLineLength(Stratum stratum, LayoutDesign design)
+    {
+        if (design.IsPoints)
+        {
+            return null;
+        }
+
+        if (design.Kind is LayoutKind.Segments or LayoutKind.Loops)
+        {
+            return design.Kind == LayoutKind.Segments ? design.SegmentMetres : 4 * design.SideMetres;
+        }
+
+        var clip = new StratumFrame(stratum, design).Clip;
+        return clip.AreaSquareMetres / new CoveredRanges(clip).Length;
+    }
+
     /// <summary>The kind that a design asks for, made ready for a stratum.</summary>
     /// <exception cref="InputException">The design cannot work in this stratum.</exception>
     public static LayoutGenerator Prepare(Stratum stratum, LayoutDesign design)

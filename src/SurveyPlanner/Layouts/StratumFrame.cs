@@ -18,7 +18,7 @@ internal sealed class StratumFrame
         BearingDegrees = TrueBearing(stratum, design.Bearing);
         Frame = new TurnedFrame((90 - (BearingDegrees - stratum.ConvergenceDegrees)) * Math.PI / 180);
         Region = new FrameShape(stratum.Shape, Frame);
-        ClipShape = design.Edge == EdgeRule.Plus ? PlaneGeometry.Grow(stratum.Shape, HalfWidthMetres) : stratum.Shape;
+        ClipShape = design.Edge == EdgeRule.Plus ? WithMargin(stratum, HalfWidthMetres) : stratum.Shape;
         Clip = design.Edge == EdgeRule.Plus ? new FrameShape(ClipShape, Frame) : Region;
         _lines = new Lazy<FrameShape>(() => LinesFor(design.MinLengthMetres, transposed: false));
         _linesAcross = new Lazy<FrameShape>(() => LinesFor(design.MinLengthMetres, transposed: true));
@@ -69,6 +69,13 @@ internal sealed class StratumFrame
                 $"no line along {BearingDegrees:0.#}° runs {minLengthMetres / 1000:0.###} km or more in stratum '{Stratum.Name}'; choose a smaller min_length or another bearing"),
             Key: "layout.min_length"));
         return new FrameShape(shape, new TurnedFrame(0), transposed);
+    }
+
+    /// <summary>The stratum and a margin round it, but never into a closed area.</summary>
+    private static PlaneShape WithMargin(Stratum stratum, double halfWidthMetres)
+    {
+        var grown = PlaneGeometry.Grow(stratum.Shape, halfWidthMetres);
+        return stratum.Closed.IsEmpty ? grown : PlaneGeometry.Subtract(grown, stratum.Closed);
     }
 
     private static double TrueBearing(Stratum stratum, Bearing bearing)

@@ -21,6 +21,9 @@ public sealed record Region(
     string CoordinateSystem,
     ImmutableArray<Notice> Notices)
 {
+    /// <summary>Distance kept from the closed areas, metres.</summary>
+    public double ExclusionBufferMetres { get; init; }
+
     /// <summary>Bounding box in degrees.</summary>
     public GeographicExtent Extent => GeographicExtent.Of(Strata.Select(stratum => stratum.Shape), Projection);
 
@@ -56,6 +59,12 @@ public sealed record Stratum(
     double ShortAxisKm,
     ImmutableSortedDictionary<string, string> Attributes)
 {
+    /// <summary>Closed areas with their buffer, in the plane: nobody goes there, not even beyond the stratum's own boundary.</summary>
+    public PlaneShape Closed { get; init; } = PlaneShape.Empty;
+
+    /// <summary>Area that was cut out of it as closed, square kilometres.</summary>
+    public double ClosedKm2 { get; init; }
+
     /// <summary>Vertices of its outline in the boundary file, before edges were given more of them for the plane.</summary>
     public int OutlineVertices { get; init; }
 

@@ -49,7 +49,15 @@ public static class RegionBuilder
         RefuseOverlaps(boundary, groups, shapes);
         notices.AddRange(StratumGaps.Find(shapes, projection));
         var cut = ExclusionShape(exclusions, densifier, design.ExclusionBufferMetres);
-        var strata = groups.Select((group, i) => Describe(group, Cut(boundary, group, shapes[i], cut), projection)).ToImmutableArray();
+        notices.AddRange(ExclusionsThatMiss(exclusions, densifier, design.ExclusionBufferMetres, Union(shapes)));
+        var strata = groups
+            .Select((group, i) => (Shape: Cut(boundary, group, shapes[i], cut), Whole: shapes[i], Group: group))
+            .Select(stratum => Describe(stratum.Group, stratum.Shape, projection) with
+            {
+                Closed = cut,
+                ClosedKm2 = cut.IsEmpty ? 0 : (stratum.Whole.AreaSquareMetres - stratum.Shape.AreaSquareMetres) / 1e6,
+            })
+            .ToImmutableArray();
         var scaleError = 100 * PlanningProjection.MaxScaleError(projection, positions);
         if (scaleError > ScaleWarningPercent)
         {
@@ -66,8 +74,18 @@ public static class RegionBuilder
             scaleError,
             PlanningProjection.MaxConvergence(projection, positions),
             boundary.CoordinateSystem,
-            notices.ToImmutable());
+            notices.ToImmutable())
+        {
+            ExclusionBufferMetres = cut.IsEmpty ? 0 : design.ExclusionBufferMetres,
+        };
     }
+
+    /// <summary>A file of closed areas that closes nothing is most likely the wrong file.</summary>
+    private static IEnumerable<Notice> ExclusionsThatMiss(
+        ImmutableArray<Boundary> exclusions, EdgeDensifier densifier, double bufferMetres, PlaneShape region)
+        => from exclusion in exclusions
+           where PlaneGeometry.SharedArea(ExclusionShape([exclusion], densifier, bufferMetres), region) == 0
+           select new Notice(NoticeKind.Warning, $"the closed areas of {exclusion.Source} lie wholly outside the region and cut nothing out of it; check that it is the right file");
 
     /// <summary>
     /// As fine as a fair number of further vertices allows (three times as many as the outline has, and some thousands), and always fine enough
