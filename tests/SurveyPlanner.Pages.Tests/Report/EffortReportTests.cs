@@ -102,8 +102,12 @@ public partial class EffortReportTests
         Assert.Equal(["planned", "", ""], table.Rows.Select(row => row[^1]));
         Assert.Equal(Effort.Allocations.Select(option => Figures.Count((long)Math.Round(option.Cost!.Value))), table.Rows.Select(row => row[5]));
         var saved = 1 - (Effort.Allocations[2].Cost!.Value / Effort.Allocations[0].Cost!.Value);
-        Assert.EndsWith(
-            $"optimal allocation would reach the target with {Figures.Percent(saved)} less cost.", EffortWords.OfAllocations(Effort, Allocation.Proportional), StringComparison.Ordinal);
+
+        // Whole lines may eat up what the optimum saves; then the sentence must not promise it.
+        var expected = saved > 0.005
+            ? $"optimal allocation would reach the target with {Figures.Percent(saved)} less cost."
+            : "with the least cost.";
+        Assert.EndsWith(expected, EffortWords.OfAllocations(Effort, Allocation.Proportional), StringComparison.Ordinal);
         Assert.EndsWith("with the least cost.", EffortWords.OfAllocations(Effort, Allocation.Optimal), StringComparison.Ordinal);
     }
 

@@ -63,7 +63,7 @@ public class EffortPlanningTests
         EffortStratum[] strata = [.. Enumerable.Range(1, 6).Select(i => Whole with { Name = $"s{i}", AreaKm2 = 100 * i, TransectLengthKm = 50 })];
         var plan = EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), strata, Seed)!;
         var advice = Assert.Single(plan.Advice, advice => advice.Message.Contains("at least 10 to 20", StringComparison.Ordinal));
-        Assert.StartsWith("6 of 6 strata would get fewer than 10 lines each, 's1' about ", advice.Message, StringComparison.Ordinal);
+        Assert.StartsWith("In 6 of 6 strata the target alone would ask for fewer than 10 lines each, in 's1' for about ", advice.Message, StringComparison.Ordinal);
     }
 
     [Fact]
