@@ -64,13 +64,25 @@ internal sealed class CommonOptions
         }
     }
 
-    private static void WholeNumber(OptionResult result, long low, long high)
+    /// <summary>A number with a point for its decimals, within limits.</summary>
+    public static void Decimal(OptionResult result, double low, double high)
+    {
+        var token = result.Tokens.Count > 0 ? result.Tokens[0].Value : "";
+        const NumberStyles style = NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint;
+        if (!double.TryParse(token, style, CultureInfo.InvariantCulture, out var value) || !(value >= low && value <= high))
+        {
+            result.AddError(string.Create(
+                CultureInfo.InvariantCulture, $"{result.Option.Name} takes a number from {low} to {high}, with a point for the decimals, not '{token}'"));
+        }
+    }
+
+    public static void WholeNumber(OptionResult result, long low, long high)
     {
         var token = result.Tokens.Count > 0 ? result.Tokens[0].Value : "";
         var isNumber = long.TryParse(token, NumberStyles.None, CultureInfo.InvariantCulture, out var value) && value >= low && value <= high;
         if (!isNumber)
         {
-            var name = ((OptionResult)result).Option.Name;
+            var name = result.Option.Name;
             result.AddError(string.Create(CultureInfo.InvariantCulture, $"{name} takes a whole number from {low} to {high}, not '{token}'"));
         }
     }

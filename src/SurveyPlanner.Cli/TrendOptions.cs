@@ -53,16 +53,15 @@ internal sealed class TrendOptions
     private static Option<string?> Fraction(string name, string description, double low, double high, bool whole = false)
     {
         var option = new Option<string?>(name) { Description = description, HelpName = whole ? "N" : "X" };
-        option.Validators.Add(result =>
+        if (whole)
         {
-            var token = result.Tokens.Count > 0 ? result.Tokens[0].Value : "";
-            var style = whole ? NumberStyles.None : NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint;
-            if (!double.TryParse(token, style, CultureInfo.InvariantCulture, out var value) || !(value >= low && value <= high))
-            {
-                result.AddError(string.Create(
-                    CultureInfo.InvariantCulture, $"{name} takes a {(whole ? "whole number" : "number")} from {low} to {high}, with a point for the decimals, not '{token}'"));
-            }
-        });
+            option.Validators.Add(result => CommonOptions.WholeNumber(result, (long)low, (long)high));
+        }
+        else
+        {
+            option.Validators.Add(result => CommonOptions.Decimal(result, low, high));
+        }
+
         return option;
     }
 

@@ -91,4 +91,86 @@ public class OtherCommandsTests
         Assert.Contains(
             "sure of a CV", ProgramRun.Of("effort", plan, "--set", "precision.assurance=0.8").Out, StringComparison.Ordinal);
     }
+
+    [Fact]
+    public void Bearings_are_tried_without_drawing()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        var run = ProgramRun.Of("layout", plan, "--try-bearings", "--every", "45", "--chart", work.At("bearings.svg"), "--json");
+        Assert.Equal((0, ""), (run.ExitCode, run.Error));
+        using var json = JsonDocument.Parse(run.Out);
+        var strata = json.RootElement.GetProperty("strata").EnumerateArray().ToList();
+        Assert.Equal(2, strata.Count);
+        Assert.Equal([0, 45, 90, 135], strata[0].GetProperty("bearings").EnumerateArray().Select(trial => trial.GetProperty("bearing_deg").GetDouble()));
+
+        // Area over spacing, whatever the bearing: 683.39 km² every 2.5 km.
+        Assert.All(
+            strata[0].GetProperty("bearings").EnumerateArray(),
+            trial => Assert.Equal(683.39 / 2.5, trial.GetProperty("expected_length_km").GetDouble(), 0.5));
+        Assert.StartsWith("<svg", File.ReadAllText(work.At("bearings.svg")), StringComparison.Ordinal);
+        Assert.False(File.Exists(Path.ChangeExtension(plan, ".draws.jsonl")));
+    }
+
+    [Fact]
+    public void A_boundary_given_for_a_plan_is_answered_with_the_way_on()
+    {
+        var run = ProgramRun.Of("plan", ReferenceData.Path("regions", "island_iceland.geojson"), "--out", "never");
+        Assert.Equal(3, run.ExitCode);
+        Assert.Contains("survey-planner new", run.Error, StringComparison.Ordinal);
+    }
+
+    /// <summary>Lines that run on past the boundary may leave the stratum, but never for a closed area or its buffer.</summary>
+    [Fact]
+    public void Plus_lines_keep_out_of_closed_areas()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        var minus = LoadedPlan.Read(plan, ["layout.spacing=300 m"]);
+        var plus = LoadedPlan.Read(plan, ["layout.spacing=300 m", "layout.edge=plus"]);
+        var (inside, beyond) = (PlanSurvey.DrawOnly(minus.Design, minus.Inputs), PlanSurvey.DrawOnly(plus.Design, plus.Inputs));
+        Assert.True(beyond.Strata[0].Layout.TotalLengthMetres > inside.Strata[0].Layout.TotalLengthMetres);
+        var closed = beyond.Region.Strata[0].Closed;
+        Assert.All(
+            from stratum in beyond.Strata
+            from transect in stratum.Layout.Transects
+            from piece in transect.Pieces
+            from share in new[] { 0.001, 0.25, 0.5, 0.75, 0.999 }
+            select Between(piece.Plane[0], piece.Plane[^1], share),
+            place => Assert.False(Inside(closed, place.X, place.Y)));
+    }
+
+    [Fact]
+    public void Closed_areas_that_miss_the_region_are_told()
+    {
+        using var work = new Workspace();
+        work.CopySamples();
+        File.WriteAllText(work.At("far.geojson"), """{"type":"Polygon","coordinates":[[[10,50],[11,50],[11,51],[10,51],[10,50]]]}""");
+        var plan = work.At("sample-regions/sea-ducks-sound/plan.toml");
+        var run = ProgramRun.Of("check", plan, "--set", $"region.exclusions=\"{work.At("far.geojson")}\"");
+        Assert.Equal(0, run.ExitCode);
+        Assert.Contains("wholly outside the region", run.Error, StringComparison.Ordinal);
+    }
+
+    private static (double X, double Y) Between(SurveyPlanner.Regions.PlanePoint a, SurveyPlanner.Regions.PlanePoint b, double share)
+        => (a.X + (share * (b.X - a.X)), a.Y + (share * (b.Y - a.Y)));
+
+    /// <summary>Plain ray casting over all edges, written apart from the program's own.</summary>
+    private static bool Inside(SurveyPlanner.Regions.PlaneShape shape, double x, double y)
+    {
+        var inside = false;
+        for (var ring = 0; ring < shape.RingCount; ring++)
+        {
+            var (start, end) = (shape.RingStarts[ring], shape.RingStarts[ring + 1]);
+            for (int i = start, j = end - 1; i < end; j = i++)
+            {
+                inside ^= shape.Y[i] > y != shape.Y[j] > y
+                    && x < ((shape.X[j] - shape.X[i]) * (y - shape.Y[i]) / (shape.Y[j] - shape.Y[i])) + shape.X[i];
+            }
+        }
+
+        return inside;
+    }
 }

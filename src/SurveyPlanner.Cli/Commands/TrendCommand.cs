@@ -1,6 +1,8 @@
 using System.CommandLine;
 using System.Globalization;
+using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
+using SurveyPlanner.Pages;
 
 namespace SurveyPlanner.Cli.Commands;
 
@@ -13,6 +15,7 @@ internal static class TrendCommand
     {
         var options = new CommonOptions();
         var trend = new TrendOptions();
+        var page = new Option<string?>("--page") { Description = "Write the answer with its charts as a page", HelpName = "FILE.html" };
         var command = new Command(
             "trend",
             """
@@ -22,7 +25,7 @@ internal static class TrendCommand
               survey-planner trend survey.toml --change -0.05 --surveys 10
             """)
         {
-            options.Plan, trend.Change, trend.Surveys, trend.Cv, trend.CvModel, trend.Shape, trend.Alpha, trend.OneSided, trend.Interval, trend.Power,
+            options.Plan, page, trend.Change, trend.Surveys, trend.Cv, trend.CvModel, trend.Shape, trend.Alpha, trend.OneSided, trend.Interval, trend.Power,
             options.Set, options.Seed, options.Json, options.Quiet, options.Debug,
         };
         return command.Runs(options, terminal, (parsed, _) =>
@@ -33,6 +36,12 @@ internal static class TrendCommand
             var surveys = (int)(TrendOptions.Number(parsed, trend.Surveys) ?? 10);
             var asked = TrendOptions.Number(parsed, trend.Change);
             var result = TrendResult.Of(design, source, surveys, TrendOptions.Number(parsed, trend.Power) ?? 0.8, asked is { } one ? [one] : Changes);
+            if (parsed.GetValue(page) is { } file)
+            {
+                var sheet = TrendSheet.Of(loaded.Design.Name, design, source, surveys, result.WantedPower);
+                OneFile.Write(file, TrendRenderer.RenderHtml(sheet, DrawnPlan.Version));
+            }
+
             if (parsed.GetValue(options.Json))
             {
                 terminal.Out.WriteLine(JsonDocumentText.Of(result.WriteJson));
