@@ -69,7 +69,7 @@ public static class PlanSurvey
     {
         var strata = region.Strata.Select(stratum =>
         {
-            var layout = design.LayoutOf(stratum.Name);
+            var layout = LayoutFields.Fill(design.LayoutOf(stratum.Name), stratum);
             return new EffortStratum(stratum.Name, stratum.AreaKm2, layout.IsPoints, layout.HalfWidthMetres, layout.IsSystematic, LayoutKinds.MeanLineLength(stratum, layout) / 1000);
         });
         return EffortPlanning.For(design.Effort, pilot, [.. strata], design.Seed);
@@ -91,8 +91,40 @@ public static class PlanSurvey
         return CoverageAtPositions.Of(positions, region.Projection, generators, calculator, options.Progress);
     }
 
+    /// <summary>
+    /// For each stratum, in the region's order, what its layout would be like along other bearings; nothing is drawn that counts.
+    /// Bearings at which it cannot work carry the reason.
+    /// </summary>
+    /// <param name="design">The plan.</param>
+    /// <param name="inputs">What it is made from.</param>
+    /// <param name="everyDegrees">Step from one bearing to the next; from 0 to below 180.</param>
+    /// <param name="options">Only the stop is used, and the progress told.</param>
+    /// <exception cref="InputException">The input cannot work, whatever the bearing.</exception>
+    /// <exception cref="OperationCanceledException">Stopped from outside.</exception>
+    public static ImmutableArray<StratumBearings> TryBearings(
+        SurveyDesign design, SurveyInputs inputs, double everyDegrees, RunOptions options)
+    {
+        var region = ReadRegion(design, inputs);
+        var effort = PlanEffort(design, region, inputs.Pilot);
+        return
+        [
+            .. region.Strata.Select((stratum, i) => new StratumBearings(
+                stratum.Name,
+                BearingTrials.Of(
+                    stratum,
+                    LayoutFor(design, stratum, effort),
+                    everyDegrees,
+                    ProgressPart.Of(options.Progress, i, region.Strata.Length) is { } part ? part.Add : null,
+                    options.Stop))),
+        ];
+    }
+
     private static ImmutableArray<LayoutGenerator> Prepare(SurveyDesign design, Region region, EffortPlan? effort)
-        => [.. region.Strata.Select(stratum => LayoutKinds.Prepare(stratum, Sized(design.LayoutOf(stratum.Name), stratum.Name, effort)))];
+        => [.. region.Strata.Select(stratum => LayoutKinds.Prepare(stratum, LayoutFor(design, stratum, effort)))];
+
+    /// <summary>The layout asked for in a stratum, what comes from the boundary and from the target precision filled in.</summary>
+    private static LayoutDesign LayoutFor(SurveyDesign design, Stratum stratum, EffortPlan? effort)
+        => Sized(LayoutFields.Fill(design.LayoutOf(stratum.Name), stratum), stratum.Name, effort);
 
     /// <summary>Turns <c>size_from = "precision"</c> into the length or number that the target asks of this stratum.</summary>
     private static LayoutDesign Sized(LayoutDesign layout, string stratum, EffortPlan? effort)

@@ -12,15 +12,19 @@ internal static class EffortIntegral
     /// <summary>Draws along one offset; along two, this many in all. A prime, so that the lattice below never repeats itself.</summary>
     public const int Draws = 1009;
 
-    // Two offsets: a rank-1 lattice whose generator spreads them evenly over the square (golden section of 1009).
-    private const int LatticeGenerator = 390;
+    // Two offsets: a rank-1 lattice whose generator, the golden section of the number of draws, spreads them evenly over the square.
+    private const double GoldenSection = 0.38196601125;
+
+    /// <summary>Sees the pieces of one realisation, in order of visit.</summary>
+    public delegate void Look(ReadOnlySpan<Piece> pieces);
 
     public static EffortSpread Over(LayoutGenerator generator) => Over(generator, out _);
 
     /// <param name="generator">The layout.</param>
     /// <param name="meanCount">Mean number of transects that lie in the stratum.</param>
     /// <param name="draws">Offsets to try.</param>
-    public static EffortSpread Over(LayoutGenerator generator, out double meanCount, int draws = Draws)
+    /// <param name="look">Sees the pieces of each.</param>
+    public static EffortSpread Over(LayoutGenerator generator, out double meanCount, int draws = Draws, Look? look = null)
     {
         var buffer = new PieceBuffer();
         var offsets = new double[generator.OffsetRanges.Length];
@@ -34,6 +38,7 @@ internal static class EffortIntegral
             generator.Realise(offsets, ref random, buffer);
             var effort = generator.Design.IsPoints ? buffer.Count : buffer.TotalLength;
             count += buffer.Transects;
+            look?.Invoke(buffer.Pieces);
 
             // Deviations from the first value keep the digits of a small spread of a large effort.
             first = i == 0 ? effort : first;
@@ -50,9 +55,10 @@ internal static class EffortIntegral
 
     private static void SetOffsets(double[] offsets, int i, int draws)
     {
+        var lattice = (long)Math.Round(GoldenSection * draws);
         for (var axis = 0; axis < offsets.Length; axis++)
         {
-            offsets[axis] = ((axis == 0 ? i : (long)i * LatticeGenerator % draws) + 0.5) / draws;
+            offsets[axis] = ((axis == 0 ? i : i * lattice % draws) + 0.5) / draws;
         }
     }
 }

@@ -8,7 +8,7 @@ namespace SurveyPlanner.Layouts;
 /// </summary>
 /// <param name="Stratum">The stratum's name.</param>
 /// <param name="Design">The design it was drawn from.</param>
-/// <param name="BearingDegrees">True bearing of its lines at the stratum's centre, degrees in [0, 180) (for points: of the grid's rows).</param>
+/// <param name="BearingDegrees">True bearing of its lines at the stratum's centre, degrees in [0, 180) (for points, and segments with bearings of their own: of the grid's rows).</param>
 /// <param name="SpacingMetres">The spacing that the sizing came to, metres.</param>
 /// <param name="OffsetMetres">The random offset(s) drawn, metres: across the lines; grids have two, along their rows and across them;
 /// a zigzag has the share of its period, along its axis; kinds without a start for the whole have none.</param>

@@ -1,3 +1,6 @@
+using System.Collections.Immutable;
+using SurveyPlanner.Regions;
+
 namespace SurveyPlanner.Layouts;
 
 /// <summary>The kinds of layout a stratum can have. The plan file's word is the same in lower case with hyphens.</summary>
@@ -101,7 +104,20 @@ public abstract record Bearing
 
     /// <summary>Segments: each its own, at random. Their grid then lies along the long axis.</summary>
     public sealed record Random : Bearing;
+
+    /// <summary>
+    /// At right angles to lines drawn on the map, along a coast or a depth contour say: to their mean direction, weighted by length.
+    /// </summary>
+    public sealed record Across(ImmutableArray<ImmutableArray<LonLat>> Lines) : Bearing;
+
+    /// <summary>Degrees in an attribute of the boundary, each stratum its own.</summary>
+    public sealed record FromField(string Name) : Bearing;
 }
+
+/// <summary>An attribute of the boundary that holds lengths as plain numbers.</summary>
+/// <param name="Name">Its name.</param>
+/// <param name="MetresPerUnit">What a 1 in it means, metres.</param>
+public sealed record LengthField(string Name, double MetresPerUnit);
 
 /// <summary>What fixes the amount of effort.</summary>
 public abstract record Sizing
@@ -121,6 +137,9 @@ public abstract record Sizing
 
     /// <summary>Expected total length of line in the stratum, metres.</summary>
     public sealed record TotalLength(double Metres) : Sizing;
+
+    /// <summary>A spacing in an attribute of the boundary, each stratum its own.</summary>
+    public sealed record FromField(LengthField Field) : Sizing;
 
     /// <summary>Whatever the target precision asks for, from the pilot.</summary>
     public sealed record Precision : Sizing;
@@ -145,6 +164,9 @@ public sealed record LayoutDesign(
     GridShape Grid = GridShape.Square,
     ZigzagTurning Turning = ZigzagTurning.EqualSpaced)
 {
+    /// <summary>The attribute of the boundary that holds the half-width or radius, each stratum its own; null where the design gives it.</summary>
+    public LengthField? HalfWidthField { get; init; }
+
     /// <summary>Lines at random distances: how they are placed.</summary>
     public LinePlacement Placement { get; init; }
 

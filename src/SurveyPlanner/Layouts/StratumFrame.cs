@@ -85,6 +85,7 @@ internal sealed class StratumFrame
             Bearing.Degrees given => given.Value,
             Bearing.LongAxis or Bearing.Random => stratum.LongAxisBearing,
             Bearing.ShortAxis => stratum.LongAxisBearing + 90,
+            Bearing.Across across => LineDirection.Of(across.Lines, stratum.CentreLonLat) + 90,
             _ => throw new InvalidOperationException($"unknown bearing {bearing}"),
         };
         return ((degrees % 180) + 180) % 180;
