@@ -79,6 +79,36 @@ public class LayoutLawsTests
 
     [Theory]
     [MemberData(nameof(EveryKind.Names), MemberType = typeof(EveryKind))]
+    public void Equal_seeds_give_equal_layouts_and_others_do_not(string kind) => Check(kind, (generator, _, _) =>
+    {
+        var again = LayoutKinds.Prepare(generator.Stratum.Stratum, generator.Design);
+        Assert.Equal(LayoutDrawer.Realise(generator, 7, 0).Pieces, LayoutDrawer.Realise(again, 7, 0).Pieces);
+        Assert.NotEqual(LayoutDrawer.Realise(generator, 7, 0).Pieces, LayoutDrawer.Realise(generator, 8, 0).Pieces);
+        Assert.NotEqual(LayoutDrawer.Realise(generator, 7, 0).Pieces, LayoutDrawer.Realise(generator, 7, 1).Pieces);
+    });
+
+    /// <summary>Rows of lines and grids, and points within a row, lie whole spacings apart; neighbours exactly one. (Turns of a zigzag: ZigzagTests.)</summary>
+    [Theory]
+    [InlineData("parallel", 1500, 0)]
+    [InlineData("parallel plus", 1500, 0)]
+    [InlineData("segments kept", 2000, 2000)]
+    [InlineData("loops kept", 2000, 2000)]
+    [InlineData("point-grid square", 1500, 1500)]
+    [InlineData("points-on-lines", 2500, 600)]
+    [InlineData("point-grid triangular", 1299.0381056766579, 750)]
+    public void Neighbours_are_exactly_one_spacing_apart(string kind, double across, double along) => Check(kind, (generator, offset, _) =>
+    {
+        var pieces = EveryKind.Draw(generator, offset);
+        var starts = pieces.Where((piece, i) => i == 0 || piece.Transect > pieces[i - 1].Transect).ToList();
+        AssertSteps(starts.Select(piece => piece.FromY), across);
+        if (along > 0)
+        {
+            AssertSteps(starts.Select(piece => piece.FromX), along);
+        }
+    });
+
+    [Theory]
+    [MemberData(nameof(EveryKind.Names), MemberType = typeof(EveryKind))]
     public void Short_pieces_are_dropped_and_nothing_else(string kind)
     {
         // Segments with bearings of their own draw these on the way to and fro, which goes otherwise when some are left out; random lines are
@@ -103,6 +133,13 @@ public class LayoutLawsTests
                 Assert.Equal(pair.First.Length, pair.Second.Length, 1e-6);
             });
         });
+    }
+
+    private static void AssertSteps(IEnumerable<double> places, double step)
+    {
+        var all = places.ToList();
+        Assert.All(all, place => Assert.Equal(Math.Round((place - all[0]) / step), (place - all[0]) / step, 1e-9));
+        Assert.Contains(all, place => Math.Abs(Math.Abs(place - all[0]) - step) < 1e-6);
     }
 
     private static IEnumerable<(double LowX, double Length)> Stretches(Piece[] pieces)
