@@ -4,6 +4,8 @@ using SurveyPlanner.Files.Boundaries;
 using SurveyPlanner.Files.Plans;
 using SurveyPlanner.Files.Records;
 using SurveyPlanner.Files.Tables;
+using SurveyPlanner.Layouts;
+using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Cli;
 
@@ -42,8 +44,11 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
         var boundary = BoundarySet.Read(file.BoundaryPaths, file.Layers, file.Crs);
         var exclusions = file.ExclusionPaths.Select(path => BoundaryReader.Read(path, new BoundaryOptions())).ToImmutableArray();
         var pilot = file.PilotTransectsPath is { } transects ? PilotTableReader.Read(transects, file.PilotDetectionsPath) : null;
+        var lines = LinesToCross(file);
         var design = file.Design with
         {
+            Layout = WithLines(file.Design.Layout, lines),
+            StratumLayouts = file.Design.StratumLayouts.ToImmutableSortedDictionary(pair => pair.Key, pair => WithLines(pair.Value, lines)),
             Seed = file.SeedGiven ? file.Design.Seed : SeedOfSystem(),
             StratumField = file.Design.StratumField ?? boundary.StratumField,
         };
@@ -55,6 +60,20 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
             new PlanSource(file.Path, content, file.CanonicalText, InputFiles(file)));
     }
 
+    /// <summary>The files of lines that layouts run across, each read once.</summary>
+    private static ImmutableSortedDictionary<string, ImmutableArray<ImmutableArray<LonLat>>> LinesToCross(PlanFile file)
+        => file.Design.StratumLayouts.Values.Prepend(file.Design.Layout)
+            .Select(layout => layout.Bearing)
+            .OfType<Bearing.AcrossFile>()
+            .Select(bearing => bearing.Path)
+            .Distinct()
+            .ToImmutableSortedDictionary(path => path, path => LineFile.Read(Resolved(file, path)), StringComparer.Ordinal);
+
+    private static string Resolved(PlanFile file, string path) => Path.Combine(Path.GetDirectoryName(file.Path) ?? "", path);
+
+    private static LayoutDesign WithLines(LayoutDesign design, ImmutableSortedDictionary<string, ImmutableArray<ImmutableArray<LonLat>>> lines)
+        => design.Bearing is Bearing.AcrossFile across ? design with { Bearing = new Bearing.Across(lines[across.Path]) } : design;
+
     /// <summary>Short enough to be read out over a radio, long enough that nobody meets the same one twice.</summary>
     private static ulong SeedOfSystem() => (ulong)RandomNumberGenerator.GetInt32(1_000_000, int.MaxValue);
 
@@ -62,6 +81,7 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
     {
         var named = file.BoundaryPaths.Select(path => (Key: "region.boundary", Path: (string?)path)).ToList();
         named.AddRange(file.ExclusionPaths.Select(path => ("region.exclusions", (string?)path)));
+        named.AddRange(LinesToCross(file).Keys.Select(path => ("layout.bearing", (string?)Resolved(file, path))));
         named.Add(("pilot.transects", file.PilotTransectsPath));
         named.Add(("pilot.detections", file.PilotDetectionsPath));
         var folder = Path.GetDirectoryName(Path.GetFullPath(file.Path))!;

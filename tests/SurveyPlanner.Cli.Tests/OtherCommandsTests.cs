@@ -114,6 +114,39 @@ public class OtherCommandsTests
     }
 
     [Fact]
+    public void Bearing_spacing_and_half_width_may_come_from_a_drawn_line_and_from_attributes()
+    {
+        using var work = new Workspace();
+        File.WriteAllText(work.At("zones.geojson"), """
+            {"type":"FeatureCollection","features":[
+            {"type":"Feature","properties":{"zone":"a","gap":2,"strip":150,"heading":40},"geometry":{"type":"Polygon","coordinates":[[[10,50],[10.5,50],[10.5,50.5],[10,50.5],[10,50]]]}},
+            {"type":"Feature","properties":{"zone":"b","gap":4,"strip":250,"heading":80},"geometry":{"type":"Polygon","coordinates":[[[11,50],[11.5,50],[11.5,50.5],[11,50.5],[11,50]]]}}]}
+            """);
+
+        // A coast that runs due east: lines across it run north.
+        File.WriteAllText(work.At("coast.geojson"), """{"type":"LineString","coordinates":[[10,49.9],[11.5,49.9]]}""");
+        var plan = work.Plan("zones.geojson", "kind = \"parallel\"\nspacing_field = \"gap in km\"\nhalf_width_field = \"strip in m\"\nbearing = \"along coast.geojson\"", "[coverage]\nreplicates = 20");
+        File.WriteAllText(plan, File.ReadAllText(plan).Replace("[layout]", "stratum_field = \"zone\"\n\n[layout]", StringComparison.Ordinal));
+        var run = ProgramRun.Of("plan", plan, "--out", work.At("out"), "--json");
+        Assert.Equal(0, run.ExitCode);
+        using var json = JsonDocument.Parse(run.Out);
+        var strata = json.RootElement.GetProperty("strata").EnumerateArray().ToList();
+        Assert.Equal([2000, 4000], strata.Select(stratum => stratum.GetProperty("spacing_m").GetDouble()));
+        Assert.Equal([150, 250], strata.Select(stratum => stratum.GetProperty("half_width_m").GetDouble()));
+        Assert.All(strata, stratum => Assert.Equal(0, Math.Sin(stratum.GetProperty("bearing_deg").GetDouble() * Math.PI / 180), 0.02));
+        Assert.Equal(0, ProgramRun.Of("replay", Path.Combine(work.At("out"), "record.json")).ExitCode);
+
+        var headed = ProgramRun.Of("layout", plan, "--json", "--set", "layout.bearing_field=heading");
+        using var turned = JsonDocument.Parse(headed.Out);
+        Assert.Equal([40, 80], turned.RootElement.GetProperty("strata").EnumerateArray().Select(stratum => stratum.GetProperty("bearing_deg").GetDouble()));
+
+        File.WriteAllText(work.At("coast.geojson"), """{"type":"Point","coordinates":[10,49.9]}""");
+        var refused = ProgramRun.Of("check", plan);
+        Assert.Equal(3, refused.ExitCode);
+        Assert.Contains("holds no line", refused.Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_boundary_given_for_a_plan_is_answered_with_the_way_on()
     {
         var run = ProgramRun.Of("plan", ReferenceData.Path("regions", "island_iceland.geojson"), "--out", "never");

@@ -15,7 +15,7 @@ internal static class LayoutBuilder
         var kind = table.Value(PlanKeys.Kind);
         return PlanKeys.Of("layout")
             .Where(key => key.Group != KeyGroup.None || key.IsRequired)
-            .Where(key => kind is null ? key.Group == KeyGroup.Sizing || key.Kinds == KindFilter.Any : key.BelongsTo(kind.Value))
+            .Where(key => kind is null ? key.Group == KeyGroup.Sizing || (key.Group == KeyGroup.None && key.Kinds == KindFilter.Any) : key.BelongsTo(kind.Value))
             .GroupBy(key => key.Group == KeyGroup.None ? key.Name : key.Group.ToString())
             .Select(question => Missing(table, inherited, [.. question]))
             .OfType<Problem>();

@@ -74,7 +74,7 @@ internal static class PlanKeys
 
     public static readonly PlanKey<Bearing> Bearing = Layout(
         "bearing", new BearingReader(), "\"short-axis\"", KindFilter.Any, (design, bearing) => design with { Bearing = bearing }, @default: new Bearing.ShortAxis(),
-        doc: "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum; for segments also each at random. A zigzag swings about it.");
+        doc: "The direction that lines (or the rows of a grid) run: degrees clockwise from true north at the stratum's centre, or along an axis of the stratum; along FILE: at right angles to the lines drawn in a GeoJSON file, such as a coast or a depth contour; for segments also each at random. A zigzag swings about it.");
 
     public static readonly PlanKey<double> Spacing = Layout(
         "spacing", Length, "\"5 km\"", KindFilter.Any, (design, metres) => design with { Sizing = new Sizing.Spacing(metres) }, group: KeyGroup.Sizing,
@@ -96,6 +96,10 @@ internal static class PlanKeys
         "size_from", new ChoiceReader<SizeFrom>(), "\"precision\"", KindFilter.Any, (design, _) => design with { Sizing = new Sizing.Precision() }, group: KeyGroup.Sizing,
         doc: "Instead of a spacing: whatever the target precision asks for.");
 
+    public static readonly PlanKey<LengthField> SpacingField = Layout(
+        "spacing_field", new LengthFieldReader(), "\"gap in km\"", KindFilter.Any, (design, field) => design with { Sizing = new Sizing.FromField(field) }, group: KeyGroup.Sizing,
+        doc: "Instead of a spacing: the attribute of the boundary that holds it, zone by zone, and its unit.");
+
     public static readonly PlanKey<double> HalfWidth = Layout(
         "half_width", Length, "\"300 m\"", KindFilter.Lines, (design, metres) => design with { HalfWidthMetres = metres }, group: KeyGroup.Reach,
         doc: "Strip half-width: how far out from a line animals count. Required for lines.");
@@ -103,6 +107,14 @@ internal static class PlanKeys
     public static readonly PlanKey<double> Radius = Layout(
         "radius", Length, "\"150 m\"", KindFilter.Points, (design, metres) => design with { HalfWidthMetres = metres }, group: KeyGroup.Reach,
         doc: "How far out from a point animals count. Required for points.");
+
+    public static readonly PlanKey<LengthField> HalfWidthField = Layout(
+        "half_width_field", new LengthFieldReader(), "\"strip in m\"", KindFilter.Any, (design, field) => design with { HalfWidthField = field }, group: KeyGroup.Reach,
+        doc: "Instead of a half-width or radius: the attribute of the boundary that holds it, and its unit.");
+
+    public static readonly PlanKey<string> BearingField = Layout(
+        "bearing_field", Text, "\"heading\"", KindFilter.Any, (design, field) => design with { Bearing = new Bearing.FromField(field) },
+        doc: "The attribute of the boundary that holds the bearing in degrees; it counts more than bearing.");
 
     public static readonly PlanKey<EdgeRule> Edge = Layout(
         "edge", new ChoiceReader<EdgeRule>(), "\"minus\"", KindFilter.Any, (design, edge) => design with { Edge = edge }, @default: EdgeRule.Minus,

@@ -1,4 +1,5 @@
 using SurveyPlanner.Files.Units;
+using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Files.Plans;
 
@@ -37,20 +38,52 @@ internal sealed class LengthReader(bool zeroIsAllowed = false) : ValueReader<dou
     }
 }
 
+/// <summary>
+/// The name of an attribute that holds lengths, with their unit: <c>gap in km</c>. Where the name is a unit or ends in one (<c>km</c>, <c>gap_km</c>),
+/// that is the unit.
+/// </summary>
+internal sealed class LengthFieldReader : ValueReader<LengthField>
+{
+    private const string In = " in ";
+
+    public override string Takes => "an attribute and its unit in quotes";
+
+    public override bool IsText => true;
+
+    public override Parsed<LengthField> Read(SettingValue value, Sample sample)
+    {
+        if (value is not SettingValue.Text { Value: var text })
+        {
+            return WrongType(value, sample);
+        }
+
+        var cut = text.LastIndexOf(In, StringComparison.Ordinal);
+        var (name, unit) = cut > 0 ? (text[..cut].Trim(), text[(cut + In.Length)..].Trim()) : (text.Trim(), text.Trim().Split('_')[^1]);
+        return name.Length > 0 && UnitTable.Length.Find(unit) is { } found
+            ? Parsed.Ok(new LengthField(name, found.InBaseUnits))
+            : Parsed.Bad<LengthField>($"{Quoted.Short(text)} does not say in which unit the attribute is: write {sample}");
+    }
+
+    public override string Write(LengthField value) => Quoted.Text($"{value.Name}{In}{UnitTable.Length.Units.First(unit => unit.InBaseUnits == value.MetresPerUnit).Symbol}");
+}
+
 /// <summary>Degrees true, or an axis of the stratum.</summary>
 internal sealed class BearingReader : ValueReader<Layouts.Bearing>
 {
     private const string LongAxis = "long-axis";
     private const string ShortAxis = "short-axis";
     private const string Random = "random";
+    private const string Along = "along ";
 
-    public override string Takes => "degrees from 0 to below 360, \"long-axis\", \"short-axis\" or, for segments, \"random\"";
+    public override string Takes => "degrees from 0 to below 360, \"long-axis\", \"short-axis\", \"along FILE\" or, for segments, \"random\"";
 
     public override Parsed<Layouts.Bearing> Read(SettingValue value, Sample sample) => value switch
     {
         SettingValue.Text { Value: LongAxis } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.LongAxis()),
         SettingValue.Text { Value: ShortAxis } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.ShortAxis()),
         SettingValue.Text { Value: Random } => Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.Random()),
+        SettingValue.Text text when text.Value.StartsWith(Along, StringComparison.Ordinal) && text.Value.Trim().Length > Along.Length =>
+            Parsed.Ok<Layouts.Bearing>(new Layouts.Bearing.AcrossFile(text.Value[Along.Length..].Trim())),
         SettingValue.Whole whole => Degrees(whole.Value, sample),
         SettingValue.Number number when double.IsFinite(number.Value) => Degrees(number.Value, sample),
         SettingValue.Text text when DecimalText.Read(text.Value.TrimEnd('°')) is { IsGood: true } number =>
@@ -65,6 +98,7 @@ internal sealed class BearingReader : ValueReader<Layouts.Bearing>
         Layouts.Bearing.LongAxis => Quoted.Text(LongAxis),
         Layouts.Bearing.ShortAxis => Quoted.Text(ShortAxis),
         Layouts.Bearing.Random => Quoted.Text(Random),
+        Layouts.Bearing.AcrossFile across => Quoted.Text(Along + across.Path),
         Layouts.Bearing.Degrees degrees => DecimalText.Write(degrees.Value),
         _ => throw new ArgumentOutOfRangeException(nameof(value), value, "a bearing without a word"),
     };

@@ -24,9 +24,13 @@ public static class Spelling
             return best;
         }
 
-        // "width" for "half_width", "grid" for "point-grid": a whole word of it, and of no other.
-        var containing = ranked.Where(pair => plain.Length >= 2 && Plain(pair.Candidate).Split('_').Contains(plain)).ToArray();
-        return containing.Length == 1 ? containing[0].Candidate : null;
+        // "width" for "half_width", "grid" for "point-grid": a whole word of it, and of no other but its own longer forms (half_width_field).
+        var containing = ranked
+            .Where(pair => plain.Length >= 2 && Plain(pair.Candidate).Split('_').Contains(plain))
+            .Select(pair => pair.Candidate)
+            .OrderBy(candidate => candidate.Length)
+            .ToArray();
+        return containing.Length > 0 && containing.All(candidate => candidate.StartsWith(containing[0], StringComparison.Ordinal)) ? containing[0] : null;
     }
 
     /// <summary><c>: did you mean "x"?</c>, or nothing.</summary>

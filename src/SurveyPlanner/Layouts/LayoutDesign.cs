@@ -110,6 +110,9 @@ public abstract record Bearing
     /// </summary>
     public sealed record Across(ImmutableArray<ImmutableArray<LonLat>> Lines) : Bearing;
 
+    /// <summary>The same with the lines still in their file: whoever reads the plan's files puts <see cref="Across"/> in its place.</summary>
+    public sealed record AcrossFile(string Path) : Bearing;
+
     /// <summary>Degrees in an attribute of the boundary, each stratum its own.</summary>
     public sealed record FromField(string Name) : Bearing;
 }

@@ -27,7 +27,7 @@ public class PlanProblemTests
     [InlineData("lines = 20", "lines = 20\nbearing = 400", "a.toml:7:11: layout.bearing: a bearing runs from 0 to below 360 degrees, 400 does not: layout.bearing = 40 is the same direction")]
     [InlineData("lines = 20", "lines = 20\nbearing = -0.5", "a.toml:7:11: layout.bearing: a bearing runs from 0 to below 360 degrees, -0.5 does not: layout.bearing = 359.5 is the same direction")]
     [InlineData("lines = 20", "lines = 20\nbearing = \"45\"", "a.toml:7:11: layout.bearing: write layout.bearing = 45 without quotes: degrees are a plain number")]
-    [InlineData("lines = 20", "lines = 20\nbearing = \"long axis\"", "a.toml:7:11: layout.bearing: \"long axis\" is not degrees from 0 to below 360, \"long-axis\", \"short-axis\" or, for segments, \"random\": did you mean long-axis?")]
+    [InlineData("lines = 20", "lines = 20\nbearing = \"long axis\"", "a.toml:7:11: layout.bearing: \"long axis\" is not degrees from 0 to below 360, \"long-axis\", \"short-axis\", \"along FILE\" or, for segments, \"random\": did you mean long-axis?")]
     [InlineData("lines = 20", "lines = 20\nedge = true", "a.toml:7:8: layout.edge: true is not \"minus\" or \"plus\": write layout.edge = \"minus\"")]
     [InlineData("lines = 20", "lines = 20\nmin_length = 200", "a.toml:7:14: layout.min_length: write layout.min_length = \"200 m\": a length needs its unit")]
     [InlineData("kind = \"parallel\"", "kind = \"zigzag\"\ncrossed = \"true\"", "a.toml:6:11: layout.crossed: write layout.crossed = true without quotes")]
@@ -69,7 +69,7 @@ public class PlanProblemTests
     [InlineData("[stratum.a.b]\nkind = \"zigzag\"", "a.toml:9:1: stratum.a.b: a name with a dot stands in quotes: write [stratum.\"a.b\"]")]
     [InlineData("[stratum.\"\"]", "a.toml:9:1: stratum.\"\": a stratum needs a name: write [stratum.\"inner bay\"]")]
     [InlineData("[stratum.reef]\nturning = \"equal-angle\"", "a.toml:10:1: stratum.reef.turning: belongs to zigzag, and the kind here is parallel: take it out, or write it under the stratum it is for")]
-    [InlineData("[stratum.reef]\nkind = \"point-grid\"", "a.toml:10:1: stratum.reef.spacing: is missing: what [layout] says does not suit the kind of this stratum: write spacing = \"5 km\" (or one of points, size_from) under [stratum.reef]")]
+    [InlineData("[stratum.reef]\nkind = \"point-grid\"", "a.toml:10:1: stratum.reef.spacing: is missing: what [layout] says does not suit the kind of this stratum: write spacing = \"5 km\" (or one of points, size_from, spacing_field) under [stratum.reef]")]
     [InlineData("[stratum.reef]\ncost_per_km = \"3 EUR\"\n[stratum.bank]\ncost_per_km = \"3 NOK\"", "a.toml:10:1: stratum.reef.cost_per_km: is in EUR, and another stratum's cost is in NOK: write all costs in one currency")]
     [InlineData("[pilot]\ndetections = \"d.csv\"", "a.toml:10:1: pilot.detections: needs the table of transects they were made from: write transects = \"pilot-transects.csv\"")]
     [InlineData("[pilot]\nencounter_rate = \"2 /visit\"", "a.toml:10:1: pilot.encounter_rate: does not suit the layout, which is parallel: write encounter_rate = \"0.8 /km\"")]
@@ -95,7 +95,7 @@ public class PlanProblemTests
         => Assert.Equal(
             [
                 "a.toml:1:1: layout.kind: is missing: write kind = \"parallel\" under [layout]",
-                "a.toml:1:1: layout.spacing: is missing: write spacing = \"5 km\" (or one of lines, points, total_length, size_from) under [layout]",
+                "a.toml:1:1: layout.spacing: is missing: write spacing = \"5 km\" (or one of lines, points, total_length, size_from, spacing_field) under [layout]",
                 "a.toml:1:1: region.boundary: is missing: write boundary = \"sound.geojson\" under [region]",
             ],
             ProblemsOf(""));
@@ -103,7 +103,7 @@ public class PlanProblemTests
     [Fact]
     public void A_missing_half_width_is_named_once_whatever_the_strata_say()
         => Assert.Equal(
-            ["a.toml:5:1: layout.half_width: is missing: write half_width = \"300 m\" under [layout]"],
+            ["a.toml:5:1: layout.half_width: is missing: write half_width = \"300 m\" (or one of half_width_field) under [layout]"],
             ProblemsOf(SamplePlans.Least.Replace("half_width = \"100 m\"", "[stratum.reef]\nkind = \"zigzag\"", StringComparison.Ordinal)));
 
     [Fact]
