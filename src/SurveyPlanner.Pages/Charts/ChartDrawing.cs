@@ -106,10 +106,12 @@ internal sealed class ChartDrawing
         }
     }
 
+    // At the end of the line, as near as there is room, inside the plot.
     private void PlaceName(Line line)
     {
         var end = End(line);
-        Place(line.Label, [.. new[] { -8, 18, -25, 35, -42, 52 }.Select(rise => (Anchor.End, new Pixel(end.X, end.Y + rise)))]);
+        var heights = new[] { -8, 18, -25, 35, -42, 52 }.Select(rise => end.Y + rise).Where(y => y > Top + 8 && y < Base - 4);
+        Place(line.Label, [.. heights.Select(y => (Anchor.End, new Pixel(end.X, y)))]);
     }
 
     // In the order in which the lines end, pushed down where they would touch, then up again from the base.

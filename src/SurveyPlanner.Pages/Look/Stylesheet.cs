@@ -82,5 +82,5 @@ internal static class Stylesheet
         "@media print{html{font-size:10.5pt;-webkit-print-color-adjust:exact;print-color-adjust:exact}body{max-width:none;padding:0}"
             + "nav{display:none}h1{font-size:20pt}h2{font-size:14pt;margin-top:20pt;break-after:avoid}h3,caption{break-after:avoid}"
             + "thead{display:table-header-group}tr,figure,li,table{break-inside:avoid}table.long{break-inside:auto}table{font-size:8.5pt}th,td{padding:2pt 7pt 2pt 0}"
-            + ".scroll{overflow:visible}.scroll svg{min-width:0;max-height:160mm}.chart svg{max-width:130mm}a{color:inherit;text-decoration:none}}");
+            + ".scroll{overflow:visible}.scroll svg{min-width:0;max-height:160mm}.chart svg{max-width:130mm}a{color:inherit;text-decoration:none}details::details-content{content-visibility:visible;block-size:auto}summary{display:none}}");
 }

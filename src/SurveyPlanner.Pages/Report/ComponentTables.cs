@@ -23,7 +23,7 @@ internal static class ComponentTables
         var sources = shown.SelectMany(one => one.Parts.Components).Select(component => component.Source).Distinct().Order();
         return new Table(
             "Coefficient of variation of density by component, with its degrees of freedom",
-            [new("Component", false), .. shown.SelectMany(one => (Column[])[new($"{one.Name}: CV, %"), new("share of CV², %"), new("degrees of freedom")])],
+            [new("Component", false), .. shown.SelectMany(one => (Column[])[new($"{one.Name}: CV, %"), new($"{one.Name}: share of CV², %"), new($"{one.Name}: degrees of freedom")])],
             [
                 .. sources.Select(source => (string[])[Name(source), .. shown.SelectMany(one => Cells(one.Parts, source))]),
                 ["together", .. shown.SelectMany(one => (string[])[Figures.Three(100 * one.Parts.Cv), "100", Freedom(one.Parts.DegreesOfFreedom)])],

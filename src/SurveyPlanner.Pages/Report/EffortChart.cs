@@ -27,7 +27,7 @@ internal static class EffortChart
 
         var x = Axis.Covering(EffortWords.Unit(effort, capital: true), 0, reach);
         var highest = 100 * HighestTimes * Math.Max(required?.TargetCv ?? 0, delivered?.Cv ?? 0);
-        var efforts = Steps(x).Where(at => CvPercent(effort, at) <= 2 * highest).ToArray();
+        var efforts = Steps(x).Where(at => Best(effort, at) <= 2 * highest).ToArray();
         return new Chart(
             "Coefficient of variation against effort",
             EffortWords.Finding(plan, effort) + " The table has the figures.",
@@ -61,7 +61,7 @@ internal static class EffortChart
         var x = Axis.Covering("Coefficient of variation asked for, %", 0, Math.Min(reach, 100));
         var points = Steps(x)
             .Select(percent => (Percent: percent, Effort: effort.Model.EffortFor(percent / 100)))
-            .Where(point => point.Effort <= 2 * most)
+            .Where(point => point.Effort * (effort.Uncertainty?.Factors.Lower ?? 1) <= 2 * most)
             .Select(point => (point.Percent, Effort: point.Effort!.Value))
             .ToArray();
         return new Chart(
@@ -89,6 +89,9 @@ internal static class EffortChart
 
     private static double Greatest(SurveyPlan plan, EffortPlan effort)
         => Math.Max(plan.Delivered?.Effort ?? 0, effort.Required?.Planned ?? 0);
+
+    // Where the best of the band is far out of sight, all of it is.
+    private static double Best(EffortPlan effort, double at) => EffortBand.At(effort, at) is var (lower, _) ? 100 * lower : CvPercent(effort, at);
 
     private static double CvPercent(EffortPlan effort, double at) => 100 * (effort.CvAt(at)?.Cv ?? double.PositiveInfinity);
 

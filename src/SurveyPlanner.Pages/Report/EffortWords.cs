@@ -1,3 +1,4 @@
+using System.Globalization;
 using SurveyPlanner.Effort;
 using SurveyPlanner.Pages.Words;
 
@@ -68,8 +69,8 @@ internal static class EffortWords
             return null;
         }
 
-        var pilots = $"{Figures.Count(MeasuredReliability.Pilots)} simulated pilots of {measured.Transects} transects with {Figures.Three(measured.DetectionsPerTransect)} detections on each "
-            + $"and counts {Figures.Three(measured.Dispersion)} times as variable as chance, the nearest to this one that were tried";
+        var pilots = $"{Figures.Count(MeasuredReliability.Pilots)} simulated pilots of {measured.Transects} transects with {Plain(measured.DetectionsPerTransect)} {(measured.DetectionsPerTransect == 1 ? "detection" : "detections")} on each "
+            + $"and counts {(measured.Dispersion == 1 ? "" : Plain(measured.Dispersion) + " times ")}as variable as chance, the nearest to this one that were tried";
         var found = $"How far to trust that: of {pilots}, {Figures.Percent(measured.Coverage)} gave a 95\u00a0% interval that held the truth";
         return effort.Required?.AssuredEffort is null
             ? found + "."
@@ -129,6 +130,8 @@ internal static class EffortWords
 
     // There is no half a point; the small allowance keeps a whole number from being pushed up by rounding error.
     private static long Whole(double points) => (long)Math.Min(Math.Ceiling(points - (1e-9 * points)), 1e15);
+
+    private static string Plain(double chosen) => chosen.ToString("0.##", CultureInfo.InvariantCulture);
 
     private static string Rate(EffortPlan effort)
         => $"{Figures.Three(effort.EncounterRate)} detections a {(effort.IsPoints ? "visit" : "kilometre")}";

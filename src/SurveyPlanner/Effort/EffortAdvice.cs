@@ -7,12 +7,13 @@ internal static class EffortAdvice
 {
     // From memory.
     private const string Minima = "Buckland and others 2001, Introduction to Distance Sampling, section 7.2";
-    /// <summary>More strata with too few transects than this are told together.</summary>
-    private const int MostNamed = 4;
+    private const string Replicates = "Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13";
 
+    // The lower end of what that advises.
     private const int FewestTransects = 10;
 
-    private const string Replicates = "Thomas, Williams and Sandilands 2007, Journal of Cetacean Research and Management 9:1-13";
+    // More strata with too few transects than this are told together.
+    private const int MostNamed = 4;
 
     public static IEnumerable<Advice> For(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
         => Open(plan).Concat(Basis(plan, design, strata)).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan));

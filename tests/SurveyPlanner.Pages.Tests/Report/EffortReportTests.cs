@@ -40,7 +40,7 @@ public partial class EffortReportTests
     {
         var measured = Effort with { Uncertainty = Effort.Uncertainty! with { Measured = new MeasuredReliability(5, 3, 4, 0.983, 0.849) } };
         var sentence = EffortWords.OfReliability(measured)!;
-        Assert.Contains("2\u202f000 simulated pilots of 5 transects with 3.00 detections on each and counts 4.00 times as variable as chance", sentence, StringComparison.Ordinal);
+        Assert.Contains("2\u202f000 simulated pilots of 5 transects with 3 detections on each and counts 4 times as variable as chance", sentence, StringComparison.Ordinal);
         Assert.Contains("98.3\u00a0% gave a 95\u00a0% interval that held the truth", sentence, StringComparison.Ordinal);
         Assert.Contains("84.9\u00a0% an effort assured at 80\u00a0% that was enough", sentence, StringComparison.Ordinal);
     }
