@@ -107,6 +107,11 @@ internal static class EffortWords
     /// <summary>What sharing the effort otherwise would change; the ways are those of <see cref="EffortPlan.Allocations"/>.</summary>
     public static string OfAllocations(EffortPlan effort, Allocation chosen)
     {
+        if (effort.Allocations.All(option => option.Strata.SequenceEqual(effort.Allocations[0].Strata)))
+        {
+            return $"Effort is shared by {Sentences.Word(chosen)} allocation; in whole transects, and with the least number of them in each stratum, all three ways come to the same.";
+        }
+
         var planned = effort.Allocations.Single(option => option.Allocation == chosen);
         var (least, word) = planned.Cost is null
             ? (effort.Allocations.MinBy(option => option.RequiredEffort)!, "effort")
