@@ -45,8 +45,6 @@ internal sealed class ProgressPart(IProgress<double> whole, double from, double 
     private void Tell()
     {
         _told = _done;
-
-        // Not by arithmetic: the last part must end at exactly 1.
-        whole.Report(_done == 1 ? to : from + (_done * (to - from)));
+        whole.Report(from + (_done * (to - from)));
     }
 }

@@ -72,6 +72,34 @@ public class CoverageAlongTests
         static bool IsInside(Transect transect) => transect.Start is { Lon: > 0 and < 0.08, Lat: > 0 and < 0.06 };
     }
 
+    /// <summary>Pieces of all lengths, some shorter than a step: each counts by its length.</summary>
+    [Theory]
+    [InlineData(20_000)]
+    [InlineData(100)]
+    public void Every_stretch_of_a_transect_has_the_weight_of_its_length(int most)
+    {
+        foreach (var stratum in RandomShapes.Sample(10))
+        {
+            var generator = PlaneStrata.Prepare(stratum, PlaneStrata.LinesAcrossX(1_500, 500));
+            var transects = Judge.Draw(generator).Transects;
+            var places = CoverageAlong.Places(generator.Stratum, transects, most);
+            for (var i = 0; i < transects.Length; i++)
+            {
+                var (total, moment) = (0.0, 0.0);
+                foreach (var piece in transects[i].Pieces)
+                {
+                    var (from, to) = (generator.Stratum.Frame.ToFrame(piece.Plane[0].X, piece.Plane[0].Y), generator.Stratum.Frame.ToFrame(piece.Plane[^1].X, piece.Plane[^1].Y));
+                    total += Math.Abs(to.X - from.X);
+                    moment += Math.Abs(to.X - from.X) * (from.X + to.X) / 2;
+                }
+
+                var own = places.Where(place => place.Transect == i).ToList();
+                Assert.Equal(total, own.Sum(place => place.Weight), 1e-6 * total);
+                Assert.Equal(moment / total, own.Sum(place => place.Weight * place.X) / own.Sum(place => place.Weight), 1e-3);
+            }
+        }
+    }
+
     private static (StratumCoverage Coverage, Layout Layout) Run(SurveyPlanner.Regions.Stratum stratum, LayoutDesign design)
         => (Judge.Of(stratum, design, 500), Judge.Draw(PlaneStrata.Prepare(stratum, design)));
 }

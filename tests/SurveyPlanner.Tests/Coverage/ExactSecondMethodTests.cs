@@ -58,7 +58,7 @@ public class ExactSecondMethodTests
         {
             var grid = PlaneStrata.Prepare(stratum, PlaneStrata.LinesAcrossX(2_000, radius, LayoutKind.PointGrid));
             var region = grid.Stratum.Region;
-            foreach (var (x, y) in Inside(region, 12))
+            foreach (var (x, y) in Inside(region, 40))
             {
                 var exact = ExactCoverage.At(grid, CellGrid.OfPlaces([(x, y)], out _))![0];
                 var place = grid.Stratum.Frame.ToPlane(x, y);
