@@ -3,8 +3,7 @@ using SurveyPlanner.Layouts;
 namespace SurveyPlanner.Coverage;
 
 /// <summary>
-/// For each place of a grid, the stretches of the line across through it (x fixed, y free) that lie inside a shape: a look that places one above
-/// the other share.
+/// For each place of a grid, the stretches of the line across through it (x fixed, y free) that lie inside a shape.
 /// </summary>
 internal static class AcrossSlices
 {
@@ -17,29 +16,13 @@ internal static class AcrossSlices
     /// <param name="stop">Stops the work.</param>
     public static double[] At(FrameShape across, CellGrid grid, Probability probability, CancellationToken stop)
     {
-        var (x, y) = (grid.X.AsSpan().ToArray(), new double[grid.Count]);
-        var order = new int[grid.Count];
+        var (looks, result) = (new Looks(across, grid), new double[grid.Count]);
         for (var row = 0; row < grid.RowY.Length; row++)
         {
-            y.AsSpan(grid.RowStarts[row]..grid.RowStarts[row + 1]).Fill(grid.RowY[row]);
-        }
-
-        for (var i = 0; i < order.Length; i++)
-        {
-            order[i] = i;
-        }
-
-        Array.Sort(x, order);
-        var result = new double[grid.Count];
-        var crossings = new double[64];
-        for (var i = 0; i < order.Length;)
-        {
             stop.ThrowIfCancellationRequested();
-            var count = across.CrossingsAt(x[i], ref crossings);
-            var column = x[i];
-            for (; i < order.Length && x[i] == column; i++)
+            for (var i = grid.RowStarts[row]; i < grid.RowStarts[row + 1]; i++)
             {
-                result[order[i]] = probability(crossings.AsSpan(0, count), y[order[i]]);
+                result[i] = probability(looks.At(i), grid.RowY[row]);
             }
         }
 
@@ -95,5 +78,30 @@ internal static class AcrossSlices
         }
 
         return total;
+    }
+
+    /// <summary>Crossings of the line across through each place. Places in the middle of one column of cells share one look.</summary>
+    private sealed class Looks(FrameShape across, CellGrid grid)
+    {
+        private readonly Dictionary<int, double[]> _ofColumns = [];
+        private double[] _crossings = new double[64];
+
+        public ReadOnlySpan<double> At(int place)
+        {
+            var x = grid.X[place];
+            var isInMiddle = grid.Cells is { } cells && x == cells.ColumnX(cells.Columns[place]);
+            if (isInMiddle && _ofColumns.TryGetValue(grid.Cells!.Columns[place], out var known))
+            {
+                return known;
+            }
+
+            var count = across.CrossingsAt(x, ref _crossings);
+            if (isInMiddle)
+            {
+                _ofColumns.Add(grid.Cells!.Columns[place], _crossings[..count]);
+            }
+
+            return _crossings.AsSpan(0, count);
+        }
     }
 }

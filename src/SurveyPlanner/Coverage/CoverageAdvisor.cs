@@ -33,9 +33,7 @@ internal static class CoverageAdvisor
             never += cell.Best == 0 ? cell.AreaKm2 : 0;
             uneven += isUneven ? cell.AreaKm2 : 0;
 
-            // A strip or disk of this half-width that covers a place reaches no farther from it than the half-width: farther in than that, the
-            // boundary is not felt.
-            if (distances[i] > design.HalfWidthMetres)
+            if (distances[i] > EdgeReach(design))
             {
                 inside += cell.AreaKm2;
                 unevenInside += isUneven ? cell.AreaKm2 : 0;
@@ -53,6 +51,14 @@ internal static class CoverageAdvisor
         var sentence = Sentence(finding, design, uneven / area) + Never(coverage, never, area);
         return new CoverageAdvice(finding, uneven / area, never, sentence);
     }
+
+    /// <summary>
+    /// How far in the boundary is felt, metres. A place is covered from no farther away than the half-width; but where tracks are kept whole if
+    /// they start inside, whether they do is decided up to a track's reach away.
+    /// </summary>
+    private static double EdgeReach(LayoutDesign design) => design.Crossing == CrossingRule.Keep
+        ? design.HalfWidthMetres + (design.SegmentMetres ?? 0) + (Math.Sqrt(2) * (design.SideMetres ?? 0))
+        : design.HalfWidthMetres;
 
     private static bool IsUneven(in CoverageCell cell, double nominal)
     {
@@ -76,7 +82,7 @@ internal static class CoverageAdvisor
         var (areas, sums) = (new double[AxisClasses], new double[AxisClasses]);
         for (var i = 0; i < distances.Length; i++)
         {
-            if (distances[i] > design.HalfWidthMetres)
+            if (distances[i] > EdgeReach(design))
             {
                 var index = Math.Min((int)((along[i] - low) / Math.Max(high - low, double.Epsilon) * AxisClasses), AxisClasses - 1);
                 areas[index] += coverage.Cells[i].AreaKm2;

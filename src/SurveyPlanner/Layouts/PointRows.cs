@@ -35,8 +35,9 @@ internal abstract class PointRows : LayoutGenerator
 
     public override ReadOnlySpan<double> OffsetRanges => _ranges;
 
-    public override double NominalCoverage
-        => Math.Min(1, Math.PI * Stratum.HalfWidthMetres * Stratum.HalfWidthMetres / GridCellArea);
+    public override double NominalCoverage => StripsMayOverlap
+        ? DisksInRows.ShareCovered(Stratum.HalfWidthMetres, _step, _rowHeight, _oddRowsShifted)
+        : Math.PI * Stratum.HalfWidthMetres * Stratum.HalfWidthMetres / GridCellArea;
 
     public override double? ExpectedLength => null;
 

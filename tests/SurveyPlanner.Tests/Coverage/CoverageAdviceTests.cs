@@ -33,6 +33,30 @@ public class CoverageAdviceTests
         Assert.Equal(CoverageFinding.Even, plus.Finding);
     }
 
+    /// <summary>Overlapping disks cover 0.951 of the inside (by the lens formula), not the 1.131 that their areas come to.</summary>
+    [Fact]
+    public void Overlapping_disks_far_from_the_edge_are_even()
+    {
+        var grid = new LayoutDesign(LayoutKind.PointGrid, new Sizing.Spacing(5_000), new Bearing.Degrees(0), 3_000);
+
+        Assert.Equal(CoverageFinding.Even, Judge.Of(PlaneStrata.Rectangle(500_000, 400_000), grid, 5_000).Advice!.Finding);
+    }
+
+    /// <summary>
+    /// Segments of 3 km kept whole if they start inside: whether a place near the side they start from is covered is decided up to 3 km away.
+    /// </summary>
+    [Fact]
+    public void Segments_kept_whole_are_uneven_at_the_edge_only()
+    {
+        var segments = new LayoutDesign(LayoutKind.Segments, new Sizing.Spacing(6_000), new Bearing.Degrees(0), 300)
+        {
+            SegmentMetres = 3_000,
+            Crossing = CrossingRule.Keep,
+        };
+
+        Assert.Equal(CoverageFinding.UnevenAtEdge, Judge.Of(PlaneStrata.Rectangle(40_000, 30_000), segments, 250).Advice!.Finding);
+    }
+
     [Fact]
     public void An_equal_spaced_zigzag_in_a_triangle_is_uneven_along_the_axis()
     {
