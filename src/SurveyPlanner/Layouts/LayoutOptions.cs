@@ -4,7 +4,7 @@ using SurveyPlanner.Regions;
 namespace SurveyPlanner.Layouts;
 
 /// <summary>Which options belong to which kinds of layout, and which a kind cannot do without.</summary>
-public static class LayoutOptions
+internal static class LayoutOptions
 {
     private static readonly Option[] All =
     [
@@ -20,11 +20,8 @@ public static class LayoutOptions
         new("reserve", design => design.Reserve > 0, LayoutKind.RandomPoints, LayoutKind.BalancedPoints),
     ];
 
-    /// <summary>The kinds that an option of the plan file's <c>[layout]</c> belongs to; null for those that belong to all.</summary>
-    public static IReadOnlyList<LayoutKind>? KindsOf(string key) => Array.Find(All, option => option.Key == key)?.Kinds;
-
     /// <exception cref="InputException">Options that do not belong to the kind, that it lacks, or that contradict each other: all of them.</exception>
-    internal static void RefuseMisplaced(Stratum stratum, LayoutDesign design)
+    public static void RefuseMisplaced(Stratum stratum, LayoutDesign design)
     {
         var problems = All.SelectMany(option => Problems(option, design)).Concat(Contradictions(design)).ToList();
         if (problems.Count > 0)
