@@ -9,11 +9,12 @@ namespace SurveyPlanner.Layouts;
 internal sealed class ParallelLines : LayoutGenerator
 {
     private readonly double[] _ranges;
+    private readonly FrameShape _lines;
 
     public ParallelLines(StratumFrame stratum, LayoutDesign design)
         : base(stratum, design, SpacingFor(stratum, design.Sizing))
     {
-        _ranges = [SpacingMetres];
+        (_ranges, _lines) = ([SpacingMetres], stratum.Lines);
         SizingRules.RefuseTooCoarse(stratum, design, SpacingMetres, stratum.ExtentAcross);
         SizingRules.RefuseTooMany(stratum, design, stratum.ExtentAcross / SpacingMetres);
     }
@@ -24,24 +25,23 @@ internal sealed class ParallelLines : LayoutGenerator
 
     public override bool StripsMayOverlap => 2 * Stratum.HalfWidthMetres > SpacingMetres;
 
-    public override double? ExpectedLength => Stratum.Lines.AreaSquareMetres / SpacingMetres;
+    public override double? ExpectedLength => _lines.AreaSquareMetres / SpacingMetres;
 
-    public override double? ExpectedCount => new CoveredRanges(Stratum.Lines).Length / SpacingMetres;
+    public override double? ExpectedCount => new CoveredRanges(_lines).Length / SpacingMetres;
 
     public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
     {
-        var lines = Stratum.Lines;
         var transect = 0;
         for (var line = 0; ; line++)
         {
             var y = Stratum.Clip.MinY + ((offsets[0] + line) * SpacingMetres);
-            if (y > lines.MaxY)
+            if (y > _lines.MaxY)
             {
                 return;
             }
 
             var before = output.Count;
-            Clipper.ClipHorizontal(lines, y, transect, leftwards: transect % 2 == 1, output);
+            Clipper.ClipHorizontal(_lines, y, transect, leftwards: transect % 2 == 1, output);
             if (output.Count > before)
             {
                 transect++;
