@@ -37,11 +37,10 @@ internal static class Clipper
         }
 
         var segment = new Segment(fromX, fromY, dx / length, dy / length, length);
-        var isBeside = Math.Max(fromY, toY) < shape.MinY || Math.Min(fromY, toY) > shape.MaxY;
-        var count = isBeside ? 0 : output.SortCrossings(shape.Tiles.Crossings(segment, output));
+        var count = shape.Tree.Crossings(segment, output);
+        output.SortCrossings(count);
         var cuts = output.Crossings.AsSpan(0, count);
-        var inside = IsInsideAtStart(shape, fromX, fromY, dx / length, dy / length, length, cuts);
-        EmitSegment(cuts, inside, length, transect, (fromX, fromY, dx / length, dy / length), output);
+        EmitSegment(cuts, IsInsideAtStart(shape, segment, cuts, output.Leaves), segment, transect, output);
     }
 
     /// <summary>The x between which a shape lies at the heights from low to high; low above high when it has no part there.</summary>
@@ -62,40 +61,50 @@ internal static class Clipper
     }
 
     /// <summary>
-    /// Whether the stretch before the first crossing is inside. Asked within the longest stretch, where rounding cannot matter,
+    /// Whether the stretch before the first crossing is inside. Asked of the longest stretch, where rounding cannot matter,
     /// and counted back: every crossing changes sides.
     /// </summary>
-    private static bool IsInsideAtStart(FrameShape shape, double x0, double y0, double ux, double uy, double length, ReadOnlySpan<double> cuts)
+    private static bool IsInsideAtStart(FrameShape shape, in Segment segment, ReadOnlySpan<double> cuts, ReadOnlySpan<bool> leaves)
     {
         var (longest, start, index) = (-1.0, 0.0, 0);
         for (var i = 0; i <= cuts.Length; i++)
         {
-            var (low, high) = (i == 0 ? 0 : cuts[i - 1], i == cuts.Length ? length : cuts[i]);
+            var (low, high) = (i == 0 ? 0 : cuts[i - 1], i == cuts.Length ? segment.Length : cuts[i]);
             if (high - low > longest)
             {
                 (longest, start, index) = (high - low, low, i);
             }
         }
 
-        bool IsInsideAt(double share)
-        {
-            var along = start + (share * longest);
-            return shape.Contains(x0 + (along * ux), y0 + (along * uy));
-        }
-
-        // One of the places asked may be a vertex that the line only touches, where the answer is chance: two of three decide.
-        var first = IsInsideAt(0.5);
-        var isInside = first == IsInsideAt(0.31) ? first : IsInsideAt(0.73);
+        // The crossings at its two ends know. They contradict each other where one of them is at the same place as a third, and only rounding put
+        // them in order: then the place itself is asked.
+        bool? before = index > 0 ? !leaves[index - 1] : null;
+        bool? after = index < cuts.Length ? leaves[index] : null;
+        var known = before ?? after;
+        var isInside = known is { } one && one == (after ?? one) ? one : IsInside(shape, segment, start, longest);
         return isInside == (index % 2 == 0);
     }
 
-    private static void EmitSegment(
-        ReadOnlySpan<double> cuts, bool inside, double length, int transect, (double X, double Y, double Ux, double Uy) line, PieceBuffer output)
+    /// <summary>Whether a stretch without crossings is inside.</summary>
+    private static bool IsInside(FrameShape shape, in Segment segment, double start, double length)
+    {
+        // One of the places asked may be a vertex that the line only touches, where the answer is chance: two of three decide.
+        var first = IsInsideAt(shape, segment, start + (0.5 * length));
+        return first == IsInsideAt(shape, segment, start + (0.31 * length)) ? first : IsInsideAt(shape, segment, start + (0.73 * length));
+    }
+
+    private static bool IsInsideAt(FrameShape shape, in Segment segment, double along)
+    {
+        var (x, y) = segment.At(along);
+        return shape.Contains(x, y);
+    }
+
+    private static void EmitSegment(ReadOnlySpan<double> cuts, bool inside, in Segment segment, int transect, PieceBuffer output)
     {
         var start = 0.0;
         for (var i = 0; i <= cuts.Length; i++)
         {
-            var cut = i == cuts.Length ? length : cuts[i];
+            var cut = i == cuts.Length ? segment.Length : cuts[i];
             if (!inside)
             {
                 (start, inside) = (cut, true);
@@ -112,8 +121,9 @@ internal static class Clipper
             inside = false;
             if (cut - start >= ShortestMetres)
             {
-                output.Add(
-                    transect, line.X + (start * line.Ux), line.Y + (start * line.Uy), line.X + (cut * line.Ux), line.Y + (cut * line.Uy));
+                var (fromX, fromY) = segment.At(start);
+                var (toX, toY) = segment.At(cut);
+                output.Add(transect, fromX, fromY, toX, toY);
             }
         }
     }

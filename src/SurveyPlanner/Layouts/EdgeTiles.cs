@@ -2,7 +2,7 @@ namespace SurveyPlanner.Layouts;
 
 /// <summary>
 /// The edges of a shape sorted into square tiles, and for each tile how many tiles away the nearest edge is: whoever looks for edges near a
-/// place or along a slanted line skips what is empty. Safe to share between threads.
+/// place skips what is empty. Safe to share between threads.
 /// </summary>
 internal sealed class EdgeTiles
 {
@@ -76,45 +76,6 @@ internal sealed class EdgeTiles
     /// </summary>
     public BoxTiles In(double lowX, double highX, double lowY, double highY)
         => new(this, Column(lowX), Column(highX), Row(lowY), Row(highY));
-
-    /// <summary>
-    /// Notes where a segment crosses edges: the distance from its start, and the edge, in no order and once for every tile that both run through.
-    /// Returns how many there are.
-    /// </summary>
-    public int Crossings(in Segment segment, PieceBuffer output)
-    {
-        var path = new TilePath(this, segment.Upwards);
-        var count = 0;
-        for (var row = path.FirstRow; row <= path.LastRow; row++)
-        {
-            var (column, last) = path.ColumnsIn(row);
-            while (column <= last)
-            {
-                var tile = (row * _columns) + column;
-                int empty = _tilesToEdge[tile];
-                if (empty == 0)
-                {
-                    CrossTile(tile, segment, ref count, output);
-                    empty = 1;
-                }
-
-                column += empty;
-            }
-        }
-
-        return count;
-    }
-
-    private void CrossTile(int tile, in Segment segment, ref int count, PieceBuffer output)
-    {
-        for (var i = _starts[tile]; i < _starts[tile + 1]; i++)
-        {
-            if (segment.Crosses(_edges[_indices[i]], out var along))
-            {
-                output.SetCrossing(count++, along, _indices[i]);
-            }
-        }
-    }
 
     private double Nearest(int tile, double x, double y, double nearest)
     {
@@ -261,19 +222,19 @@ internal sealed class EdgeTiles
         }
     }
 
-    /// <summary>The tiles that an edge, or any line from its lower end to its upper, comes within the margin of.</summary>
+    /// <summary>The tiles that an edge comes within the margin of.</summary>
     private readonly struct TilePath
     {
         private readonly EdgeTiles _tiles;
-        private readonly FrameShape.Edge _line;
+        private readonly FrameShape.Edge _edge;
         private readonly double _slope;
         private readonly double _margin;
 
-        public TilePath(EdgeTiles tiles, in FrameShape.Edge line)
+        public TilePath(EdgeTiles tiles, in FrameShape.Edge edge)
         {
-            (_tiles, _line, _margin) = (tiles, line, Margin * tiles.TileMetres);
-            _slope = (line.HighX - line.LowX) / (line.HighY - line.LowY);
-            (FirstRow, LastRow) = (tiles.Row(line.LowY - _margin), tiles.Row(line.HighY + _margin));
+            (_tiles, _edge, _margin) = (tiles, edge, Margin * tiles.TileMetres);
+            _slope = (edge.HighX - edge.LowX) / (edge.HighY - edge.LowY);
+            (FirstRow, LastRow) = (tiles.Row(edge.LowY - _margin), tiles.Row(edge.HighY + _margin));
         }
 
         public int FirstRow { get; }
@@ -285,8 +246,8 @@ internal sealed class EdgeTiles
             // Only where the line goes on beyond the row is its x there asked for: a level line never divides by its height of nothing.
             var bottom = _tiles._originY + (row * _tiles.TileMetres) - _margin;
             var top = bottom + _tiles.TileMetres + (2 * _margin);
-            var lowX = _line.LowY >= bottom ? _line.LowX : _line.LowX + ((bottom - _line.LowY) * _slope);
-            var highX = _line.HighY <= top ? _line.HighX : _line.LowX + ((top - _line.LowY) * _slope);
+            var lowX = _edge.LowY >= bottom ? _edge.LowX : _edge.LowX + ((bottom - _edge.LowY) * _slope);
+            var highX = _edge.HighY <= top ? _edge.HighX : _edge.LowX + ((top - _edge.LowY) * _slope);
             return (_tiles.Column(Math.Min(lowX, highX) - _margin), _tiles.Column(Math.Max(lowX, highX) + _margin));
         }
     }

@@ -26,6 +26,7 @@ internal sealed class FrameShape
     private readonly int[] _bandStarts;
     private readonly double _bandsPerMetre;
     private readonly Lazy<EdgeTiles> _tiles;
+    private readonly Lazy<EdgeTree> _tree;
 
     /// <param name="shape">The shape in the plane.</param>
     /// <param name="frame">How it is turned.</param>
@@ -47,6 +48,7 @@ internal sealed class FrameShape
         AreaSquareMetres = shape.AreaSquareMetres;
         PartRanges = YRanges(shape, y);
         _tiles = new Lazy<EdgeTiles>(() => new EdgeTiles(this, _edges));
+        _tree = new Lazy<EdgeTree>(() => new EdgeTree(this, shape.RingStarts.AsSpan()));
     }
 
     public double MinX { get; }
@@ -62,11 +64,11 @@ internal sealed class FrameShape
     /// <summary>All edges, by number.</summary>
     public ReadOnlySpan<Edge> Edges => _edges;
 
-    /// <summary>The edges in square tiles, for looking round a place or along a slanted line.</summary>
+    /// <summary>The edges in square tiles, for looking round a place.</summary>
     public EdgeTiles Tiles => _tiles.Value;
 
-    /// <summary>All edges, each once.</summary>
-    public ReadOnlySpan<Edge> AllEdges => _edges;
+    /// <summary>The edges in a tree, for looking along a slanted line.</summary>
+    public EdgeTree Tree => _tree.Value;
 
     /// <summary>Lowest and highest y of each part.</summary>
     public (double Low, double High)[] PartRanges { get; }

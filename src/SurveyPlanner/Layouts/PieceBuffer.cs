@@ -11,8 +11,7 @@ internal sealed class PieceBuffer
 
     private Piece[] _pieces = new Piece[256];
 
-    // Number of the edge that each crossing of a slanted line is with.
-    private int[] _crossingEdges = new int[64];
+    private bool[] _leaves = new bool[64];
 
     /// <summary>Room for the crossings of one line; see <see cref="FrameShape.CrossingsAt"/>.</summary>
     public double[] Crossings = new double[64];
@@ -47,62 +46,45 @@ internal sealed class PieceBuffer
 
     public void Clear() => Count = 0;
 
-    /// <summary>Notes one crossing of a slanted line: where on the line, and with which edge.</summary>
-    public void SetCrossing(int index, double along, int edge)
+    /// <summary>Whether each crossing of a slanted line goes from the inside to the outside.</summary>
+    public ReadOnlySpan<bool> Leaves => _leaves;
+
+    /// <summary>Notes one crossing of a slanted line: where on the line, and whether it leaves the inside there.</summary>
+    public void SetCrossing(int index, double along, bool leaves)
     {
         if (index >= Crossings.Length)
         {
             Array.Resize(ref Crossings, 2 * index);
         }
 
-        if (index >= _crossingEdges.Length)
+        if (index >= _leaves.Length)
         {
-            Array.Resize(ref _crossingEdges, 2 * index);
+            Array.Resize(ref _leaves, 2 * index);
         }
 
-        (Crossings[index], _crossingEdges[index]) = (along, edge);
+        (Crossings[index], _leaves[index]) = (along, leaves);
     }
 
-    /// <summary>
-    /// Sorts the first crossings by their place on the line and drops repeats, which have the same edge: an edge is met once in every tile that it
-    /// shares with the line. Returns how many are left.
-    /// </summary>
-    public int SortCrossings(int count)
+    /// <summary>Sorts the first crossings by their place on the line.</summary>
+    public void SortCrossings(int count)
     {
         if (count > Few)
         {
-            Crossings.AsSpan(0, count).Sort(_crossingEdges.AsSpan(0, count));
+            Crossings.AsSpan(0, count).Sort(_leaves.AsSpan(0, count));
+            return;
         }
 
-        // Insertion, which leaves sorted ones where they are and takes up each only once.
-        var kept = 0;
-        for (var i = 0; i < count; i++)
+        for (var i = 1; i < count; i++)
         {
-            var (along, edge) = (Crossings[i], _crossingEdges[i]);
-            var at = kept;
-            var isRepeat = false;
-            for (; at > 0 && Crossings[at - 1] >= along && !isRepeat; at--)
+            var (along, leaves) = (Crossings[i], _leaves[i]);
+            var at = i;
+            for (; at > 0 && Crossings[at - 1] > along; at--)
             {
-                isRepeat = Crossings[at - 1] == along && _crossingEdges[at - 1] == edge;
+                (Crossings[at], _leaves[at]) = (Crossings[at - 1], _leaves[at - 1]);
             }
 
-            if (!isRepeat)
-            {
-                Insert(at, kept++, along, edge);
-            }
+            (Crossings[at], _leaves[at]) = (along, leaves);
         }
-
-        return kept;
-    }
-
-    private void Insert(int at, int end, double along, int edge)
-    {
-        for (var i = end; i > at; i--)
-        {
-            (Crossings[i], _crossingEdges[i]) = (Crossings[i - 1], _crossingEdges[i - 1]);
-        }
-
-        (Crossings[at], _crossingEdges[at]) = (along, edge);
     }
 
     public void Add(int transect, double fromX, double fromY, double toX, double toY)

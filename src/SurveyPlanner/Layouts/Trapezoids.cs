@@ -62,7 +62,7 @@ internal sealed class Trapezoids
 
     private Trapezoids(FrameShape shape)
     {
-        _edges = [.. shape.AllEdges.ToArray().Where(edge => edge.HighY > edge.LowY).OrderBy(edge => edge.LowY)];
+        _edges = [.. shape.Edges.ToArray().Where(edge => edge.HighY > edge.LowY).OrderBy(edge => edge.LowY)];
         _tolerance = Level * (shape.MaxY - shape.MinY);
         _partner = new int[_edges.Length];
         _partnerAbove = new int[_edges.Length];

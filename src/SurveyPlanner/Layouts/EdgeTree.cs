@@ -1,0 +1,217 @@
+using System.Numerics;
+using System.Runtime.Intrinsics;
+
+namespace SurveyPlanner.Layouts;
+
+/// <summary>
+/// The edges of a shape under a tree of bounding boxes: a slanted line looks only into the boxes that it passes through, at sixteen of them, or at
+/// eight edges, at once. Safe to share between threads.
+/// </summary>
+/// <remarks>
+/// Edges that follow one another lie near each other, so the rings' own order makes small boxes. Rings are put in order along a curve that fills
+/// the plane (Morton 1966), so that small islands next to each other share a box.
+/// </remarks>
+internal sealed class EdgeTree
+{
+    private const int EdgesPerBox = 8;
+    private const int BoxesPerBox = 16;
+
+    private readonly FrameShape _shape;
+    private readonly FrameShape.Edge[] _edges;
+
+    // Ends of all edges, in a length that eight divides; what is filled up crosses nothing.
+    private readonly double[] _lowX;
+    private readonly double[] _lowY;
+    private readonly double[] _highX;
+    private readonly double[] _highY;
+
+    // From boxes of edges up to at most sixteen boxes.
+    private readonly BoxLevel[] _levels;
+
+    /// <param name="shape">The shape; its edges as its rings run.</param>
+    /// <param name="ringStarts">Number of the first edge of each ring, and the number of edges as last entry.</param>
+    public EdgeTree(FrameShape shape, ReadOnlySpan<int> ringStarts)
+    {
+        _shape = shape;
+        _edges = InOrder(shape, ringStarts);
+        (_lowX, _lowY) = (Filled(edge => edge.LowX), Filled(edge => edge.LowY));
+        (_highX, _highY) = (Filled(edge => edge.HighX), Filled(edge => edge.HighY));
+        var boxes = Array.ConvertAll(_edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
+        var levels = new List<BoxLevel>();
+        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > BoxesPerBox; inEach = BoxesPerBox)
+        {
+            boxes = [.. boxes.Chunk(inEach).Select(Box.Round)];
+            levels.Add(new BoxLevel(boxes, shape));
+        }
+
+        _levels = [.. levels];
+    }
+
+    /// <summary>Notes where a segment crosses edges, each once, in no order. Returns how many there are.</summary>
+    public int Crossings(in Segment segment, PieceBuffer output)
+    {
+        var count = 0;
+        Look(_levels.Length - 1, 0, segment, new Probe(segment, _shape), ref count, output);
+        return count;
+    }
+
+    /// <summary>Looks at the sixteen boxes from a number on and into those that the segment meets.</summary>
+    private void Look(int level, int first, in Segment segment, in Probe probe, ref int count, PieceBuffer output)
+    {
+        for (var met = _levels[level].Met(first, probe); met != 0; met &= met - 1)
+        {
+            var box = first + BitOperations.TrailingZeroCount(met);
+            if (level > 0)
+            {
+                Look(level - 1, box * BoxesPerBox, segment, probe, ref count, output);
+            }
+            else
+            {
+                Cross(box * EdgesPerBox, segment, ref count, output);
+            }
+        }
+    }
+
+    private void Cross(int first, in Segment segment, ref int count, PieceBuffer output)
+    {
+        var low = segment.HeightsOf(Vector512.LoadUnsafe(ref _lowX[first]), Vector512.LoadUnsafe(ref _lowY[first]));
+        var high = segment.HeightsOf(Vector512.LoadUnsafe(ref _highX[first]), Vector512.LoadUnsafe(ref _highY[first]));
+        var sides = Vector512.LessThanOrEqual(low, Vector512<double>.Zero) ^ Vector512.LessThanOrEqual(high, Vector512<double>.Zero);
+        for (var met = sides.ExtractMostSignificantBits(); met != 0; met &= met - 1)
+        {
+            ref readonly var edge = ref _edges[first + BitOperations.TrailingZeroCount(met)];
+            if (segment.Crosses(edge, out var along, out var leaves))
+            {
+                output.SetCrossing(count++, along, leaves);
+            }
+        }
+    }
+
+    private static FrameShape.Edge[] InOrder(FrameShape shape, ReadOnlySpan<int> ringStarts)
+    {
+        var edges = shape.Edges;
+        var rings = new (uint Code, int Start, int End)[ringStarts.Length - 1];
+        var scale = ushort.MaxValue / Math.Max(Math.Max(shape.MaxX - shape.MinX, shape.MaxY - shape.MinY), double.Epsilon);
+        for (var ring = 0; ring < rings.Length; ring++)
+        {
+            ref readonly var edge = ref edges[ringStarts[ring]];
+            var (column, row) = ((ushort)((edge.LowX - shape.MinX) * scale), (ushort)((edge.LowY - shape.MinY) * scale));
+            rings[ring] = (Spread(column) | (Spread(row) << 1), ringStarts[ring], ringStarts[ring + 1]);
+        }
+
+        Array.Sort(rings);
+        var ordered = new FrameShape.Edge[edges.Length];
+        var next = 0;
+        foreach (var (_, start, end) in rings)
+        {
+            edges[start..end].CopyTo(ordered.AsSpan(next));
+            next += end - start;
+        }
+
+        return ordered;
+    }
+
+    /// <summary>The sixteen bits of a number with a gap after each.</summary>
+    private static uint Spread(ushort number)
+    {
+        uint bits = number;
+        bits = (bits | (bits << 8)) & 0x00FF00FF;
+        bits = (bits | (bits << 4)) & 0x0F0F0F0F;
+        bits = (bits | (bits << 2)) & 0x33333333;
+        return (bits | (bits << 1)) & 0x55555555;
+    }
+
+    private double[] Filled(Func<FrameShape.Edge, double> end)
+    {
+        var filled = new double[(_edges.Length + EdgesPerBox - 1) / EdgesPerBox * EdgesPerBox];
+        for (var i = 0; i < _edges.Length; i++)
+        {
+            filled[i] = end(_edges[i]);
+        }
+
+        return filled;
+    }
+
+    private readonly record struct Box(double LowX, double HighX, double LowY, double HighY)
+    {
+        public static Box Round(Box[] boxes)
+            => new(boxes.Min(box => box.LowX), boxes.Max(box => box.HighX), boxes.Min(box => box.LowY), boxes.Max(box => box.HighY));
+    }
+
+    /// <summary>
+    /// A segment as boxes see it, in single precision, which is enough to tell what can be skipped. From the middle of the shape, metres.
+    /// </summary>
+    private readonly struct Probe
+    {
+        // Far above what single precision rounds off, in parts of the lengths it is reckoned from.
+        private const double Margin = 4e-6;
+
+        private readonly float _middleX;
+        private readonly float _middleY;
+        private readonly float _directionX;
+        private readonly float _directionY;
+        private readonly float _reachX;
+        private readonly float _reachY;
+        private readonly float _reachBeside;
+
+        public Probe(in Segment segment, FrameShape shape)
+        {
+            var (x, y) = (segment.MiddleX - ((shape.MinX + shape.MaxX) / 2), segment.MiddleY - ((shape.MinY + shape.MaxY) / 2));
+            var margin = Margin * ((shape.MaxX - shape.MinX) + (shape.MaxY - shape.MinY) + segment.Length + Math.Abs(x) + Math.Abs(y));
+            (_middleX, _middleY) = ((float)x, (float)y);
+            (_directionX, _directionY) = ((float)segment.DirectionX, (float)segment.DirectionY);
+            _reachX = (float)((Math.Abs(segment.DirectionX) * segment.Length / 2) + margin);
+            _reachY = (float)((Math.Abs(segment.DirectionY) * segment.Length / 2) + margin);
+            _reachBeside = (float)margin;
+        }
+
+        /// <summary>One bit for each of sixteen boxes that the segment meets.</summary>
+        public ulong Meets(Vector512<float> boxX, Vector512<float> boxY, Vector512<float> halfX, Vector512<float> halfY)
+        {
+            // A segment misses a box where a line along x, along y or along the segment parts them.
+            var fromX = boxX - Vector512.Create(_middleX);
+            var fromY = boxY - Vector512.Create(_middleY);
+            var beside = Vector512.Abs((fromY * _directionX) - (fromX * _directionY));
+            var reach = (halfX * Math.Abs(_directionY)) + (halfY * Math.Abs(_directionX)) + Vector512.Create(_reachBeside);
+            return (Vector512.LessThanOrEqual(beside, reach)
+                & Vector512.LessThanOrEqual(Vector512.Abs(fromX), halfX + Vector512.Create(_reachX))
+                & Vector512.LessThanOrEqual(Vector512.Abs(fromY), halfY + Vector512.Create(_reachY)))
+                .ExtractMostSignificantBits();
+        }
+    }
+
+    /// <summary>
+    /// Boxes by their middles, from the middle of the shape, and half sides, metres; in a length that sixteen divides, and what is filled up meets
+    /// nothing.
+    /// </summary>
+    private sealed class BoxLevel
+    {
+        private readonly float[] _middleX;
+        private readonly float[] _middleY;
+        private readonly float[] _halfX;
+        private readonly float[] _halfY;
+
+        public BoxLevel(Box[] boxes, FrameShape shape)
+        {
+            var (centreX, centreY) = ((shape.MinX + shape.MaxX) / 2, (shape.MinY + shape.MaxY) / 2);
+            var length = (boxes.Length + BoxesPerBox - 1) / BoxesPerBox * BoxesPerBox;
+            (_middleX, _middleY) = (new float[length], new float[length]);
+            (_halfX, _halfY) = (new float[length], new float[length]);
+            Array.Fill(_middleX, float.PositiveInfinity);
+            for (var i = 0; i < boxes.Length; i++)
+            {
+                var box = boxes[i];
+                (_middleX[i], _middleY[i]) = ((float)(((box.LowX + box.HighX) / 2) - centreX), (float)(((box.LowY + box.HighY) / 2) - centreY));
+                (_halfX[i], _halfY[i]) = ((float)((box.HighX - box.LowX) / 2), (float)((box.HighY - box.LowY) / 2));
+            }
+        }
+
+        /// <summary>Of the sixteen boxes from a number on, one bit for each that the segment meets.</summary>
+        public ulong Met(int first, in Probe probe)
+            => probe.Meets(
+                Vector512.LoadUnsafe(ref _middleX[first]),
+                Vector512.LoadUnsafe(ref _middleY[first]),
+                Vector512.LoadUnsafe(ref _halfX[first]),
+                Vector512.LoadUnsafe(ref _halfY[first]));
+    }
+}
