@@ -80,9 +80,16 @@ internal sealed class CellGrid
     public (int First, int End) Run(int row, double low, double high)
     {
         var (start, count) = (RowStarts[row], RowStarts[row + 1] - RowStarts[row]);
+        ref readonly var places = ref _rowPlaces[row];
+
+        // Most rows at a coast hold a place or two, which most ranges miss.
+        if (high < places.First || low > places.Last)
+        {
+            return (start, start);
+        }
+
         var x = X.AsSpan(start, count);
         var slots = _placeSlots.AsSpan(start, count);
-        ref readonly var places = ref _rowPlaces[row];
         return (start + places.FirstFrom(x, slots, low), start + places.FirstBeyond(x, slots, high));
     }
 }

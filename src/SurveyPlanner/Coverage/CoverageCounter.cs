@@ -15,6 +15,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 {
     // One more than there are places: a run may end behind the last.
     private readonly Ends[] _ends = new Ends[grid.Count + 1];
+
     private RowRuns _now = new(grid.RowY.Length);
     private RowRuns _before = new(grid.RowY.Length);
 
@@ -27,15 +28,23 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         _now.Clear();
         foreach (ref readonly var piece in pieces)
         {
-            Cover(new Strip(piece, halfWidthMetres), onlyRemember);
+            Cover(new Strip(piece, halfWidthMetres));
         }
 
-        if (!onlyRemember)
+        if (onlyRemember)
         {
-            foreach (var row in _now.Rows)
-            {
-                CountRow(row);
-            }
+            return;
+        }
+
+        foreach (var row in _now.Rows)
+        {
+            CountRow(row);
+        }
+
+        foreach (var (first, end) in _now.Overlaps)
+        {
+            _ends[first].Repeats++;
+            _ends[end].Repeats--;
         }
     }
 
@@ -51,54 +60,41 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
             {
                 ref readonly var ends = ref counter._ends[i];
                 sum.Draws += ends.Draws;
-                sum.Times += ends.Times;
+                sum.Repeats += ends.Repeats;
                 sum.Again += ends.Again;
             }
 
-            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Times, sum.Again);
+            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Draws + sum.Repeats, sum.Again);
         }
 
         return counts;
     }
 
-    private void Cover(in Strip strip, bool onlyRemember)
+    private void Cover(in Strip strip)
     {
-        for (var row = grid.FirstRowFrom(strip.LowY); row < grid.RowY.Length; row++)
+        var rowY = grid.RowY;
+        for (var row = grid.FirstRowFrom(strip.LowY); row < rowY.Length && rowY[row] <= strip.HighY; row++)
         {
-            var y = grid.RowY[row];
-            if (y > strip.HighY)
-            {
-                return;
-            }
-
-            strip.RangeAt(y, out var low, out var high);
+            strip.RangeAt(rowY[row], out var low, out var high);
             var (first, end) = grid.Run(row, low, high);
-            if (first >= end)
+            if (first < end)
             {
-                continue;
-            }
-
-            _now.Add(row, first, end);
-            if (!onlyRemember)
-            {
-                _ends[first].Times++;
-                _ends[end].Times--;
+                _now.Add(row, first, end);
             }
         }
     }
 
     private void CountRow(int row)
     {
-        var before = _before.FirstOf(row);
-        for (var run = _now.FirstOf(row); run != 0; run = _now[run].Next)
+        ref readonly var now = ref _now[row];
+        ref readonly var before = ref _before[row];
+        while (true)
         {
-            var (first, end) = (_now[run].First, _now[run].End);
-            _ends[first].Draws++;
-            _ends[end].Draws--;
-            while (before != 0)
+            _ends[now.First].Draws++;
+            _ends[now.End].Draws--;
+            while (true)
             {
-                ref readonly var earlier = ref _before[before];
-                var (from, to) = (Math.Max(first, earlier.First), Math.Min(end, earlier.End));
+                var (from, to) = (Math.Max(now.First, before.First), Math.Min(now.End, before.End));
                 if (from < to)
                 {
                     _ends[from].Again++;
@@ -106,13 +102,20 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
                 }
 
                 // The earlier run may reach into the next one of this draw too.
-                if (earlier.End > end)
+                if (before.Next == 0 || before.End > now.End)
                 {
                     break;
                 }
 
-                before = earlier.Next;
+                before = ref _before[before.Next];
             }
+
+            if (now.Next == 0)
+            {
+                return;
+            }
+
+            now = ref _now[now.Next];
         }
     }
 
@@ -120,7 +123,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     private struct Ends
     {
         public int Draws;
-        public int Times;
+        public int Repeats;
         public int Again;
     }
 }

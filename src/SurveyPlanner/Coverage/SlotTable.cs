@@ -6,11 +6,6 @@ namespace SurveyPlanner.Coverage;
 /// </summary>
 internal readonly struct SlotTable
 {
-    // So few are looked through one by one: quicker than halving.
-    private const int Few = 8;
-
-    private readonly double _first;
-    private readonly double _last;
     private readonly double _slotsPerUnit;
 
     /// <param name="values">Ascending.</param>
@@ -19,15 +14,17 @@ internal readonly struct SlotTable
     {
         if (values.Length == 0)
         {
+            // Nothing is at least or at most what it would have to be.
+            (First, Last) = (double.PositiveInfinity, double.NegativeInfinity);
             return;
         }
 
-        (_first, _last) = (values[0], values[^1]);
-        _slotsPerUnit = _last > _first ? values.Length / (_last - _first) : 0;
+        (First, Last) = (values[0], values[^1]);
+        _slotsPerUnit = Last > First ? values.Length / (Last - First) : 0;
         var i = 0;
         for (var slot = 0; slot < firsts.Length; slot++)
         {
-            while (i < values.Length && Slot(values[i], values.Length) < slot)
+            while (Slot(values[i], values.Length) < slot)
             {
                 i++;
             }
@@ -36,38 +33,42 @@ internal readonly struct SlotTable
         }
     }
 
+    /// <summary>The first value; infinite where there is none.</summary>
+    public double First { get; }
+
+    /// <summary>The last value; minus infinity where there is none.</summary>
+    public double Last { get; }
+
     /// <summary>Index of the first value that is at least so large; the number of values where none is.</summary>
     public int FirstFrom(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double least)
-    {
-        if (values.Length == 0 || least <= _first)
-        {
-            return 0;
-        }
-
-        if (least > _last)
-        {
-            return values.Length;
-        }
-
-        var slot = Slot(least, values.Length);
-        var i = firsts[slot];
-        for (var end = slot + 1 < firsts.Length ? firsts[slot + 1] : values.Length; end - i > Few;)
-        {
-            var middle = (i + end) / 2;
-            (i, end) = values[middle] < least ? (middle + 1, end) : (i, middle);
-        }
-
-        while (values[i] < least)
-        {
-            i++;
-        }
-
-        return i;
-    }
+        => least <= Last ? CountBelow(values, firsts, least) : values.Length;
 
     /// <summary>Index of the first value that is larger; the number of values where none is.</summary>
     public int FirstBeyond(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double most)
-        => most >= _last ? values.Length : FirstFrom(values, firsts, Math.BitIncrement(most));
+        => most < Last ? CountBelow(values, firsts, Math.BitIncrement(most)) : values.Length;
 
-    private int Slot(double value, int slots) => Math.Min((int)((value - _first) * _slotsPerUnit), slots - 1);
+    /// <summary>How many values are less than a number that is not larger than the last.</summary>
+    private int CountBelow(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double number)
+    {
+        var slot = Slot(number, values.Length);
+        var i = firsts[slot];
+
+        // Mostly one to go or none, which no branch would foretell.
+        i += values[i] < number ? 1 : 0;
+        return values[i] < number ? CountBelowFrom(i, slot + 1 < firsts.Length ? firsts[slot + 1] : values.Length, values, number) : i;
+    }
+
+    /// <summary>The same, known to be more than <paramref name="low"/> and at most <paramref name="high"/>.</summary>
+    private static int CountBelowFrom(int low, int high, ReadOnlySpan<double> values, double number)
+    {
+        while (high - low > 1)
+        {
+            var middle = (low + high) / 2;
+            (low, high) = values[middle] < number ? (middle, high) : (low, middle);
+        }
+
+        return high;
+    }
+
+    private int Slot(double value, int slots) => Math.Clamp((int)((value - First) * _slotsPerUnit), 0, slots - 1);
 }

@@ -57,8 +57,8 @@ internal readonly ref struct Strip
         }
 
         var (along, across) = (_middleX + (_shiftAlong * dy), _middleX + (_shiftAcross * dy));
-        low = Math.Max(along - _halfAlong, across - _halfAcross);
-        high = Math.Min(along + _halfAlong, across + _halfAcross);
+        low = double.MaxNative(along - _halfAlong, across - _halfAcross);
+        high = double.MinNative(along + _halfAlong, across + _halfAcross);
     }
 
     /// <summary>|x · slopeX + y · slopeY| is at most the limit: on a line of constant y a stretch of x, endless where x does not matter.</summary>

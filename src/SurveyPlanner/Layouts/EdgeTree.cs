@@ -16,6 +16,9 @@ internal sealed class EdgeTree
     private const int EdgesPerBox = 8;
     private const int BoxesPerBox = 16;
 
+    // So many boxes are looked at one and all: a level more would not pay.
+    private const int MostAtTop = 8 * BoxesPerBox;
+
     private readonly FrameShape _shape;
     private readonly FrameShape.Edge[] _edges;
 
@@ -25,8 +28,9 @@ internal sealed class EdgeTree
     private readonly double[] _highX;
     private readonly double[] _highY;
 
-    // From boxes of edges up to at most sixteen boxes.
+    // From boxes of edges up to a few; and the numbers of all sixteens of those.
     private readonly BoxLevel[] _levels;
+    private readonly int[] _top;
 
     /// <param name="shape">The shape; its edges as its rings run.</param>
     /// <param name="ringStarts">Number of the first edge of each ring, and the number of edges as last entry.</param>
@@ -38,53 +42,87 @@ internal sealed class EdgeTree
         (_highX, _highY) = (Filled(edge => edge.HighX), Filled(edge => edge.HighY));
         var boxes = Array.ConvertAll(_edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
         var levels = new List<BoxLevel>();
-        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > BoxesPerBox; inEach = BoxesPerBox)
+        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > MostAtTop; inEach = BoxesPerBox)
         {
             boxes = [.. boxes.Chunk(inEach).Select(Box.Round)];
             levels.Add(new BoxLevel(boxes, shape));
         }
 
         _levels = [.. levels];
+        _top = [.. Enumerable.Range(0, (boxes.Length + BoxesPerBox - 1) / BoxesPerBox)];
     }
 
     /// <summary>Notes where a segment crosses edges, each once, in no order. Returns how many there are.</summary>
     public int Crossings(in Segment segment, PieceBuffer output)
     {
+        // Level by level; boxes of one level are independent of each other, so that the processor can look at several at a time.
+        var probe = new Probe(segment, _shape);
+        var count = Open(_levels[^1], probe, _top, output.FoundBoxes);
+        for (var level = _levels.Length - 2; level >= 0; level--)
+        {
+            count = Open(_levels[level], probe, output.FoundBoxes.AsSpan(0, count), output.MoreBoxes(BoxesPerBox * count));
+            output.SwapBoxes();
+        }
+
+        return Cross(output.FoundBoxes.AsSpan(0, count), segment, output);
+    }
+
+    /// <summary>Finds which boxes inside the given ones the segment meets. Returns how many.</summary>
+    private static int Open(BoxLevel level, in Probe probe, ReadOnlySpan<int> boxes, Span<int> found)
+    {
+        const int atOnce = 64 / BoxesPerBox;
         var count = 0;
-        Look(_levels.Length - 1, 0, segment, new Probe(segment, _shape), ref count, output);
+        for (var first = 0; first < boxes.Length; first += atOnce)
+        {
+            var met = 0UL;
+            for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
+            {
+                met |= level.Met(boxes[i] * BoxesPerBox, probe) << (BoxesPerBox * (i - first));
+            }
+
+            for (; met != 0; met &= met - 1)
+            {
+                var bit = (uint)BitOperations.TrailingZeroCount(met);
+                found[count++] = (boxes[first + (int)(bit / BoxesPerBox)] * BoxesPerBox) + (int)(bit % BoxesPerBox);
+            }
+        }
+
         return count;
     }
 
-    /// <summary>Looks at the sixteen boxes from a number on and into those that the segment meets.</summary>
-    private void Look(int level, int first, in Segment segment, in Probe probe, ref int count, PieceBuffer output)
+    private int Cross(ReadOnlySpan<int> boxes, in Segment segment, PieceBuffer output)
     {
-        for (var met = _levels[level].Met(first, probe); met != 0; met &= met - 1)
+        const int atOnce = 64 / EdgesPerBox;
+        var count = 0;
+        for (var first = 0; first < boxes.Length; first += atOnce)
         {
-            var box = first + BitOperations.TrailingZeroCount(met);
-            if (level > 0)
+            var met = 0UL;
+            for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                Look(level - 1, box * BoxesPerBox, segment, probe, ref count, output);
+                met |= Straddles(boxes[i] * EdgesPerBox, segment) << (EdgesPerBox * (i - first));
             }
-            else
+
+            for (; met != 0; met &= met - 1)
             {
-                Cross(box * EdgesPerBox, segment, ref count, output);
+                var bit = (uint)BitOperations.TrailingZeroCount(met);
+                ref readonly var edge = ref _edges[(boxes[first + (int)(bit / EdgesPerBox)] * EdgesPerBox) + (int)(bit % EdgesPerBox)];
+                if (segment.Crosses(edge, out var along, out var leaves))
+                {
+                    output.SetCrossing(count++, along, leaves);
+                }
             }
         }
+
+        return count;
     }
 
-    private void Cross(int first, in Segment segment, ref int count, PieceBuffer output)
+    /// <summary>Of eight edges, one bit for each whose ends lie on different sides of the segment's line.</summary>
+    private ulong Straddles(int first, in Segment segment)
     {
         var low = segment.HeightsOf(Vector512.LoadUnsafe(ref _lowX[first]), Vector512.LoadUnsafe(ref _lowY[first]));
         var high = segment.HeightsOf(Vector512.LoadUnsafe(ref _highX[first]), Vector512.LoadUnsafe(ref _highY[first]));
-        var sides = Vector512.LessThanOrEqual(low, Vector512<double>.Zero) ^ Vector512.LessThanOrEqual(high, Vector512<double>.Zero);
-        for (var met = sides.ExtractMostSignificantBits(); met != 0; met &= met - 1)
-        {
-            ref readonly var edge = ref _edges[first + BitOperations.TrailingZeroCount(met)];
-            if (segment.Crosses(edge, out var along, out var leaves))
-            {
-                output.SetCrossing(count++, along, leaves);
-            }
-        }
+        return (Vector512.LessThanOrEqual(low, Vector512<double>.Zero) ^ Vector512.LessThanOrEqual(high, Vector512<double>.Zero))
+            .ExtractMostSignificantBits();
     }
 
     private static FrameShape.Edge[] InOrder(FrameShape shape, ReadOnlySpan<int> ringStarts)
@@ -150,6 +188,8 @@ internal sealed class EdgeTree
         private readonly float _middleY;
         private readonly float _directionX;
         private readonly float _directionY;
+        private readonly float _steepness;
+        private readonly float _flatness;
         private readonly float _reachX;
         private readonly float _reachY;
         private readonly float _reachBeside;
@@ -160,6 +200,7 @@ internal sealed class EdgeTree
             var margin = Margin * ((shape.MaxX - shape.MinX) + (shape.MaxY - shape.MinY) + segment.Length + Math.Abs(x) + Math.Abs(y));
             (_middleX, _middleY) = ((float)x, (float)y);
             (_directionX, _directionY) = ((float)segment.DirectionX, (float)segment.DirectionY);
+            (_steepness, _flatness) = (Math.Abs(_directionY), Math.Abs(_directionX));
             _reachX = (float)((Math.Abs(segment.DirectionX) * segment.Length / 2) + margin);
             _reachY = (float)((Math.Abs(segment.DirectionY) * segment.Length / 2) + margin);
             _reachBeside = (float)margin;
@@ -171,9 +212,10 @@ internal sealed class EdgeTree
             // A segment misses a box where a line along x, along y or along the segment parts them.
             var fromX = boxX - Vector512.Create(_middleX);
             var fromY = boxY - Vector512.Create(_middleY);
-            var beside = Vector512.Abs((fromY * _directionX) - (fromX * _directionY));
-            var reach = (halfX * Math.Abs(_directionY)) + (halfY * Math.Abs(_directionX)) + Vector512.Create(_reachBeside);
-            return (Vector512.LessThanOrEqual(beside, reach)
+            var beside = Vector512.MultiplyAddEstimate(fromY, Vector512.Create(_directionX), fromX * Vector512.Create(-_directionY));
+            var reach = Vector512.MultiplyAddEstimate(halfX, Vector512.Create(_steepness), Vector512.Create(_reachBeside));
+            reach = Vector512.MultiplyAddEstimate(halfY, Vector512.Create(_flatness), reach);
+            return (Vector512.LessThanOrEqual(Vector512.Abs(beside), reach)
                 & Vector512.LessThanOrEqual(Vector512.Abs(fromX), halfX + Vector512.Create(_reachX))
                 & Vector512.LessThanOrEqual(Vector512.Abs(fromY), halfY + Vector512.Create(_reachY)))
                 .ExtractMostSignificantBits();

@@ -12,9 +12,13 @@ internal sealed class PieceBuffer
     private Piece[] _pieces = new Piece[256];
 
     private bool[] _leaves = new bool[64];
+    private int[] _moreBoxes = new int[256];
 
     /// <summary>Room for the crossings of one line; see <see cref="FrameShape.CrossingsAt"/>.</summary>
     public double[] Crossings = new double[64];
+
+    /// <summary>Room for the boxes of a tree that a slanted line meets.</summary>
+    public int[] FoundBoxes { get; private set; } = new int[256];
 
     /// <summary>Room for the turns of one zigzag.</summary>
     public List<Turn> Turns { get; } = [];
@@ -45,6 +49,20 @@ internal sealed class PieceBuffer
     }
 
     public void Clear() => Count = 0;
+
+    /// <summary>Room for so many boxes of the next level.</summary>
+    public Span<int> MoreBoxes(int count)
+    {
+        if (_moreBoxes.Length < count)
+        {
+            _moreBoxes = new int[2 * count];
+        }
+
+        return _moreBoxes;
+    }
+
+    /// <summary>The boxes of the next level are those found now.</summary>
+    public void SwapBoxes() => (FoundBoxes, _moreBoxes) = (_moreBoxes, FoundBoxes);
 
     /// <summary>Whether each crossing of a slanted line goes from the inside to the outside.</summary>
     public ReadOnlySpan<bool> Leaves => _leaves;
