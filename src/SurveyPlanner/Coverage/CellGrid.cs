@@ -76,7 +76,7 @@ internal sealed class CellGrid
     /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
     public int FirstRowFrom(double y) => _rows.FirstFrom(RowY, _rowSlots, y);
 
-    /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end.</summary>
+    /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end, not after it where there are none.</summary>
     public (int First, int End) Run(int row, double low, double high)
     {
         var (start, count) = (RowStarts[row], RowStarts[row + 1] - RowStarts[row]);

@@ -60,11 +60,25 @@ internal static class Clipper
         return (low, high);
     }
 
-    /// <summary>
-    /// Whether the stretch before the first crossing is inside. Asked of the longest stretch, where rounding cannot matter,
-    /// and counted back: every crossing changes sides.
-    /// </summary>
+    /// <summary>Whether the stretch before the first crossing is inside: the crossings know, which by turns go in and out.</summary>
     private static bool IsInsideAtStart(FrameShape shape, in Segment segment, ReadOnlySpan<double> cuts, ReadOnlySpan<bool> leaves)
+    {
+        for (var i = 1; i < cuts.Length; i++)
+        {
+            // Not where two are at the same place, at a shared border or a vertex: only rounding put them in order.
+            if (leaves[i] == leaves[i - 1] || cuts[i] - cuts[i - 1] < ShortestMetres)
+            {
+                return IsInsideByLongest(shape, segment, cuts);
+            }
+        }
+
+        return cuts.Length > 0 ? leaves[0] : IsInside(shape, segment, 0, segment.Length);
+    }
+
+    /// <summary>
+    /// The same, asked within the longest stretch, where rounding cannot matter, and counted back: every crossing changes sides.
+    /// </summary>
+    private static bool IsInsideByLongest(FrameShape shape, in Segment segment, ReadOnlySpan<double> cuts)
     {
         var (longest, start, index) = (-1.0, 0.0, 0);
         for (var i = 0; i <= cuts.Length; i++)
@@ -76,13 +90,7 @@ internal static class Clipper
             }
         }
 
-        // The crossings at its two ends know. They contradict each other where one of them is at the same place as a third, and only rounding put
-        // them in order: then the place itself is asked.
-        bool? before = index > 0 ? !leaves[index - 1] : null;
-        bool? after = index < cuts.Length ? leaves[index] : null;
-        var known = before ?? after;
-        var isInside = known is { } one && one == (after ?? one) ? one : IsInside(shape, segment, start, longest);
-        return isInside == (index % 2 == 0);
+        return IsInside(shape, segment, start, longest) == (index % 2 == 0);
     }
 
     /// <summary>Whether a stretch without crossings is inside.</summary>

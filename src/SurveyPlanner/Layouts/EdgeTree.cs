@@ -22,11 +22,8 @@ internal sealed class EdgeTree
     private readonly FrameShape _shape;
     private readonly FrameShape.Edge[] _edges;
 
-    // Ends of all edges, in a length that eight divides; what is filled up crosses nothing.
-    private readonly double[] _lowX;
-    private readonly double[] _lowY;
-    private readonly double[] _highX;
-    private readonly double[] _highY;
+    // Ends of the edges, eight by eight: x of their lower ends, y of those, then the same of their upper ends. What is filled up crosses nothing.
+    private readonly double[] _ends;
 
     // From boxes of edges up to a few; and the numbers of all sixteens of those.
     private readonly BoxLevel[] _levels;
@@ -38,8 +35,13 @@ internal sealed class EdgeTree
     {
         _shape = shape;
         _edges = InOrder(shape, ringStarts);
-        (_lowX, _lowY) = (Filled(edge => edge.LowX), Filled(edge => edge.LowY));
-        (_highX, _highY) = (Filled(edge => edge.HighX), Filled(edge => edge.HighY));
+        _ends = new double[4 * RoundedUp(_edges.Length, EdgesPerBox)];
+        for (var i = 0; i < _edges.Length; i++)
+        {
+            ref readonly var edge = ref _edges[i];
+            Blocks.Set(_ends, i, EdgesPerBox, edge.LowX, edge.LowY, edge.HighX, edge.HighY);
+        }
+
         var boxes = Array.ConvertAll(_edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
         var levels = new List<BoxLevel>();
         for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > MostAtTop; inEach = BoxesPerBox)
@@ -77,7 +79,7 @@ internal sealed class EdgeTree
             var met = 0UL;
             for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                met |= level.Met(boxes[i] * BoxesPerBox, probe) << (BoxesPerBox * (i - first));
+                met |= level.Met(boxes[i], probe) << (BoxesPerBox * (i - first));
             }
 
             for (; met != 0; met &= met - 1)
@@ -99,7 +101,7 @@ internal sealed class EdgeTree
             var met = 0UL;
             for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                met |= Straddles(boxes[i] * EdgesPerBox, segment) << (EdgesPerBox * (i - first));
+                met |= Straddles(boxes[i], segment) << (EdgesPerBox * (i - first));
             }
 
             for (; met != 0; met &= met - 1)
@@ -116,11 +118,12 @@ internal sealed class EdgeTree
         return count;
     }
 
-    /// <summary>Of eight edges, one bit for each whose ends lie on different sides of the segment's line.</summary>
-    private ulong Straddles(int first, in Segment segment)
+    /// <summary>Of the eight edges in a box, one bit for each whose ends lie on different sides of the segment's line.</summary>
+    private ulong Straddles(int box, in Segment segment)
     {
-        var low = segment.HeightsOf(Vector512.LoadUnsafe(ref _lowX[first]), Vector512.LoadUnsafe(ref _lowY[first]));
-        var high = segment.HeightsOf(Vector512.LoadUnsafe(ref _highX[first]), Vector512.LoadUnsafe(ref _highY[first]));
+        ref var ends = ref _ends[4 * EdgesPerBox * box];
+        var low = segment.HeightsOf(Vector512.LoadUnsafe(ref ends), Vector512.LoadUnsafe(ref ends, EdgesPerBox));
+        var high = segment.HeightsOf(Vector512.LoadUnsafe(ref ends, 2 * EdgesPerBox), Vector512.LoadUnsafe(ref ends, 3 * EdgesPerBox));
         return (Vector512.LessThanOrEqual(low, Vector512<double>.Zero) ^ Vector512.LessThanOrEqual(high, Vector512<double>.Zero))
             .ExtractMostSignificantBits();
     }
@@ -159,16 +162,7 @@ internal sealed class EdgeTree
         return (bits | (bits << 1)) & 0x55555555;
     }
 
-    private double[] Filled(Func<FrameShape.Edge, double> end)
-    {
-        var filled = new double[(_edges.Length + EdgesPerBox - 1) / EdgesPerBox * EdgesPerBox];
-        for (var i = 0; i < _edges.Length; i++)
-        {
-            filled[i] = end(_edges[i]);
-        }
-
-        return filled;
-    }
+    private static int RoundedUp(int count, int to) => (count + to - 1) / to * to;
 
     private readonly record struct Box(double LowX, double HighX, double LowY, double HighY)
     {
@@ -223,37 +217,51 @@ internal sealed class EdgeTree
     }
 
     /// <summary>
-    /// Boxes by their middles, from the middle of the shape, and half sides, metres; in a length that sixteen divides, and what is filled up meets
-    /// nothing.
+    /// Boxes by their middles, from the middle of the shape, and half sides, metres, sixteen by sixteen: x and y of middles, then halves along x and y.
+    /// What is filled up meets nothing.
     /// </summary>
     private sealed class BoxLevel
     {
-        private readonly float[] _middleX;
-        private readonly float[] _middleY;
-        private readonly float[] _halfX;
-        private readonly float[] _halfY;
+        private readonly float[] _boxes;
 
         public BoxLevel(Box[] boxes, FrameShape shape)
         {
             var (centreX, centreY) = ((shape.MinX + shape.MaxX) / 2, (shape.MinY + shape.MaxY) / 2);
-            var length = (boxes.Length + BoxesPerBox - 1) / BoxesPerBox * BoxesPerBox;
-            (_middleX, _middleY) = (new float[length], new float[length]);
-            (_halfX, _halfY) = (new float[length], new float[length]);
-            Array.Fill(_middleX, float.PositiveInfinity);
+            _boxes = new float[4 * RoundedUp(boxes.Length, BoxesPerBox)];
+            Array.Fill(_boxes, float.NaN);
             for (var i = 0; i < boxes.Length; i++)
             {
                 var box = boxes[i];
-                (_middleX[i], _middleY[i]) = ((float)(((box.LowX + box.HighX) / 2) - centreX), (float)(((box.LowY + box.HighY) / 2) - centreY));
-                (_halfX[i], _halfY[i]) = ((float)((box.HighX - box.LowX) / 2), (float)((box.HighY - box.LowY) / 2));
+                Blocks.Set(
+                    _boxes,
+                    i,
+                    BoxesPerBox,
+                    (float)(((box.LowX + box.HighX) / 2) - centreX),
+                    (float)(((box.LowY + box.HighY) / 2) - centreY),
+                    (float)((box.HighX - box.LowX) / 2),
+                    (float)((box.HighY - box.LowY) / 2));
             }
         }
 
-        /// <summary>Of the sixteen boxes from a number on, one bit for each that the segment meets.</summary>
-        public ulong Met(int first, in Probe probe)
-            => probe.Meets(
-                Vector512.LoadUnsafe(ref _middleX[first]),
-                Vector512.LoadUnsafe(ref _middleY[first]),
-                Vector512.LoadUnsafe(ref _halfX[first]),
-                Vector512.LoadUnsafe(ref _halfY[first]));
+        /// <summary>Of the sixteen boxes in a box, one bit for each that the segment meets.</summary>
+        public ulong Met(int box, in Probe probe)
+        {
+            ref var first = ref _boxes[4 * BoxesPerBox * box];
+            return probe.Meets(
+                Vector512.LoadUnsafe(ref first),
+                Vector512.LoadUnsafe(ref first, BoxesPerBox),
+                Vector512.LoadUnsafe(ref first, 2 * BoxesPerBox),
+                Vector512.LoadUnsafe(ref first, 3 * BoxesPerBox));
+        }
+    }
+
+    /// <summary>Four numbers of each of many things, kept in blocks: the first of eight or sixteen of them, then the second, and so on.</summary>
+    private static class Blocks
+    {
+        public static void Set<T>(T[] blocks, int index, int perBlock, T first, T second, T third, T fourth)
+        {
+            var at = (4 * (index - (index % perBlock))) + (index % perBlock);
+            (blocks[at], blocks[at + perBlock], blocks[at + (2 * perBlock)], blocks[at + (3 * perBlock)]) = (first, second, third, fourth);
+        }
     }
 }

@@ -48,8 +48,8 @@ public class CellGridTests
                 var low = n % 2 == 0 ? x[(int)random.NextBelow((uint)x.Length)] : shape.MinX + (random.NextDouble() * (shape.MaxX - shape.MinX));
                 var high = n % 3 == 0 ? x[(int)random.NextBelow((uint)x.Length)] : low + (random.NextDouble() * 9_000);
                 var (first, end) = grid.Run(row, low, high);
-                Assert.Equal(Enumerable.Range(0, x.Length + 1).First(i => i == grid.RowStarts[row + 1] - grid.RowStarts[row] || grid.X[grid.RowStarts[row] + i] >= low), first - grid.RowStarts[row]);
-                Assert.Equal(x.ToArray().Count(place => place <= high), end - grid.RowStarts[row]);
+                var within = Enumerable.Range(0, x.Length).Where(i => grid.X[grid.RowStarts[row] + i] >= low && grid.X[grid.RowStarts[row] + i] <= high);
+                Assert.Equal(within.Select(i => grid.RowStarts[row] + i), first < end ? Enumerable.Range(first, end - first) : []);
 
                 var y = shape.MinY - 100 + (random.NextDouble() * (shape.MaxY - shape.MinY + 200));
                 Assert.Equal(grid.RowY.Count(rowY => rowY < y), grid.FirstRowFrom(y));
