@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Text;
+using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 using SurveyPlanner.Files.Tables;
 
@@ -26,7 +27,7 @@ internal static class CoverageCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
+            using var target = folder is null ? null : OutputFolder.Reserve(folder, parsed.GetValue(options.Force), stop);
             var quiet = parsed.GetValue(options.Quiet);
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
@@ -38,7 +39,7 @@ internal static class CoverageCommand
             }
 
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, run);
-            target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)], stop);
+            target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)]);
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))
@@ -55,7 +56,7 @@ internal static class CoverageCommand
     }
 
     /// <summary>The table of positions with their coverage: into the folder, or to standard output.</summary>
-    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputTarget? target, RunOptions run)
+    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputFolder? target, RunOptions run)
     {
         var table = CoverageAtTable.Read(path);
         var file = table.Write(OutputNames.CoverageAt, PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run));
@@ -65,7 +66,7 @@ internal static class CoverageCommand
         }
         else
         {
-            target.Write([file], run.Stop);
+            target.Write([file]);
         }
 
         return ExitCodes.Done;

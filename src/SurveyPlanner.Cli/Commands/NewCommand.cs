@@ -31,6 +31,11 @@ internal static class NewCommand
         return command.Runs(options, terminal, (parsed, _) =>
         {
             var path = parsed.GetValue(boundary)!;
+            if (Path.GetExtension(path).Equals(".toml", StringComparison.OrdinalIgnoreCase) && File.Exists(path))
+            {
+                throw new InputException(new Problem($"this is a plan already; look at it with: survey-planner check {path}", path));
+            }
+
             var planPath = parsed.GetValue(file) ?? Path.ChangeExtension(path, ".toml");
             if (File.Exists(planPath) && !parsed.GetValue(options.Force))
             {

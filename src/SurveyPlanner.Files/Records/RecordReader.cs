@@ -23,6 +23,11 @@ public static class RecordReader
                 throw new InputException(new Problem($"This is a folder; give the {OutputNames.Record} in it.", file));
             }
 
+            if (!File.Exists(file))
+            {
+                throw new InputException(new Problem($"There is no record of this name; give the {OutputNames.Record} in an output folder.", file));
+            }
+
             if (new FileInfo(file).Length > MaxBytes)
             {
                 throw new InputException(new Problem("This file is too large to be a record.", file));
