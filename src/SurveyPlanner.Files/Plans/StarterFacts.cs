@@ -8,12 +8,17 @@ namespace SurveyPlanner.Files.Plans;
 /// <param name="AreaKm2">Area of the region, square kilometres.</param>
 /// <param name="LongAxisKm">Long side of the narrowest rectangle round it, kilometres.</param>
 /// <param name="ShortAxisKm">Short side, kilometres.</param>
+/// <param name="LinesAcrossKm">
+/// How much of the long side lines along the short axis can fall on, kilometres; gaps between parts of the region are left out, so that
+/// the expected number of lines is this over their spacing.
+/// </param>
 /// <param name="StratumFields">Attributes of the boundary that could name strata, the likeliest first.</param>
 public sealed record StarterFacts(
     string SurveyName,
     double AreaKm2,
     double LongAxisKm,
     double ShortAxisKm,
+    double LinesAcrossKm,
     ImmutableArray<StratumFieldCandidate> StratumFields)
 {
     /// <summary>More parts than this are features of a map, not strata of a survey.</summary>
@@ -21,14 +26,34 @@ public sealed record StarterFacts(
 
     private const int MostCandidates = 5;
 
+    /// <summary>Lines laid out to see how many a spacing brings; any number would do.</summary>
+    private const string TrialPlan = """
+        [survey]
+        seed = 1
+        [region]
+        boundary = "trial"
+        [layout]
+        kind = "parallel"
+        bearing = "short-axis"
+        lines = 20
+        half_width = "1 m"
+        """;
+
     /// <summary>The facts of a boundary that was read as one stratum.</summary>
     /// <param name="surveyName">Name of the survey to begin with, such as the file's name without its extension.</param>
     /// <param name="boundary">The boundary.</param>
-    /// <param name="region">The region built from it without a stratum field.</param>
-    public static StarterFacts Of(string surveyName, Boundary boundary, Region region)
+    /// <exception cref="InputException">The boundary makes no region.</exception>
+    public static StarterFacts Of(string surveyName, Boundary boundary)
     {
-        var largest = region.Strata.MaxBy(stratum => stratum.AreaKm2)!;
-        return new StarterFacts(surveyName, region.AreaKm2, largest.LongAxisKm, largest.ShortAxisKm, Candidates(boundary));
+        var trial = PlanSurvey.DrawOnly(PlanFileReader.Parse(TrialPlan, "trial.toml", []).Design, new SurveyInputs(boundary, [], null));
+        var (region, layout) = (trial.Strata[0].Stratum, trial.Strata[0].Layout);
+        return new StarterFacts(
+            surveyName,
+            region.AreaKm2,
+            region.LongAxisKm,
+            region.ShortAxisKm,
+            layout.ExpectedCount * layout.SpacingMetres / 1000,
+            Candidates(boundary));
     }
 
     /// <summary>Attributes that every feature has and that tell at least two groups of them apart, the fewest groups first.</summary>
