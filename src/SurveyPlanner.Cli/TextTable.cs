@@ -6,6 +6,7 @@ namespace SurveyPlanner.Cli;
 internal sealed class TextTable(params string[] header)
 {
     private const int MaxCell = 24;
+    private const int MaxTail = 8;
 
     private readonly List<string[]> _rows = [];
 
@@ -55,10 +56,12 @@ internal sealed class TextTable(params string[] header)
 
     private static bool IsFigure(char c) => char.IsAsciiDigit(c) || c == '-';
 
-    /// <summary>Names may hold anything, and be of any length.</summary>
+    /// <summary>Names may hold anything, and be of any length; those that begin alike mostly differ at their end.</summary>
     private static string Plain(string cell)
     {
-        var plain = string.Concat(cell.Select(c => char.IsControl(c) ? ' ' : c));
-        return plain.Length <= MaxCell ? plain : string.Concat(plain.AsSpan(0, MaxCell - 1), "…");
+        var plain = new StringInfo(string.Concat(cell.Select(c => char.IsControl(c) ? ' ' : c)));
+        return plain.LengthInTextElements <= MaxCell
+            ? plain.String
+            : plain.SubstringByTextElements(0, MaxCell - 1 - MaxTail) + "…" + plain.SubstringByTextElements(plain.LengthInTextElements - MaxTail);
     }
 }

@@ -32,14 +32,17 @@ public static class SummaryWriter
         json.Array("strata", plan.Strata, stratum => WriteStratum(json, stratum, plan.Effort));
         if (plan.Effort is { } effort)
         {
-            json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(plan.Delivered));
+            json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(plan.Design.Effort.Allocation, plan.Delivered));
         }
 
         json.WriteEndObject();
     }
 
     /// <summary>What <c>effort --json</c> prints: the effort of each stratum and as a whole, in the same form.</summary>
-    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort)
+    /// <param name="json">The writer.</param>
+    /// <param name="effort">The effort.</param>
+    /// <param name="planned">How the plan shares it among several strata.</param>
+    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort, Allocation planned)
     {
         json.WriteStartObject();
         json.WriteNumber("format_version", FormatVersion);
@@ -50,7 +53,7 @@ public static class SummaryWriter
             WriteEffort(json, stratum.Name, effort);
             json.WriteEndObject();
         });
-        json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(delivered: null));
+        json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(planned, delivered: null));
         json.WriteEndObject();
     }
 
