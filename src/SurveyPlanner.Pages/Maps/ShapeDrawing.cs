@@ -62,6 +62,25 @@ public sealed record ShapeDrawing(IReadOnlyList<Pixel[]> Rings)
         return places.Length > 0 ? places : [new Pixel((minX + maxX) / 2, (minY + maxY) / 2)];
     }
 
+    /// <summary>How long a text in the middle of which a place lies may be without leaving the shape on either side.</summary>
+    public double WidthAt(Pixel place)
+    {
+        var nearest = double.MaxValue;
+        foreach (var ring in Rings)
+        {
+            for (var i = 0; i < ring.Length; i++)
+            {
+                var (a, b) = (ring[i], ring[(i + 1) % ring.Length]);
+                if ((a.Y > place.Y) != (b.Y > place.Y))
+                {
+                    nearest = Math.Min(nearest, Math.Abs(a.X + ((b.X - a.X) * (place.Y - a.Y) / (b.Y - a.Y)) - place.X));
+                }
+            }
+        }
+
+        return 2 * nearest;
+    }
+
     // A name is wider than high: room to the sides counts for less.
     private double Room(Pixel place)
     {

@@ -1,3 +1,4 @@
+using System.Globalization;
 using SurveyPlanner.Pages.Look;
 using SurveyPlanner.Pages.Words;
 using SurveyPlanner.Regions;
@@ -8,7 +9,10 @@ namespace SurveyPlanner.Pages.Maps;
 public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string Exclusions)
 {
     public const double NameSize = 14;
-    private const int LongestName = 28;
+
+    // A name is written out up to the first; a longer one is cut to the room there is, but never below the second.
+    private const double LongestName = 235;
+    private const double ShortestCut = 118;
 
     /// <summary>A lone stratum needs no name: the map's title has it.</summary>
     internal static StrataDrawing Of(Region region, MapFrame frame, LabelPlacer placer)
@@ -25,8 +29,7 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
 
     private static Label NameLabel(string name, ShapeDrawing shape, LabelPlacer placer)
     {
-        var text = PlainText.Shorten(name, LongestName);
-        var candidates = shape.RoomiestPlaces(120).Select(place => new Label(text, place with { Y = place.Y + (NameSize / 3) })).ToArray();
+        var candidates = shape.RoomiestPlaces(120).Select(place => new Label(Fitted(name, shape, place), place with { Y = place.Y + (NameSize / 3) })).ToArray();
         if (candidates.FirstOrDefault(label => placer.TryPlace(label, NameSize)) is { } free)
         {
             return free;
@@ -35,6 +38,14 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
         // A stratum is never without its name, even where names must touch.
         placer.Place(candidates[0], NameSize);
         return candidates[0];
+    }
+
+    private static string Fitted(string name, ShapeDrawing shape, Pixel place)
+    {
+        var length = LabelPlacer.LengthOf(name, NameSize);
+        return length <= LongestName
+            ? name
+            : PlainText.Shorten(name, (int)(Math.Clamp(shape.WidthAt(place), ShortestCut, LongestName) / length * new StringInfo(name).LengthInTextElements));
     }
 
     // Neighbours (strata that share a vertex on the drawing) get different fills as far as four allow.

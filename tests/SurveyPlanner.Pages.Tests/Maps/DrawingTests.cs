@@ -49,6 +49,34 @@ public partial class DrawingTests
         Assert.True(towards > 0);
     }
 
+    /// <summary>Two strata side by side, one five times as wide: a name of 80 characters is cut to what its stratum has room for, a common one not at all.</summary>
+    [Fact]
+    public void Long_names_are_cut_to_their_stratum()
+    {
+        var west = "Administrativebezirkgrenzüberschreitenderzusammenarbeitsgebietnordwestlichersektor";
+        var east = new string('区', 60);
+        var plan = SamplePlan.Of(SampleBoundary.Boxes((west, 20, 0, 25, 5), (east, 25, 0, 26, 5), ("inner bay", 26, 0, 26.5, 5)), SamplePlan.Parallel(100_000), stratumField: "name", cells: 100);
+        var frame = MapFrame.Around(plan.Region.Strata.Select(stratum => stratum.Shape), []);
+        var strata = StrataDrawing.Of(plan.Region, frame, new LabelPlacer(frame.Width, frame.Height)).Strata;
+        var names = strata.Select(stratum => stratum.NameLabel!.Text).ToArray();
+
+        Assert.InRange(names[0].Length, 26, 28);
+        Assert.Equal(("Administrative", "sektor"), (names[0][..14], names[0][^6..]));
+        Assert.InRange(names[1].Length, 8, 14);
+        Assert.InRange(LabelPlacer.LengthOf(names[1], StrataDrawing.NameSize), 0, 1.1 * strata[1].Shape.WidthAt(strata[1].NameLabel!.Place));
+        Assert.Equal("inner bay", names[2]);
+    }
+
+    [Fact]
+    public void The_width_at_a_place_is_twice_the_way_to_the_nearer_side()
+    {
+        // A square of 100 with a hole of 20 in its middle.
+        var shape = new ShapeDrawing([[new(0, 0), new(100, 0), new(100, 100), new(0, 100)], [new(40, 40), new(60, 40), new(60, 60), new(40, 60)]]);
+        Assert.Equal(60, shape.WidthAt(new Pixel(30, 20)), 1e-9);
+        Assert.Equal(20, shape.WidthAt(new Pixel(30, 50)), 1e-9);
+        Assert.Equal(100, shape.WidthAt(new Pixel(50, 90)), 1e-9);
+    }
+
     [Theory]
     [InlineData(178, -17)]
     [InlineData(21, 60)]
