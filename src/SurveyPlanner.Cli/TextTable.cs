@@ -54,7 +54,7 @@ internal sealed class TextTable(params string[] header)
 
     private bool IsText(int column) => column == 0 || _rows.Any(row => row[column].Length > 0 && !IsFigure(row[column][0]));
 
-    private static bool IsFigure(char c) => char.IsAsciiDigit(c) || c == '-';
+    private static bool IsFigure(char c) => char.IsAsciiDigit(c) || c is '-' or '+';
 
     /// <summary>Names may hold anything, and be of any length; those that begin alike mostly differ at their end.</summary>
     private static string Plain(string cell)

@@ -35,11 +35,12 @@ internal static class CoverageCommand
             var run = new RunOptions(options.ThreadsOf(parsed), progress, stop);
             if (parsed.GetValue(at) is { } positions)
             {
-                return AtPositions(terminal, loaded, positions, target, run);
+                return AtPositions(terminal, loaded, positions, target, run, parsed.GetValue(options.Json));
             }
 
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, run);
-            target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)]);
+            OutputFile[] files = [CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)];
+            target?.Write(files);
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))
@@ -49,24 +50,31 @@ internal static class CoverageCommand
             else
             {
                 PlanText.WriteCoverage(terminal.Out, plan);
+                CommandFrame.TellWritten(terminal, files, folder);
             }
 
             return ExitCodes.Done;
         });
     }
 
-    /// <summary>The table of positions with their coverage: into the folder, or to standard output.</summary>
-    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputFolder? target, RunOptions run)
+    /// <summary>The table of positions with their coverage: into the folder, or to standard output unless that takes JSON.</summary>
+    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputFolder? target, RunOptions run, bool json)
     {
         var table = CoverageAtTable.Read(path);
-        var file = table.Write(OutputNames.CoverageAt, PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run));
-        if (target is null)
+        var coverages = PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run);
+        var file = table.Write(OutputNames.CoverageAt, coverages);
+        target?.Write([file]);
+        if (json)
+        {
+            terminal.Out.WriteLine(JsonDocumentText.Of(writer => SummaryWriter.WriteCoverageAt(writer, coverages)));
+        }
+        else if (target is null)
         {
             terminal.Out.Write(Encoding.UTF8.GetString(file.Content.Span));
         }
         else
         {
-            target.Write([file]);
+            terminal.Out.WriteLine($"{coverages.Count(one => !one.IsOutside)} of {coverages.Length} positions lie in the region; wrote {Path.Combine(target.Folder, file.Name)}");
         }
 
         return ExitCodes.Done;

@@ -40,7 +40,14 @@ internal static class ReplayCommand
             var result = Replay.Compare(recorded, plan, files);
             target?.Write(files);
 
-            return Say(result, recorded, terminal, parsed.GetValue(options.Json));
+            var json = parsed.GetValue(options.Json);
+            var code = Say(result, recorded, terminal, json);
+            if (!json)
+            {
+                CommandFrame.TellWritten(terminal, files, folder);
+            }
+
+            return code;
         });
     }
 

@@ -40,6 +40,9 @@ public sealed class OutputFolder : IDisposable
         _whenStopped = stop.Register(Release);
     }
 
+    /// <summary>The folder as the user named it.</summary>
+    public string Folder => _path;
+
     /// <summary>Takes the folder for this run until it is disposed of or stopped.</summary>
     /// <param name="path">The folder to write, as the user named it; folders above it that are missing are made, and taken away again if nothing is written.</param>
     /// <param name="force">Whether a folder of an earlier run may be replaced. One with anything else in it never is.</param>

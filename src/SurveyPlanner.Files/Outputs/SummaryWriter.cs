@@ -1,5 +1,7 @@
 using System.Text.Json;
+using SurveyPlanner.Coverage;
 using SurveyPlanner.Effort;
+using SurveyPlanner.Files.Tables;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
 
@@ -54,6 +56,26 @@ public static class SummaryWriter
             json.WriteEndObject();
         });
         json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(planned, delivered: null));
+        json.WriteEndObject();
+    }
+
+    /// <summary>What <c>coverage --at --json</c> prints: the table of positions, a member a column.</summary>
+    public static void WriteCoverageAt(Utf8JsonWriter json, IEnumerable<PositionCoverage> positions)
+    {
+        json.WriteStartObject();
+        json.WriteNumber("format_version", FormatVersion);
+        json.Array("positions", positions, one =>
+        {
+            json.WriteStartObject();
+            json.Figure("lon", Figures.Longitude(one.Position.Lon));
+            json.Figure("lat", Figures.Degrees(one.Position.Lat));
+            json.Text("stratum", one.Stratum);
+            json.Number("coverage", one.Best);
+            json.Number("standard_error", one.Exact is null ? one.StandardError : null);
+            json.Number("times_covered", one.ExpectedTimes);
+            json.WriteString("method", CoverageAtTable.Method(one));
+            json.WriteEndObject();
+        });
         json.WriteEndObject();
     }
 

@@ -117,7 +117,7 @@ public sealed class CoverageAtTable
     {
         if (coverage.IsOutside)
         {
-            return ["", "", "", "", "outside"];
+            return ["", "", "", "", Method(coverage)];
         }
 
         static string Figure(double? value) => value is { } known ? Figures.Significant(known, Digits) : "";
@@ -128,7 +128,10 @@ public sealed class CoverageAtTable
             Figure(coverage.Best),
             isExact ? "" : Figure(coverage.StandardError),
             Figure(coverage.ExpectedTimes),
-            isExact ? "exact" : "simulated",
+            Method(coverage),
         ];
     }
+
+    /// <summary>How the coverage at a position is known.</summary>
+    internal static string Method(PositionCoverage coverage) => coverage.IsOutside ? "outside" : coverage.Exact is not null ? "exact" : "simulated";
 }

@@ -74,6 +74,14 @@ public class FiguresTests
         => Assert.Equal(expected, PlainText.SettleReferences(html));
 
     [Theory]
+    [InlineData(0, "0")]
+    [InlineData(1.01e-7, "under 0.001")]
+    [InlineData(0.00001, "0.00100")]
+    [InlineData(0.0137, "1.37")]
+    [InlineData(1, "100")]
+    public void A_sliver_of_area_is_not_given_digits(double share, string expected) => Assert.Equal(expected, Figures.AreaShare(share));
+
+    [Theory]
     [InlineData("Outer sound")]
     [InlineData("Administrativebezirkgrenzüberschreitenderzusammenarbeitsgebiet nordwestlich")]
     [InlineData("👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬")]
