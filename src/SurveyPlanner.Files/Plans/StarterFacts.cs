@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using SurveyPlanner.Files.Units;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Files.Plans;
@@ -56,7 +57,7 @@ public sealed record StarterFacts(
             Candidates(boundary));
     }
 
-    /// <summary>Attributes that every feature has and that tell at least two groups of them apart, the fewest groups first.</summary>
+    /// <summary>Attributes that every feature has and that tell at least two groups of them apart: names before numbers, the fewest groups first.</summary>
     private static ImmutableArray<StratumFieldCandidate> Candidates(Boundary boundary)
         =>
         [
@@ -66,7 +67,8 @@ public sealed record StarterFacts(
                 .Where(field => !string.IsNullOrWhiteSpace(field))
                 .Select(field => new StratumFieldCandidate(field, [.. boundary.Features.Select(feature => feature.Attributes.GetValueOrDefault(field, "")).Distinct()]))
                 .Where(candidate => candidate.Values.Length is >= 2 and <= MostStrata && !candidate.Values.Any(string.IsNullOrWhiteSpace))
-                .OrderBy(candidate => candidate.Values.Length)
+                .OrderBy(candidate => candidate.Values.All(value => DecimalText.Read(value).Complaint is null))
+                .ThenBy(candidate => candidate.Values.Length)
                 .ThenBy(candidate => candidate.Field, StringComparer.Ordinal)
                 .Take(MostCandidates),
         ];

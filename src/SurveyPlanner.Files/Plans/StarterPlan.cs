@@ -90,7 +90,7 @@ public static class StarterPlan
             var strata = string.Create(CultureInfo.InvariantCulture, $"{candidate.Values.Length} strata: {string.Join(", ", shown)}{more}");
             return i == 0
                 ? $"# stratum_field = {Padded(Quoted.Text(candidate.Field), 21)} # {strata}"
-                : $"#   or the field {Quoted.Text(candidate.Field)} # {strata}";
+                : $"#   or the field {Padded(Quoted.Text(candidate.Field), 21)} # {strata}";
         });
         return string.Join('\n', notes);
     }

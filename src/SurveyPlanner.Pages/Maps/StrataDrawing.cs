@@ -14,6 +14,8 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
     private const double LongestName = 235;
     private const double ShortestCut = 118;
 
+    private const double SpotPixels = 3;
+
     /// <summary>A lone stratum needs no name: the map's title has it.</summary>
     internal static StrataDrawing Of(Region region, MapFrame frame, LabelPlacer placer)
     {
@@ -48,19 +50,29 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
             : PlainText.Shorten(name, (int)(Math.Clamp(shape.WidthAt(place), ShortestCut, LongestName) / length * new StringInfo(name).LengthInTextElements));
     }
 
-    // Neighbours (strata that share a vertex on the drawing) get different fills as far as four allow.
+    // Neighbours (strata whose edges run over the same spot of the drawing) get different fills as far as four allow, and so do all while there are no more than four.
     private static int[] FillsFor(ShapeDrawing[] shapes)
     {
-        var corners = shapes.Select(shape => shape.Rings.SelectMany(ring => ring).Select(p => ((int)p.X, (int)p.Y)).ToHashSet()).ToArray();
+        var edges = shapes.Select(shape => shape.Rings.SelectMany(Spots).ToHashSet()).ToArray();
         var fills = new int[shapes.Length];
         for (var i = 0; i < shapes.Length; i++)
         {
-            var used = Enumerable.Range(0, i).Where(j => corners[i].Overlaps(corners[j])).Select(j => fills[j]).ToArray();
-            fills[i] = Enumerable.Range(0, Tokens.StratumFills.Count).OrderBy(fill => used.Count(u => u == fill)).ThenBy(fill => fill).First();
+            var used = Enumerable.Range(0, i).Where(j => edges[i].Overlaps(edges[j])).Select(j => fills[j]).ToArray();
+            fills[i] = Enumerable.Range(0, Tokens.StratumFills.Count)
+                .OrderBy(fill => used.Count(u => u == fill)).ThenBy(fill => fills.AsSpan(0, i).Count(fill)).ThenBy(fill => fill).First();
         }
 
         return fills;
     }
+
+    // A step of half a spot's side misses none that the edge runs through for long.
+    private static IEnumerable<(int, int)> Spots(Pixel[] ring)
+        => from i in Enumerable.Range(0, ring.Length)
+           let a = ring[i]
+           let b = ring[(i + 1) % ring.Length]
+           let steps = Math.Max(1, (int)(a.DistanceTo(b) / (SpotPixels / 2)))
+           from step in Enumerable.Range(0, steps)
+           select ((int)((a.X + ((b.X - a.X) * step / steps)) / SpotPixels), (int)((a.Y + ((b.Y - a.Y) * step / steps)) / SpotPixels));
 }
 
 /// <summary>One stratum on a drawing.</summary>

@@ -63,6 +63,17 @@ public partial class StarterPlanTests
     public void A_file_name_that_no_plan_can_hold_is_refused_in_words()
         => Assert.Contains("rename the file", Assert.Throws<InputException>(() => StarterPlan.For("a\nb.geojson", Sound)).Message);
 
+    [Fact]
+    public void Names_come_before_numbers_as_strata()
+    {
+        var square = Islands("[[[10,0],[10.1,0],[10.1,0.1],[10,0.1],[10,0]]]", "[[[10.9,0],[11,0],[11,0.1],[10.9,0.1],[10.9,0]]]").Features[0];
+        BoundaryFeature Feature(int number, string area, string zone)
+            => square with { Number = number, Attributes = square.Attributes.SetItem("area", area).SetItem("zone", zone) };
+        var boundary = new Boundary("a", [Feature(1, "1", "bay"), Feature(2, "2.5", "bank"), Feature(3, "1", "shelf")], "degrees", []);
+
+        Assert.Equal(["zone", "area"], StarterFacts.Of("a", boundary).StratumFields.Select(candidate => candidate.Field));
+    }
+
     /// <summary>
     /// Two squares of a tenth of a degree on the equator, nine tenths apart: 1° of longitude is 111.3195 km there (WGS 84, a × π/180), so
     /// lines running north can fall on 22.2639 km of 111.3195.
