@@ -7,6 +7,7 @@ internal sealed class TextTable(params string[] header)
 {
     private const int MaxCell = 24;
     private const int MaxTail = 8;
+    private const int MostDecimals = 9;
 
     private readonly List<string[]> _rows = [];
 
@@ -47,7 +48,7 @@ internal sealed class TextTable(params string[] header)
             >= 1 => 2,
             >= 0.1 => 3,
             >= 0.01 => 4,
-            _ => 5,
+            _ => Math.Min(MostDecimals, 2 - (int)Math.Floor(Math.Log10(size))),
         };
         return value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
     }
