@@ -15,17 +15,17 @@ public static class RecordReader
     /// <exception cref="IOException">It cannot be read at all.</exception>
     public static SurveyRecord Read(string file)
     {
+        if (string.IsNullOrWhiteSpace(file) || file.Contains('\0', StringComparison.Ordinal))
+        {
+            throw new IOException($"The record has no name: give the {OutputNames.Record} in an output folder.");
+        }
+
         byte[] bytes;
         try
         {
             if (Directory.Exists(file))
             {
                 throw new InputException(new Problem($"This is a folder; give the {OutputNames.Record} in it.", file));
-            }
-
-            if (!File.Exists(file))
-            {
-                throw new InputException(new Problem($"There is no record of this name; give the {OutputNames.Record} in an output folder.", file));
             }
 
             if (new FileInfo(file).Length > MaxBytes)
