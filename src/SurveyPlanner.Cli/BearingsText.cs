@@ -13,7 +13,8 @@ internal static class BearingsText
         foreach (var stratum in strata)
         {
             output.WriteLine(Answer(stratum));
-            var table = new TextTable("bearing", "spacing km", "transects", "effort", "spread %", "length cv %", "between km");
+            var isPoints = stratum.Trials.All(trial => trial.Figures?.LineLengthCv is null);
+            var table = new TextTable("bearing", "spacing km", "transects", isPoints ? "points" : "expected km", "spread %", "length cv %", "between km");
             foreach (var trial in stratum.Trials.Where(trial => trial.Figures is not null))
             {
                 var figures = trial.Figures!;

@@ -6,6 +6,9 @@ namespace SurveyPlanner.Cli;
 /// <summary>Effort and precision on the terminal.</summary>
 internal static class EffortText
 {
+    /// <summary>The parts of more strata than this fit into no cell; the table of the report and summary.json have them.</summary>
+    private const int MostParts = 3;
+
     public static void Write(TextWriter output, EffortPlan effort)
     {
         output.WriteLine(Answer(effort));
@@ -105,15 +108,21 @@ internal static class EffortText
 
     private static void WriteStrata(TextWriter output, EffortPlan effort)
     {
-        var table = new TextTable("stratum", Unit(effort), "share %", "detections", "own cv %");
+        // What rounding up to whole lines, and to the least number of them, makes of a share can be far from it: both are shown.
+        var hasLines = !effort.IsPoints && effort.Strata.Any(stratum => stratum.Transects is not null);
+        string[] whole = hasLines ? ["lines", "km in whole lines"] : [Unit(effort)];
+        var table = new TextTable(["stratum", "share asked %", .. whole, "detections", "own cv %"]);
         foreach (var stratum in effort.Strata)
         {
-            table.Add(
+            var amount = stratum.Effort is { } known ? Amount(effort, known) : "";
+            string[] planned = hasLines ? [stratum.Transects is { } lines ? TextTable.Number(lines) : "", amount] : [amount];
+            table.Add([
                 stratum.Name,
-                stratum.Effort is { } amount ? Amount(effort, amount) : "",
                 TextTable.Figure(100 * stratum.Share),
+                .. planned,
                 stratum.ExpectedDetections is { } detections ? TextTable.Figure(detections) : "",
-                stratum.Cv is { } own ? TextTable.Figure(100 * own) : "");
+                stratum.Cv is { } own ? TextTable.Figure(100 * own) : "",
+            ]);
         }
 
         table.Write(output);
@@ -128,18 +137,18 @@ internal static class EffortText
         }
 
         var hasCosts = effort.Allocations.Any(option => option.Cost is not null);
-        string[] header = ["allocation", Unit(effort), "cv %", "by stratum"];
-        var table = new TextTable(hasCosts ? [.. header, "cost"] : header);
+        var hasParts = effort.Strata.Length <= MostParts;
+        string[] header = ["allocation", Unit(effort), "cv %", .. (string[])(hasParts ? ["by stratum"] : []), .. (string[])(hasCosts ? ["cost"] : [])];
+        var table = new TextTable(header);
         foreach (var option in effort.Allocations)
         {
-            string[] row =
-            [
+            table.Add([
                 option.Allocation.ToString().ToLowerInvariant(),
                 Amount(effort, option.Effort),
                 TextTable.Figure(100 * option.Precision.Cv),
-                string.Join(" + ", option.Strata.Select(stratum => Amount(effort, stratum.Effort))),
-            ];
-            table.Add(hasCosts ? [.. row, option.Cost is { } cost ? cost.ToString("#,0", CultureInfo.InvariantCulture) : ""] : row);
+                .. (string[])(hasParts ? [string.Join(" + ", option.Strata.Select(stratum => Amount(effort, stratum.Effort)))] : []),
+                .. (string[])(hasCosts ? [option.Cost is { } cost ? cost.ToString("#,0", CultureInfo.InvariantCulture) : ""] : []),
+            ]);
         }
 
         output.WriteLine();

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Security.Cryptography;
+using SurveyPlanner.Files;
 using SurveyPlanner.Files.Boundaries;
 using SurveyPlanner.Files.Plans;
 using SurveyPlanner.Files.Records;
@@ -27,24 +28,30 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
             throw new InputException(new Problem($"this is a boundary file, not a plan; make a plan for it with: survey-planner new {path}", path));
         }
 
-        return Complete(PlanFileReader.Read(path, sets), System.IO.File.ReadAllBytes(path));
+        var files = new InputFiles();
+        var plan = PlanFileReader.Read(path, sets, files);
+        return Complete(plan, files.Bytes(path), files);
     }
 
     /// <summary>The plan of a record, its inputs taken from a folder.</summary>
+    /// <exception cref="InputException">An input is not, or no longer, the one that the record tells of.</exception>
     public static LoadedPlan FromRecord(SurveyRecord record, string folder)
     {
         var path = Path.Combine(folder, Path.GetFileName(record.Plan.File));
         var seed = record.Seed.ToString(System.Globalization.CultureInfo.InvariantCulture);
         var file = PlanFileReader.Parse(record.Plan.CanonicalText, path, [$"survey.seed={seed}"]);
-        return Complete(file, System.Text.Encoding.UTF8.GetBytes(record.Plan.Text));
+        var loaded = Complete(file, System.Text.Encoding.UTF8.GetBytes(record.Plan.Text), new InputFiles());
+        Replay.RequireRecorded(record, loaded.Source.Inputs);
+        return loaded;
     }
 
-    private static LoadedPlan Complete(PlanFile file, byte[] content)
+    private static LoadedPlan Complete(PlanFile file, byte[] content, InputFiles files)
     {
-        var boundary = BoundarySet.Read(file.BoundaryPaths, file.Layers, file.Crs);
-        var exclusions = file.ExclusionPaths.Select(path => BoundaryReader.Read(path, new BoundaryOptions())).ToImmutableArray();
-        var pilot = file.PilotTransectsPath is { } transects ? PilotTableReader.Read(transects, file.PilotDetectionsPath) : null;
-        var lines = LinesToCross(file);
+        var boundary = BoundarySet.Read(file.BoundaryPaths, file.Layers, file.Crs, files.Under("region.boundary"));
+        var closed = files.Under("region.exclusions");
+        var exclusions = file.ExclusionPaths.Select(path => BoundaryReader.Read(path, new BoundaryOptions(), closed)).ToImmutableArray();
+        var lines = LinesToCross(file, files.Under("layout.bearing"));
+        var pilot = file.PilotTransectsPath is { } transects ? PilotTableReader.Read(transects, file.PilotDetectionsPath, files) : null;
         var design = file.Design with
         {
             Layout = WithLines(file.Design.Layout, lines),
@@ -57,17 +64,17 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
             design,
             !file.SeedGiven,
             new SurveyInputs(boundary.Boundary, exclusions, pilot),
-            new PlanSource(file.Path, content, file.CanonicalText, InputFiles(file)));
+            new PlanSource(file.Path, content, file.CanonicalText, InputsOf(file, files)));
     }
 
-    /// <summary>The files of lines that layouts run across, each read once.</summary>
-    private static ImmutableSortedDictionary<string, ImmutableArray<ImmutableArray<LonLat>>> LinesToCross(PlanFile file)
+    /// <summary>The files of lines that layouts run across.</summary>
+    private static ImmutableSortedDictionary<string, ImmutableArray<ImmutableArray<LonLat>>> LinesToCross(PlanFile file, InputFiles files)
         => file.Design.StratumLayouts.Values.Prepend(file.Design.Layout)
             .Select(layout => layout.Bearing)
             .OfType<Bearing.AcrossFile>()
             .Select(bearing => bearing.Path)
             .Distinct()
-            .ToImmutableSortedDictionary(path => path, path => LineFile.Read(Resolved(file, path)), StringComparer.Ordinal);
+            .ToImmutableSortedDictionary(path => path, path => LineFile.Read(Resolved(file, path), files), StringComparer.Ordinal);
 
     private static string Resolved(PlanFile file, string path) => Path.Combine(Path.GetDirectoryName(file.Path) ?? "", path);
 
@@ -77,42 +84,14 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
     /// <summary>Short enough to be read out over a radio, long enough that nobody meets the same one twice.</summary>
     private static ulong SeedOfSystem() => (ulong)RandomNumberGenerator.GetInt32(1_000_000, int.MaxValue);
 
-    private static ImmutableArray<InputFile> InputFiles(PlanFile file)
+    /// <summary>Every file that was read beside the plan, its path seen from the plan's folder.</summary>
+    private static ImmutableArray<InputFile> InputsOf(PlanFile file, InputFiles files)
     {
-        var named = file.BoundaryPaths.Select(path => (Key: "region.boundary", Path: (string?)path)).ToList();
-        named.AddRange(file.ExclusionPaths.Select(path => ("region.exclusions", (string?)path)));
-        named.AddRange(LinesToCross(file).Keys.Select(path => ("layout.bearing", (string?)Resolved(file, path))));
-        named.Add(("pilot.transects", file.PilotTransectsPath));
-        named.Add(("pilot.detections", file.PilotDetectionsPath));
         var folder = Path.GetDirectoryName(Path.GetFullPath(file.Path))!;
         return
         [
-            .. from entry in named
-               where entry.Path is not null
-               from part in Parts(entry.Path!)
-               select InputFile.Of(
-                   entry.Key,
-                   Path.GetRelativePath(folder, Path.GetFullPath(part)).Replace('\\', '/'),
-                   System.IO.File.ReadAllBytes(part)),
+            .. files.Read.Select(read => InputFile.Of(
+                read.Key, Path.GetRelativePath(folder, Path.GetFullPath(read.Path)).Replace('\\', '/'), read.Content.Span)),
         ];
-    }
-
-    /// <summary>A boundary may be a folder, or a shapefile with its companions: every file of it counts.</summary>
-    private static IEnumerable<string> Parts(string path)
-    {
-        if (Directory.Exists(path))
-        {
-            return Directory.EnumerateFiles(path).Order(StringComparer.Ordinal);
-        }
-
-        if (!path.EndsWith(".shp", StringComparison.OrdinalIgnoreCase))
-        {
-            return [path];
-        }
-
-        var stem = Path.GetFileNameWithoutExtension(path);
-        return Directory.EnumerateFiles(Path.GetDirectoryName(Path.GetFullPath(path))!)
-            .Where(file => Path.GetFileNameWithoutExtension(file) == stem)
-            .Order(StringComparer.Ordinal);
     }
 }

@@ -6,6 +6,8 @@ namespace SurveyPlanner.Cli;
 internal sealed class TextTable(params string[] header)
 {
     private const int MaxCell = 24;
+    private const int MaxTail = 8;
+    private const int MostDecimals = 9;
 
     private readonly List<string[]> _rows = [];
 
@@ -46,19 +48,21 @@ internal sealed class TextTable(params string[] header)
             >= 1 => 2,
             >= 0.1 => 3,
             >= 0.01 => 4,
-            _ => 5,
+            _ => Math.Min(MostDecimals, 2 - (int)Math.Floor(Math.Log10(size))),
         };
         return value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
     }
 
     private bool IsText(int column) => column == 0 || _rows.Any(row => row[column].Length > 0 && !IsFigure(row[column][0]));
 
-    private static bool IsFigure(char c) => char.IsAsciiDigit(c) || c == '-';
+    private static bool IsFigure(char c) => char.IsAsciiDigit(c) || c is '-' or '+';
 
-    /// <summary>Names may hold anything, and be of any length.</summary>
+    /// <summary>Names may hold anything, and be of any length; those that begin alike mostly differ at their end.</summary>
     private static string Plain(string cell)
     {
-        var plain = string.Concat(cell.Select(c => char.IsControl(c) ? ' ' : c));
-        return plain.Length <= MaxCell ? plain : string.Concat(plain.AsSpan(0, MaxCell - 1), "…");
+        var plain = new StringInfo(string.Concat(cell.Select(c => char.IsControl(c) ? ' ' : c)));
+        return plain.LengthInTextElements <= MaxCell
+            ? plain.String
+            : plain.SubstringByTextElements(0, MaxCell - 1 - MaxTail) + "…" + plain.SubstringByTextElements(plain.LengthInTextElements - MaxTail);
     }
 }

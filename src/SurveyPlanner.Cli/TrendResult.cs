@@ -38,7 +38,7 @@ internal sealed record TrendResult(
         output.WriteLine();
         output.WriteLine(string.Create(
             CultureInfo.InvariantCulture,
-            $"CV of a survey {100 * Design.FirstCv:0.#} % ({CvSource}), {(Design.OneSided ? "one" : "two")}-sided test at {Design.SignificanceLevel:0.###}, a survey every {Design.YearsBetweenSurveys:0.##} years."));
+            $"CV of a survey {100 * Design.FirstCv:0.#} % ({CvSource}), {(Design.OneSided ? "one" : "two")}-sided test at {Design.SignificanceLevel:0.###}, a survey every {(Design.YearsBetweenSurveys == 1 ? "year" : $"{Design.YearsBetweenSurveys:0.##} years")}."));
         output.WriteLine();
         var table = new TextTable("change a year %", "surveys", "years", "total change %", "power", $"surveys for {WantedPower.ToString("0.##", CultureInfo.InvariantCulture)}");
         foreach (var row in Rows)
@@ -46,9 +46,9 @@ internal sealed record TrendResult(
             table.Add(
                 (100 * row.ChangePerYear).ToString("+0.##;-0.##", CultureInfo.InvariantCulture),
                 TextTable.Number(Surveys),
-                row.Figure is { } years ? TextTable.Figure(years.Years) : "",
-                row.Figure is { } total ? (100 * total.TotalChange).ToString("0.#", CultureInfo.InvariantCulture) : "nothing left",
-                row.Figure is { } figure ? TextTable.Figure(figure.Power) : "",
+                row.Figure is { } years ? years.Years.ToString("0.##", CultureInfo.InvariantCulture) : "",
+                row.Figure is { } total ? (100 * total.TotalChange).ToString("+0.0;-0.0", CultureInfo.InvariantCulture) : "nothing left",
+                row.Figure is { } figure ? figure.Power.ToString("0.000", CultureInfo.InvariantCulture) : "",
                 row.Needed is { } needed ? TextTable.Number(needed.Surveys) : "over 100");
         }
 

@@ -11,8 +11,9 @@ internal static class TextFile
     /// <param name="path">The file.</param>
     /// <param name="noun">What it should be, for messages: <c>plan file</c>.</param>
     /// <param name="mostKilobytes">What is larger is something else under the wrong name.</param>
+    /// <param name="files">The files of the run.</param>
     /// <exception cref="InputException">No such file, too large, or not UTF-8 (with the line).</exception>
-    public static string Read(string path, string noun, int mostKilobytes)
+    public static string Read(string path, string noun, int mostKilobytes, InputFiles files)
     {
         if (Directory.Exists(path))
         {
@@ -29,7 +30,7 @@ internal static class TextFile
             throw new InputException(new Problem($"is larger than {mostKilobytes} kB: no {noun} is so large", path));
         }
 
-        return Decode(File.ReadAllBytes(path), path);
+        return Decode(files.Bytes(path), path);
     }
 
     private static string Decode(byte[] bytes, string path)

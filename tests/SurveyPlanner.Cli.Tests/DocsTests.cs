@@ -1,3 +1,5 @@
+using System.Text.Json;
+using SurveyPlanner.Layouts;
 using SurveyPlanner.Pages;
 
 namespace SurveyPlanner.Cli.Tests;
@@ -37,6 +39,17 @@ public class DocsTests
         {
             Directory.SetCurrentDirectory(here);
         }
+    }
+
+    [Fact]
+    public void Every_layout_kind_and_the_words_of_its_keys_stand_in_the_glossary()
+    {
+        var terms = File.ReadLines(Path.Combine(ReferenceData.Root, "docs", "glossary.md"))
+            .Where(line => line.StartsWith("| ", StringComparison.Ordinal)).Select(line => line.Split('|')[1].Trim()).ToArray();
+        var kinds = Enum.GetValues<LayoutKind>().Select(kind => JsonNamingPolicy.KebabCaseLower.ConvertName(kind.ToString()).Replace('-', ' '));
+        Assert.All(
+            kinds.Concat(["placement", "crossing", "reserve", "crossed", "spacing", "radius", "allocation", "assurance"]),
+            word => Assert.Contains(terms, term => term.StartsWith(word, StringComparison.Ordinal)));
     }
 
     [Fact]

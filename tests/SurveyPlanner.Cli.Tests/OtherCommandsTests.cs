@@ -64,8 +64,15 @@ public class OtherCommandsTests
         Assert.Equal(["id", "lon", "lat", "stratum", "coverage", "standard_error", "times_covered", "method"], lines[0]);
         Assert.Equal(["a", "-30.9", "52.6", "outer sound", "0.24"], lines[1][..5]);
         Assert.Equal("outside", lines[2][^1]);
-        Assert.Equal(0, ProgramRun.Of("coverage", plan, "--at", work.At("points.csv"), "--out", work.At("out"), "--set", "coverage.replicates=100").ExitCode);
-        Assert.True(File.Exists(Path.Combine(work.At("out"), "coverage-at.csv")));
+        var written = ProgramRun.Of("coverage", plan, "--at", work.At("points.csv"), "--out", work.At("out"), "--set", "coverage.replicates=100");
+        Assert.Equal(0, written.ExitCode);
+        Assert.Contains("1 of 2 positions lie in the region", written.Out, StringComparison.Ordinal);
+        Assert.Equal(run.Out, File.ReadAllText(Path.Combine(work.At("out"), "coverage-at.csv")));
+        using var json = JsonDocument.Parse(ProgramRun.Of("coverage", plan, "--at", work.At("points.csv"), "--json", "--set", "coverage.replicates=100").Out);
+        var positions = json.RootElement.GetProperty("positions").EnumerateArray().ToList();
+        Assert.Equal(["lon", "lat", "stratum", "coverage", "times_covered", "method"], positions[0].EnumerateObject().Select(member => member.Name));
+        Assert.Equal(("outer sound", 0.24, "exact"), (positions[0].GetProperty("stratum").GetString(), positions[0].GetProperty("coverage").GetDouble(), positions[0].GetProperty("method").GetString()));
+        Assert.Equal(["lon", "lat", "method"], positions[1].EnumerateObject().Select(member => member.Name));
     }
 
     /// <summary>Power of an exponential decline of 5 %, 10 surveys, CV 0.2 as in the core's published check (noncentral t): 0.50 for an increase of 5 %.</summary>
@@ -77,6 +84,8 @@ public class OtherCommandsTests
         Assert.Equal((0, ""), (run.ExitCode, run.Error));
         using var json = JsonDocument.Parse(run.Out);
         Assert.Equal(0.50305360, json.RootElement.GetProperty("changes")[0].GetProperty("power").GetDouble(), 1e-7);
+        Assert.Contains("a survey every year.", ProgramRun.Of("trend", plan, "--cv", "0.2").Out, StringComparison.Ordinal);
+        Assert.Contains("a survey every 2 years.", ProgramRun.Of("trend", plan, "--cv", "0.2", "--interval", "2").Out, StringComparison.Ordinal);
         Assert.Equal(2, ProgramRun.Of("trend", plan, "--cv", "20%").ExitCode);
         Assert.Equal(2, ProgramRun.Of("trend", plan, "--cv-model", "none").ExitCode);
     }

@@ -1,3 +1,4 @@
+using System.IO.Compression;
 using System.Text.Json;
 
 namespace SurveyPlanner.Cli.Tests;
@@ -98,6 +99,32 @@ public class PlanCommandTests
         {
             Assert.Equal(File.ReadAllBytes(Path.Combine(work.At("a"), file)), File.ReadAllBytes(Path.Combine(work.At("b"), file)));
         }
+    }
+
+    /// <summary>A plan beside a shapefile of the same name is no part of it; a companion that came later is.</summary>
+    [Fact]
+    public void Replay_of_a_shapefile_looks_at_what_was_read()
+    {
+        using var work = new Workspace();
+        using (var archive = ZipFile.OpenRead(ReferenceData.Path("regions", "dirty/shp_esri_albers_maine.zip")))
+        {
+            foreach (var entry in archive.Entries.Where(entry => !entry.Name.EndsWith(".cpg", StringComparison.Ordinal)))
+            {
+                entry.ExtractToFile(work.At("zones" + Path.GetExtension(entry.Name)));
+            }
+        }
+
+        var plan = work.Plan("zones.shp", "kind = \"parallel\"\nlines = 10\nhalf_width = \"100 m\"", name: "zones.toml");
+        Assert.Equal(0, ProgramRun.Of("layout", plan, "--out", work.At("out")).ExitCode);
+        var record = Path.Combine(work.At("out"), "record.json");
+        File.AppendAllText(plan, "# a thought after the draw\n");
+        Assert.Equal(0, ProgramRun.Of("replay", record).ExitCode);
+
+        File.WriteAllText(work.At("zones.cpg"), "UTF-8");
+        var replay = ProgramRun.Of("replay", record);
+        Assert.Equal(3, replay.ExitCode);
+        Assert.Contains("zones.cpg", replay.Error, StringComparison.Ordinal);
+        Assert.Contains("was not there when the record was made", replay.Error, StringComparison.Ordinal);
     }
 
     [Fact]

@@ -100,6 +100,33 @@ public partial class ReportTests
         Assert.All(headings, match => Assert.Contains("scope=", match.Value, StringComparison.Ordinal));
     }
 
+    /// <summary>What a browser cannot break makes a table as wide as it is: no cell holds more than 24 characters without a chance to.</summary>
+    [Fact]
+    public void A_long_name_without_a_space_does_not_stretch_the_tables()
+    {
+        const string name = "Administrativebezirkgrenzüberschreitenderzusammenarbeitsgebietnordwestlichersektor";
+        var plan = SamplePlan.Of(
+            SampleBoundary.Boxes((name + "1", 20, 60, 21, 61), (name + "2", 21, 60, 22, 61)), SamplePlan.Parallel(20_000), stratumField: "name", cells: 200,
+            effort: SamplePlan.InventedEffort, pilot: SamplePlan.InventedPilotWithDistances(isPoints: false, name + "1", name + "2"));
+        var cells = Cell().Matches(ReportRenderer.Render(plan, SamplePlan.Context)).Select(match => match.Groups[1].Value).ToArray();
+
+        Assert.Contains(cells, cell => Markup().Replace(cell, "") == System.Net.WebUtility.HtmlEncode(name + "2").Replace("&#252;", "ü", StringComparison.Ordinal));
+        Assert.All(
+            cells.SelectMany(cell => Markup().Replace(cell, " ").Split(' ', '\u00a0', '\n')),
+            run => Assert.InRange(System.Net.WebUtility.HtmlDecode(run).Length, 0, 24));
+    }
+
+    [Fact]
+    public void The_place_of_lowest_coverage_can_be_found()
+    {
+        var plan = SamplePlan.Archipelago;
+        var lowest = plan.Strata.SelectMany(stratum => stratum.Coverage!.Cells).MinBy(cell => cell.Best)!;
+        var told = LowestAt().Match(ReportRenderer.Render(plan, SamplePlan.Context));
+
+        Assert.Equal(lowest.Position.Lat, double.Parse(told.Groups[1].Value, CultureInfo.InvariantCulture), 5.1e-6);
+        Assert.Equal(lowest.Position.Lon, double.Parse(told.Groups[2].Value, CultureInfo.InvariantCulture), 5.1e-6);
+    }
+
     [Fact]
     public void Every_transect_stands_in_the_table()
     {
@@ -165,4 +192,13 @@ public partial class ReportTests
 
     [GeneratedRegex("<th[ >][^>]*>")]
     private static partial Regex HeadingCell();
+
+    [GeneratedRegex("<(?:th|td|caption)(?: [^>]*)?>(.*?)</(?:th|td|caption)>", RegexOptions.Singleline)]
+    private static partial Regex Cell();
+
+    [GeneratedRegex("<[^>]*>")]
+    private static partial Regex Markup();
+
+    [GeneratedRegex(@"It is lowest, [^<]*, at (-?[0-9]+\.[0-9]{5}), (-?[0-9]+\.[0-9]{5}) \(latitude, longitude\)")]
+    private static partial Regex LowestAt();
 }

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli.Commands;
 
@@ -44,6 +45,15 @@ internal static class CommandFrame
         {
             var message = notice.Kind == NoticeKind.Repair ? $"repaired: {notice.Message}" : notice.Message;
             terminal.Warn(string.Concat(message.Select(c => char.IsControl(c) ? ' ' : c)));
+        }
+    }
+
+    /// <summary>What was written and where, if anything was.</summary>
+    public static void TellWritten(Terminal terminal, IReadOnlyCollection<OutputFile> files, string? folder)
+    {
+        if (folder is not null)
+        {
+            terminal.Out.WriteLine($"Wrote {files.Count} files to {folder}: {string.Join(", ", files.Select(file => file.Name))}");
         }
     }
 

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Text;
+using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 using SurveyPlanner.Files.Tables;
 
@@ -26,7 +27,7 @@ internal static class CoverageCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
+            using var target = folder is null ? null : OutputFolder.Reserve(folder, parsed.GetValue(options.Force), stop);
             var quiet = parsed.GetValue(options.Quiet);
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
@@ -34,11 +35,12 @@ internal static class CoverageCommand
             var run = new RunOptions(options.ThreadsOf(parsed), progress, stop);
             if (parsed.GetValue(at) is { } positions)
             {
-                return AtPositions(terminal, loaded, positions, target, run);
+                return AtPositions(terminal, loaded, positions, target, run, parsed.GetValue(options.Json));
             }
 
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, run);
-            target?.Write([CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)], stop);
+            OutputFile[] files = [CoverageCsv.Write(plan)!, SummaryWriter.Write(plan, draw: null)];
+            target?.Write(files);
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);
             if (parsed.GetValue(options.Json))
@@ -48,24 +50,31 @@ internal static class CoverageCommand
             else
             {
                 PlanText.WriteCoverage(terminal.Out, plan);
+                CommandFrame.TellWritten(terminal, files, folder);
             }
 
             return ExitCodes.Done;
         });
     }
 
-    /// <summary>The table of positions with their coverage: into the folder, or to standard output.</summary>
-    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputTarget? target, RunOptions run)
+    /// <summary>The table of positions with their coverage: into the folder, or to standard output unless that takes JSON.</summary>
+    private static int AtPositions(Terminal terminal, LoadedPlan loaded, string path, OutputFolder? target, RunOptions run, bool json)
     {
         var table = CoverageAtTable.Read(path);
-        var file = table.Write(OutputNames.CoverageAt, PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run));
-        if (target is null)
+        var coverages = PlanSurvey.CoverageAt(loaded.Design, loaded.Inputs, table.Positions, run);
+        var file = table.Write(OutputNames.CoverageAt, coverages);
+        target?.Write([file]);
+        if (json)
+        {
+            terminal.Out.WriteLine(JsonDocumentText.Of(writer => SummaryWriter.WriteCoverageAt(writer, coverages)));
+        }
+        else if (target is null)
         {
             terminal.Out.Write(Encoding.UTF8.GetString(file.Content.Span));
         }
         else
         {
-            target.Write([file], run.Stop);
+            terminal.Out.WriteLine($"{coverages.Count(one => !one.IsOutside)} of {coverages.Length} positions lie in the region; wrote {Path.Combine(target.Folder, file.Name)}");
         }
 
         return ExitCodes.Done;

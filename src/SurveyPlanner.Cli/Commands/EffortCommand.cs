@@ -31,7 +31,7 @@ internal static class EffortCommand
             CommandFrame.Tell(terminal, region.Notices, parsed.GetValue(options.Quiet));
             if (parsed.GetValue(options.Json))
             {
-                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, effort)));
+                terminal.Out.WriteLine(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, effort, loaded.Design.Effort.Allocation)));
             }
             else
             {

@@ -31,7 +31,7 @@ internal static class LayoutCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
+            using var target = folder is null ? null : OutputFolder.Reserve(folder, parsed.GetValue(options.Force), stop);
 
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             if (parsed.GetValue(bearings))
@@ -44,8 +44,8 @@ internal static class LayoutCommand
             CommandFrame.TellSeed(terminal, loaded);
             var plan = PlanSurvey.DrawOnly(loaded.Design, loaded.Inputs);
             using var draws = DrawnPlan.Count(plan, loaded);
-            target?.Write(DrawnPlan.Files(plan, loaded, draws.Number, folder!, withReport: false), stop);
-
+            var files = folder is null ? [] : DrawnPlan.Files(plan, loaded, draws.Number, folder, withReport: false);
+            target?.Write(files);
             draws.Keep();
             CommandFrame.Tell(terminal, plan.Notices, parsed.GetValue(options.Quiet));
             if (parsed.GetValue(options.Json))
@@ -56,6 +56,7 @@ internal static class LayoutCommand
             {
                 PlanText.Write(terminal.Out, plan, draws.Number);
                 PlanText.WriteTransects(terminal.Out, plan);
+                CommandFrame.TellWritten(terminal, files, folder);
             }
 
             return ExitCodes.Done;

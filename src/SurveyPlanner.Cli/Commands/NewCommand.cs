@@ -31,6 +31,11 @@ internal static class NewCommand
         return command.Runs(options, terminal, (parsed, _) =>
         {
             var path = parsed.GetValue(boundary)!;
+            if (Path.GetExtension(path).Equals(".toml", StringComparison.OrdinalIgnoreCase) && File.Exists(path))
+            {
+                throw new InputException(new Problem($"this is a plan already; look at it with: survey-planner check {path}", path));
+            }
+
             var planPath = parsed.GetValue(file) ?? Path.ChangeExtension(path, ".toml");
             if (File.Exists(planPath) && !parsed.GetValue(options.Force))
             {
@@ -41,7 +46,7 @@ internal static class NewCommand
             var read = BoundaryReader.Read(path, new BoundaryOptions { Crs = system, Layer = name });
             var region = RegionBuilder.Build(read, new RegionDesign(), []);
             var relative = Path.GetRelativePath(Path.GetDirectoryName(Path.GetFullPath(planPath))!, Path.GetFullPath(path)).Replace('\\', '/');
-            var text = StarterPlan.For(relative, StarterFacts.Of(Path.GetFileNameWithoutExtension(path), read, region));
+            var text = StarterPlan.For(relative, StarterFacts.Of(Path.GetFileNameWithoutExtension(path), read));
             OneFile.Write(planPath, WithKey(WithKey(text, "layer", name), "crs", system));
             CommandFrame.Tell(terminal, region.Notices, parsed.GetValue(options.Quiet));
             terminal.Out.WriteLine($"Wrote {planPath}. Read it, then: survey-planner check {planPath}");

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli.Commands;
@@ -24,7 +25,7 @@ internal static class PlanCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetRequiredValue(options.Out)!;
-            var target = new OutputTarget(folder, parsed.GetValue(options.Force));
+            using var target = OutputFolder.Reserve(folder, parsed.GetValue(options.Force), stop);
             var quiet = parsed.GetValue(options.Quiet);
             var loaded = LoadedPlan.Read(parsed.GetValue(options.Plan)!, options.SetsOf(parsed));
             CommandFrame.TellSeed(terminal, loaded);
@@ -32,7 +33,7 @@ internal static class PlanCommand
             var plan = PlanSurvey.Run(loaded.Design, loaded.Inputs, new RunOptions(options.ThreadsOf(parsed), progress, stop));
             using var draws = DrawnPlan.Count(plan, loaded);
             var files = DrawnPlan.Files(plan, loaded, draws.Number, folder, withReport: true);
-            target.Write(files, stop);
+            target.Write(files);
             draws.Keep();
 
             CommandFrame.Tell(terminal, plan.Notices, quiet);

@@ -1,4 +1,5 @@
 using System.CommandLine;
+using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Outputs;
 using SurveyPlanner.Files.Records;
 
@@ -27,7 +28,7 @@ internal static class ReplayCommand
         return command.Runs(options, terminal, (parsed, stop) =>
         {
             var folder = parsed.GetValue(options.Out);
-            var target = folder is null ? null : new OutputTarget(folder, parsed.GetValue(options.Force));
+            using var target = folder is null ? null : OutputFolder.Reserve(folder, parsed.GetValue(options.Force), stop);
 
             var file = parsed.GetValue(record)!;
             var recorded = RecordReader.Read(file);
@@ -37,9 +38,16 @@ internal static class ReplayCommand
             var withReport = recorded.Outputs.Any(output => output.Name == OutputNames.Report);
             var files = DrawnPlan.Files(plan, loaded, draw, folder ?? Path.GetDirectoryName(Path.GetFullPath(file))!, withReport);
             var result = Replay.Compare(recorded, plan, files);
-            target?.Write(files, stop);
+            target?.Write(files);
 
-            return Say(result, recorded, terminal, parsed.GetValue(options.Json));
+            var json = parsed.GetValue(options.Json);
+            var code = Say(result, recorded, terminal, json);
+            if (!json)
+            {
+                CommandFrame.TellWritten(terminal, files, folder);
+            }
+
+            return code;
         });
     }
 

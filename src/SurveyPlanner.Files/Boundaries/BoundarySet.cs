@@ -18,12 +18,14 @@ public sealed record BoundarySet(Boundary Boundary, string? StratumField)
     /// <param name="paths">The files, at least one.</param>
     /// <param name="layers">Layers to read of each; empty for the only one.</param>
     /// <param name="crs">Coordinate system, where the files do not say.</param>
-    public static BoundarySet Read(ImmutableArray<string> paths, ImmutableArray<string> layers, string? crs)
+    /// <param name="files">The files of the run; unless given, of this reading alone.</param>
+    public static BoundarySet Read(ImmutableArray<string> paths, ImmutableArray<string> layers, string? crs, InputFiles? files = null)
     {
+        files ??= new InputFiles();
         var parts = (
             from path in paths
             from layer in layers.IsDefaultOrEmpty ? [null] : layers.Cast<string?>()
-            let boundary = BoundaryReader.Read(path, new BoundaryOptions { Layer = layer, Crs = crs })
+            let boundary = BoundaryReader.Read(path, new BoundaryOptions { Layer = layer, Crs = crs }, files)
             select (Path: path, Layer: layer, Boundary: boundary)).ToList();
         if (parts.Count == 1)
         {

@@ -9,7 +9,7 @@ internal static class FileBytes
     /// <summary>A million vertices of GeoJSON take about 40 MB; beyond this a file is no boundary, or should be simplified first.</summary>
     public const long MostBytes = 300L << 20;
 
-    public static byte[] Read(string path, string source)
+    public static byte[] Read(string path, string source, InputFiles files)
     {
         var length = new FileInfo(path).Length;
         if (length > MostBytes)
@@ -17,7 +17,7 @@ internal static class FileBytes
             throw Refusal(source, $"the file has {length >> 20} MB, more than the {MostBytes >> 20} MB that are read; simplify the boundary in a GIS program");
         }
 
-        return File.ReadAllBytes(path);
+        return files.Bytes(path);
     }
 
     /// <summary>

@@ -10,8 +10,10 @@ public static class LineFile
 {
     private const long MaxBytes = 64 * 1024 * 1024;
 
+    /// <param name="path">The file.</param>
+    /// <param name="files">The files of the run.</param>
     /// <exception cref="InputException">The file is missing, is no GeoJSON in degrees, or holds no line.</exception>
-    public static ImmutableArray<ImmutableArray<LonLat>> Read(string path)
+    public static ImmutableArray<ImmutableArray<LonLat>> Read(string path, InputFiles files)
     {
         if (!File.Exists(path) || new FileInfo(path).Length > MaxBytes)
         {
@@ -21,7 +23,7 @@ public static class LineFile
         var lines = ImmutableArray.CreateBuilder<ImmutableArray<LonLat>>();
         try
         {
-            using var document = JsonDocument.Parse(File.ReadAllBytes(path));
+            using var document = JsonDocument.Parse(files.Bytes(path));
             Collect(document.RootElement, lines, path);
         }
         catch (JsonException fault)

@@ -24,8 +24,8 @@ internal static class ShapefileFolder
             : throw FileBytes.Refusal(source, $"the folder holds several shapefiles: {LayerChoice.Listed(files.Select(Path.GetFileNameWithoutExtension)!)}; say which with layer in [region], or name its .shp file");
     }
 
-    public static ShapefileParts Parts(string shp, string source)
-        => ShapefileParts.From(Path.GetFullPath(shp), Directory.GetFiles(Path.GetDirectoryName(Path.GetFullPath(shp))!), file => FileBytes.Read(file, source));
+    public static ShapefileParts Parts(string shp, string source, InputFiles files)
+        => ShapefileParts.From(Path.GetFullPath(shp), Directory.GetFiles(Path.GetDirectoryName(Path.GetFullPath(shp))!), file => FileBytes.Read(file, source, files));
 
     private static bool HasExtension(string file, string extension) => string.Equals(Path.GetExtension(file), extension, StringComparison.OrdinalIgnoreCase);
 }

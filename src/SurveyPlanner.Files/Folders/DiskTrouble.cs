@@ -27,7 +27,9 @@ internal static class DiskTrouble
     {
         var reason = trouble switch
         {
+            PathTooLongException => "the name is too long; choose a shorter one",
             UnauthorizedAccessException => "there is no permission to write there; choose a folder of your own",
+            FileNotFoundException => "the system lets nothing be made there; choose a folder of your own",
             DirectoryNotFoundException => "the folder it should be in does not exist; make it first",
             { HResult: NoSpace or WindowsDiskFull } => "the disk is full; make room or choose another disk",
             { HResult: OverQuotaLinux or OverQuotaMac } => "your share of the disk is used up; make room or choose another disk",

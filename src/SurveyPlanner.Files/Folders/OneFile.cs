@@ -9,6 +9,16 @@ public static class OneFile
     /// <exception cref="IOException">One sentence that says what stands in the way; what was there before is there still.</exception>
     public static void Write(string path, string text)
     {
+        if (string.IsNullOrWhiteSpace(path) || path.Contains('\0', StringComparison.Ordinal))
+        {
+            throw new IOException("The file to write has no name: give one.");
+        }
+
+        if (Directory.Exists(path))
+        {
+            throw new IOException($"{path} is a folder: name a file in it.");
+        }
+
         if (new FileInfo(path).LinkTarget is not null)
         {
             throw new IOException($"{path} is a link to somewhere else: name the file itself, or another one.");

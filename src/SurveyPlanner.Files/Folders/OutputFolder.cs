@@ -5,85 +5,176 @@ namespace SurveyPlanner.Files.Folders;
 
 /// <summary>
 /// A folder of outputs, written whole or not at all: put together in a hidden folder beside it, on the disk before it is renamed.
+/// Reserved before any work is done, so that whatever stands in the way, another run for the same folder too, is said at once.
 /// A run that is killed leaves the target as it was; the next run for the same target clears away what it left.
 /// </summary>
-public static class OutputFolder
+public sealed class OutputFolder : IDisposable
 {
-    /// <summary>Refuses, before any work is done, what <see cref="Write(string, IReadOnlyCollection{OutputFile}, bool, CancellationToken)"/> would refuse.</summary>
-    /// <param name="path">The folder to write, as the user named it.</param>
-    /// <param name="force">Whether a folder of an earlier run may be replaced.</param>
-    /// <exception cref="IOException">One sentence that says what stands in the way.</exception>
-    public static void Check(string path, bool force) => Begin(path, force, OutputNames.All, new Disk(), (_, _) => { });
+    private readonly string _path;
+    private readonly string _target;
+    private readonly bool _force;
+    private readonly IDisk _disk;
+    private readonly CancellationToken _stop;
+    private readonly CancellationTokenRegistration _whenStopped;
+    private readonly Lock _gate = new();
+    private readonly ImmutableArray<string> _parentsMade;
+    private readonly WorkFolder _work;
 
-    /// <summary>Writes the folder.</summary>
-    /// <param name="path">The folder to write, as the user named it; its parent must exist.</param>
-    /// <param name="files">Its files; names without folders, all different.</param>
-    /// <param name="force">Whether a folder of an earlier run may be replaced. One with anything else in it never is.</param>
-    /// <param name="cancellation">Stops the writing, and nothing is left of it.</param>
-    /// <exception cref="IOException">One sentence that says what stands in the way; what was there before is there still.</exception>
-    public static void Write(string path, IReadOnlyCollection<OutputFile> files, bool force, CancellationToken cancellation = default) =>
-        Write(path, files, force, new Disk(), cancellation);
-
-    internal static void Write(string path, IReadOnlyCollection<OutputFile> files, bool force, IDisk disk, CancellationToken cancellation)
+    private OutputFolder(string path, string target, bool force, IDisk disk, CancellationToken stop)
     {
-        RequirePlainNames(files);
-        Begin(path, force, OutputNames.All.Union(files.Select(file => file.Name)), disk, (work, target) =>
+        (_path, _target, _force, _disk, _stop) = (path, target, force, disk, stop);
+        _parentsMade = MakeParents();
+        try
         {
-            disk.MakeFolder(work.New);
-            foreach (var file in files)
-            {
-                cancellation.ThrowIfCancellationRequested();
-                disk.WriteFile(Path.Combine(work.New, file.Name), file.Content);
-            }
+            InOneSentence(() => WorkFolder.Recover(disk, target));
+            RefuseFolder(OutputNames.All);
+            _work = InOneSentence(() => WorkFolder.Begin(disk, target));
+        }
+        catch
+        {
+            RemoveParents();
+            throw;
+        }
 
-            disk.SyncFolder(work.New);
-            cancellation.ThrowIfCancellationRequested();
-            ChangeOver(disk, work, target, force);
-            disk.SyncFolder(Path.GetDirectoryName(target)!);
-        });
+        // Ctrl-C ends the process soon after, whatever the run is at: what is reserved is let go here.
+        _whenStopped = stop.Register(Release);
     }
 
-    /// <summary>Does something with a work folder once nothing stands in the target's way.</summary>
-    private static void Begin(string path, bool force, ImmutableHashSet<string> ours, IDisk disk, Action<WorkFolder, string> write)
+    /// <summary>The folder as the user named it.</summary>
+    public string Folder => _path;
+
+    /// <summary>Takes the folder for this run until it is disposed of or stopped.</summary>
+    /// <param name="path">The folder to write, as the user named it; folders above it that are missing are made, and taken away again if nothing is written.</param>
+    /// <param name="force">Whether a folder of an earlier run may be replaced. One with anything else in it never is.</param>
+    /// <param name="stop">Stops the writing, and nothing is left of it.</param>
+    /// <exception cref="IOException">One sentence that says what stands in the way; what was there before is there still.</exception>
+    public static OutputFolder Reserve(string path, bool force, CancellationToken stop = default) => Reserve(path, force, new Disk(), stop);
+
+    internal static OutputFolder Reserve(string path, bool force, IDisk disk, CancellationToken stop)
     {
         var target = Target(path);
         RefuseLinkOrFile(path, target);
-        InOneSentence(path, () => WorkFolder.Recover(disk, target));
-        RefuseFolder(path, target, force, ours);
-        InOneSentence(path, () =>
-        {
-            using var work = WorkFolder.Begin(disk, target);
-            write(work, target);
-        });
+        return new OutputFolder(path, target, force, disk, stop);
     }
 
-    private static void InOneSentence(string path, Action action)
+    /// <summary>Writes the folder; once.</summary>
+    /// <param name="files">Its files; names without folders, all different.</param>
+    /// <exception cref="IOException">One sentence that says what stands in the way; what was there before is there still.</exception>
+    public void Write(IReadOnlyCollection<OutputFile> files)
+    {
+        RequirePlainNames(files);
+        lock (_gate)
+        {
+            _stop.ThrowIfCancellationRequested();
+
+            // Hours may have passed since it was reserved.
+            RefuseLinkOrFile(_path, _target);
+            RefuseFolder(OutputNames.All.Union(files.Select(file => file.Name)));
+            InOneSentence(() =>
+            {
+                _disk.MakeFolder(_work.New);
+                foreach (var file in files)
+                {
+                    _stop.ThrowIfCancellationRequested();
+                    _disk.WriteFile(Path.Combine(_work.New, file.Name), file.Content);
+                }
+
+                _disk.SyncFolder(_work.New);
+                _stop.ThrowIfCancellationRequested();
+                ChangeOver();
+                _disk.SyncFolder(Path.GetDirectoryName(_target)!);
+            });
+        }
+    }
+
+    public void Dispose()
+    {
+        _whenStopped.Dispose();
+        Release();
+    }
+
+    private void Release()
+    {
+        lock (_gate)
+        {
+            _work.Dispose();
+            RemoveParents();
+        }
+    }
+
+    private void InOneSentence(Action action) => InOneSentence(() =>
+    {
+        action();
+        return true;
+    });
+
+    private T InOneSentence<T>(Func<T> action)
     {
         try
         {
-            action();
+            return action();
         }
         catch (Exception exception) when (DiskTrouble.Is(exception))
         {
-            throw DiskTrouble.Unwritten($"Cannot write {path}", exception);
+            throw DiskTrouble.Unwritten($"Cannot write {_path}", exception);
         }
     }
 
-    private static void ChangeOver(IDisk disk, WorkFolder work, string target, bool force)
+    /// <summary>Makes the folders above that are missing, the outermost first.</summary>
+    private ImmutableArray<string> MakeParents()
     {
-        var isReplacing = force && Directory.Exists(target);
+        var missing = new Stack<string>();
+        for (var folder = Path.GetDirectoryName(_target); folder is not null && !Directory.Exists(folder); folder = Path.GetDirectoryName(folder))
+        {
+            if (File.Exists(folder))
+            {
+                throw new IOException($"Cannot write {_path}: {folder} is a file, not a folder; name another place.");
+            }
+
+            missing.Push(folder);
+        }
+
+        InOneSentence(() =>
+        {
+            foreach (var folder in missing)
+            {
+                _disk.MakeFolder(folder);
+            }
+        });
+        return [.. missing];
+    }
+
+    /// <summary>Takes away those folders above that were made and hold nothing; whatever cannot be is harmless.</summary>
+    private void RemoveParents()
+    {
+        foreach (var folder in _parentsMade.Reverse())
+        {
+            try
+            {
+                Directory.Delete(folder);
+            }
+            catch (Exception exception) when (DiskTrouble.Is(exception))
+            {
+                return;
+            }
+        }
+    }
+
+    private void ChangeOver()
+    {
+        var isReplacing = _force && Directory.Exists(_target);
         if (isReplacing)
         {
-            disk.MoveFolder(target, work.Old);
+            _disk.MoveFolder(_target, _work.Old);
         }
 
         try
         {
-            disk.MoveFolder(work.New, target);
+            _disk.MoveFolder(_work.New, _target);
         }
         catch when (isReplacing)
         {
-            disk.MoveFolder(work.Old, target);
+            _disk.MoveFolder(_work.Old, _target);
             throw;
         }
 
@@ -91,7 +182,7 @@ public static class OutputFolder
         {
             try
             {
-                work.DropOld();
+                _work.DropOld();
             }
             catch (Exception exception) when (DiskTrouble.Is(exception))
             {
@@ -108,14 +199,7 @@ public static class OutputFolder
         }
 
         var target = Path.TrimEndingDirectorySeparator(Path.GetFullPath(path));
-        if (Path.GetDirectoryName(target) is not { } parent)
-        {
-            throw new IOException($"{path} is the root of a disk: name a folder in it.");
-        }
-
-        return Directory.Exists(parent)
-            ? target
-            : throw new IOException($"The folder {parent}, in which {Path.GetFileName(target)} is to be made, does not exist: make it first.");
+        return Path.GetDirectoryName(target) is null ? throw new IOException($"{path} is the root of a disk: name a folder in it.") : target;
     }
 
     private static void RefuseLinkOrFile(string path, string target)
@@ -131,23 +215,23 @@ public static class OutputFolder
         }
     }
 
-    private static void RefuseFolder(string path, string target, bool force, ImmutableHashSet<string> ours)
+    private void RefuseFolder(ImmutableHashSet<string> ours)
     {
-        if (!Directory.Exists(target))
+        if (!Directory.Exists(_target))
         {
             return;
         }
 
-        if (!force)
+        if (!_force)
         {
-            throw new IOException($"{path} exists already: name another folder, or replace it with --force.");
+            throw new IOException($"{_path} exists already: name another folder, or replace it with --force.");
         }
 
-        var foreign = Foreign(path, target, ours);
+        var foreign = Foreign(_path, _target, ours);
         if (foreign.Count > 0)
         {
             throw new IOException(
-                $"{path} holds files this program did not write ({string.Join(", ", foreign)}), so it is not replaced: move them away, or name another folder.");
+                $"{_path} holds files this program did not write ({string.Join(", ", foreign)}), so it is not replaced: move them away, or name another folder.");
         }
     }
 

@@ -24,13 +24,15 @@ internal sealed partial class WorkFolder : IDisposable
     private string Done => System.IO.Path.Combine(Path, "done");
 
     /// <summary>Clears away what dead runs left, and puts back a target that one of them had moved aside.</summary>
-    /// <exception cref="IOException">Another run is writing the target now, or the system refuses.</exception>
-    public static void Recover(IDisk disk, string target)
+    /// <exception cref="IOException">Another run is at work on the target now, or the system refuses.</exception>
+    public static void Recover(IDisk disk, string target) => Recover(disk, target, mine: null);
+
+    private static void Recover(IDisk disk, string target, string? mine)
     {
         foreach (var path in Directory.EnumerateDirectories(Parent(target), "*", new EnumerationOptions { AttributesToSkip = FileAttributes.ReparsePoint }))
         {
             var name = System.IO.Path.GetFileName(path);
-            if (!name.StartsWith(Prefix(target), StringComparison.Ordinal) || OwnerPattern().Match(name[Prefix(target).Length..]) is not { Success: true } owner)
+            if (path == mine || !name.StartsWith(Prefix(target), StringComparison.Ordinal) || OwnerPattern().Match(name[Prefix(target).Length..]) is not { Success: true } owner)
             {
                 continue;
             }
@@ -38,7 +40,7 @@ internal sealed partial class WorkFolder : IDisposable
             using var held = TryLock(path, out var isInUse);
             if (isInUse)
             {
-                throw new IOException($"another run (process {owner.Groups[1].Value}) is writing it now; wait for it, or choose another folder");
+                throw new IOException($"another run (process {owner.Groups[1].Value}) is at work on it now; wait for it, or choose another folder");
             }
 
             if (Directory.Exists(OldIn(path)) && !System.IO.Path.Exists(target))
@@ -51,18 +53,27 @@ internal sealed partial class WorkFolder : IDisposable
         }
     }
 
-    /// <summary>Makes one for a target.</summary>
+    /// <summary>Makes one for a target; of two runs that begin in the same moment at most one goes on.</summary>
     public static WorkFolder Begin(IDisk disk, string target)
     {
         var random = Guid.NewGuid().ToString("N")[..8];
         var path = System.IO.Path.Combine(Parent(target), $"{Prefix(target)}{Environment.ProcessId.ToString(CultureInfo.InvariantCulture)}-{random}");
         disk.MakeFolder(path);
+        FileStream? held = null;
         try
         {
-            return new WorkFolder(disk, path, Lock(path, FileMode.CreateNew));
+            held = Lock(path, FileMode.CreateNew);
+            Recover(disk, target, path);
+            return new WorkFolder(disk, path, held);
+        }
+        catch (DirectoryNotFoundException exception)
+        {
+            // Seen by another run before the lock was in it, and cleared away as left behind.
+            throw new IOException("another run for it began in the same moment; start again", exception);
         }
         catch (Exception exception) when (DiskTrouble.Is(exception))
         {
+            held?.Dispose();
             TryDelete(disk, path);
             throw;
         }

@@ -16,12 +16,12 @@ internal static class AntimeridianCut
     public static ImmutableArray<ImmutableArray<LonLat>> Cut(ImmutableArray<LonLat> path)
     {
         var parts = ImmutableArray.CreateBuilder<ImmutableArray<LonLat>>();
-        var here = path[0] with { Lon = Longitudes.Normalise(path[0].Lon) };
+        var here = path[0] with { Lon = Longitude.Normalise(path[0].Lon) };
         var part = ImmutableArray.CreateBuilder<LonLat>();
         part.Add(here);
         foreach (var vertex in path.AsSpan()[1..])
         {
-            var next = new LonLat(here.Lon + Longitudes.Difference(here.Lon, vertex.Lon), vertex.Lat);
+            var next = new LonLat(here.Lon + Longitude.Difference(here.Lon, vertex.Lon), vertex.Lat);
             if (next.Lon is > 180 or < -180)
             {
                 var side = next.Lon > 180 ? 180 : -180;

@@ -11,7 +11,7 @@ internal static class DegreesMinutes
     public static string Of(LonLat position)
     {
         // Turned into range after rounding: 179.9999999 is W180, not E180, and -0 is E000.
-        var lon = Thousandths(Longitudes.Normalise(position.Lon));
+        var lon = Thousandths(Longitude.Normalise(position.Lon));
         if (lon == 180L * ThousandthsOfMinutePerDegree)
         {
             lon = -lon;

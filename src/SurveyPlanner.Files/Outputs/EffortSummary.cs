@@ -11,9 +11,16 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
     private string EffortKey => plan.IsPoints ? "points" : "length_km";
 
     /// <summary>The members of the survey's <c>effort</c>.</summary>
-    public void WriteWhole(EffortPrecision? delivered)
+    /// <param name="planned">How the plan shares effort among several strata.</param>
+    /// <param name="delivered">What the drawn layout delivers; null where none is drawn.</param>
+    public void WriteWhole(Allocation planned, EffortPrecision? delivered)
     {
         json.Number(_pilot.RateKey, plan.EncounterRate);
+        if (plan.Strata.Length > 1)
+        {
+            json.WriteString("planned_allocation", Words.Kebab(planned));
+        }
+
         if (plan.Estimator is { } estimator)
         {
             json.WriteString("variance_estimator", Words.Kebab(estimator));

@@ -77,7 +77,7 @@ internal static class Figures
     /// <summary>A longitude of a single position, in [-180, 180) also after rounding.</summary>
     public static string Longitude(double value, int decimals = PositionDecimals)
     {
-        var text = Fixed(Longitudes.Normalise(value), decimals);
+        var text = Fixed(Regions.Longitude.Normalise(value), decimals);
         return text == "180" ? "-180" : text;
     }
 

@@ -57,7 +57,7 @@ internal static class LonLatPath
     {
         var drawn = edge.DrawnAt(share);
         var north = (place.Lat - drawn.Lat) * MetresPerDegree;
-        var east = Longitudes.Difference(drawn.Lon, place.Lon) * MetresPerDegree * Math.Cos(place.Lat * Math.PI / 180);
+        var east = Longitude.Difference(drawn.Lon, place.Lon) * MetresPerDegree * Math.Cos(place.Lat * Math.PI / 180);
         return Math.Sqrt((north * north) + (east * east));
     }
 
@@ -66,6 +66,6 @@ internal static class LonLatPath
         public PlanePoint PlaneAt(double share) => new(From.X + (share * (To.X - From.X)), From.Y + (share * (To.Y - From.Y)));
 
         public LonLat DrawnAt(double share) =>
-            new(Start.Lon + (share * Longitudes.Difference(Start.Lon, End.Lon)), Start.Lat + (share * (End.Lat - Start.Lat)));
+            new(Start.Lon + (share * Longitude.Difference(Start.Lon, End.Lon)), Start.Lat + (share * (End.Lat - Start.Lat)));
     }
 }

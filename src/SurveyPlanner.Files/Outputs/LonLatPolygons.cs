@@ -40,13 +40,13 @@ internal sealed class LonLatPolygons(EqualAreaProjection projection)
         foreach (var point in plane)
         {
             var position = projection.Unproject(point);
-            var lon = ring.Count == 0 ? position.Lon : ring[^1].X + Longitudes.Difference(ring[^1].X, position.Lon);
+            var lon = ring.Count == 0 ? position.Lon : ring[^1].X + Longitude.Difference(ring[^1].X, position.Lon);
             var cut = (Turn * Math.Round((lon - 180) / Turn)) + 180;
             ring.Add(new Coordinate(Math.Abs(lon - cut) < OnCutDegrees ? cut : lon, position.Lat));
         }
 
         var (first, last) = (ring[0], ring[^1]);
-        var home = last.X + Longitudes.Difference(last.X, first.X);
+        var home = last.X + Longitude.Difference(last.X, first.X);
         if (Math.Abs(home - first.X) > Turn / 2)
         {
             var pole = Math.CopySign(90, projection.Centre.Lat);

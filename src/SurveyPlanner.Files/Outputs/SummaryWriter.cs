@@ -1,5 +1,7 @@
 using System.Text.Json;
+using SurveyPlanner.Coverage;
 using SurveyPlanner.Effort;
+using SurveyPlanner.Files.Tables;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
 
@@ -32,14 +34,17 @@ public static class SummaryWriter
         json.Array("strata", plan.Strata, stratum => WriteStratum(json, stratum, plan.Effort));
         if (plan.Effort is { } effort)
         {
-            json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(plan.Delivered));
+            json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(plan.Design.Effort.Allocation, plan.Delivered));
         }
 
         json.WriteEndObject();
     }
 
     /// <summary>What <c>effort --json</c> prints: the effort of each stratum and as a whole, in the same form.</summary>
-    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort)
+    /// <param name="json">The writer.</param>
+    /// <param name="effort">The effort.</param>
+    /// <param name="planned">How the plan shares it among several strata.</param>
+    public static void WriteEffortDocument(Utf8JsonWriter json, EffortPlan effort, Allocation planned)
     {
         json.WriteStartObject();
         json.WriteNumber("format_version", FormatVersion);
@@ -50,7 +55,27 @@ public static class SummaryWriter
             WriteEffort(json, stratum.Name, effort);
             json.WriteEndObject();
         });
-        json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(delivered: null));
+        json.Object("effort", () => new EffortSummary(json, effort).WriteWhole(planned, delivered: null));
+        json.WriteEndObject();
+    }
+
+    /// <summary>What <c>coverage --at --json</c> prints: the table of positions, a member a column.</summary>
+    public static void WriteCoverageAt(Utf8JsonWriter json, IEnumerable<PositionCoverage> positions)
+    {
+        json.WriteStartObject();
+        json.WriteNumber("format_version", FormatVersion);
+        json.Array("positions", positions, one =>
+        {
+            json.WriteStartObject();
+            json.Figure("lon", Figures.Longitude(one.Position.Lon));
+            json.Figure("lat", Figures.Degrees(one.Position.Lat));
+            json.Text("stratum", one.Stratum);
+            json.Number("coverage", one.Best);
+            json.Number("standard_error", one.Exact is null ? one.StandardError : null);
+            json.Number("times_covered", one.ExpectedTimes);
+            json.WriteString("method", CoverageAtTable.Method(one));
+            json.WriteEndObject();
+        });
         json.WriteEndObject();
     }
 

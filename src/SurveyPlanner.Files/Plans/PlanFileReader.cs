@@ -14,10 +14,11 @@ public static class PlanFileReader
     /// <summary>Reads a plan file and looks whether the files it names exist.</summary>
     /// <param name="path">The plan file.</param>
     /// <param name="sets">Overrides of the command line, such as <c>layout.spacing=4 km</c>; they count more than the file.</param>
+    /// <param name="files">The files of the run; unless given, of this reading alone.</param>
     /// <exception cref="InputException">Everything that is wrong with the file and the overrides.</exception>
     /// <exception cref="IOException">The file is there and cannot be read.</exception>
-    public static PlanFile Read(string path, IEnumerable<string> sets)
-        => Understand(TextFile.Read(path, "plan file", MostKilobytes), path, sets, path => File.Exists(path) || Directory.Exists(path));
+    public static PlanFile Read(string path, IEnumerable<string> sets, InputFiles? files = null)
+        => Understand(TextFile.Read(path, "plan file", MostKilobytes, files ?? new InputFiles()), path, sets, path => File.Exists(path) || Directory.Exists(path));
 
     /// <summary>Reads the text of a plan file without touching the disk: the files it names are not looked for.</summary>
     /// <param name="text">The text.</param>

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using SurveyPlanner.Files.Units;
 using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Files.Plans;
@@ -8,12 +9,17 @@ namespace SurveyPlanner.Files.Plans;
 /// <param name="AreaKm2">Area of the region, square kilometres.</param>
 /// <param name="LongAxisKm">Long side of the narrowest rectangle round it, kilometres.</param>
 /// <param name="ShortAxisKm">Short side, kilometres.</param>
+/// <param name="LinesAcrossKm">
+/// How much of the long side lines along the short axis can fall on, kilometres; gaps between parts of the region are left out, so that
+/// the expected number of lines is this over their spacing.
+/// </param>
 /// <param name="StratumFields">Attributes of the boundary that could name strata, the likeliest first.</param>
 public sealed record StarterFacts(
     string SurveyName,
     double AreaKm2,
     double LongAxisKm,
     double ShortAxisKm,
+    double LinesAcrossKm,
     ImmutableArray<StratumFieldCandidate> StratumFields)
 {
     /// <summary>More parts than this are features of a map, not strata of a survey.</summary>
@@ -21,17 +27,37 @@ public sealed record StarterFacts(
 
     private const int MostCandidates = 5;
 
+    /// <summary>Lines laid out to see how many a spacing brings; any number would do.</summary>
+    private const string TrialPlan = """
+        [survey]
+        seed = 1
+        [region]
+        boundary = "trial"
+        [layout]
+        kind = "parallel"
+        bearing = "short-axis"
+        lines = 20
+        half_width = "1 m"
+        """;
+
     /// <summary>The facts of a boundary that was read as one stratum.</summary>
     /// <param name="surveyName">Name of the survey to begin with, such as the file's name without its extension.</param>
     /// <param name="boundary">The boundary.</param>
-    /// <param name="region">The region built from it without a stratum field.</param>
-    public static StarterFacts Of(string surveyName, Boundary boundary, Region region)
+    /// <exception cref="InputException">The boundary makes no region.</exception>
+    public static StarterFacts Of(string surveyName, Boundary boundary)
     {
-        var largest = region.Strata.MaxBy(stratum => stratum.AreaKm2)!;
-        return new StarterFacts(surveyName, region.AreaKm2, largest.LongAxisKm, largest.ShortAxisKm, Candidates(boundary));
+        var trial = PlanSurvey.DrawOnly(PlanFileReader.Parse(TrialPlan, "trial.toml", []).Design, new SurveyInputs(boundary, [], null));
+        var (region, layout) = (trial.Strata[0].Stratum, trial.Strata[0].Layout);
+        return new StarterFacts(
+            surveyName,
+            region.AreaKm2,
+            region.LongAxisKm,
+            region.ShortAxisKm,
+            layout.ExpectedCount * layout.SpacingMetres / 1000,
+            Candidates(boundary));
     }
 
-    /// <summary>Attributes that every feature has and that tell at least two groups of them apart, the fewest groups first.</summary>
+    /// <summary>Attributes that every feature has and that tell at least two groups of them apart: names before numbers, the fewest groups first.</summary>
     private static ImmutableArray<StratumFieldCandidate> Candidates(Boundary boundary)
         =>
         [
@@ -41,7 +67,8 @@ public sealed record StarterFacts(
                 .Where(field => !string.IsNullOrWhiteSpace(field))
                 .Select(field => new StratumFieldCandidate(field, [.. boundary.Features.Select(feature => feature.Attributes.GetValueOrDefault(field, "")).Distinct()]))
                 .Where(candidate => candidate.Values.Length is >= 2 and <= MostStrata && !candidate.Values.Any(string.IsNullOrWhiteSpace))
-                .OrderBy(candidate => candidate.Values.Length)
+                .OrderBy(candidate => candidate.Values.All(value => DecimalText.Read(value).Complaint is null))
+                .ThenBy(candidate => candidate.Values.Length)
                 .ThenBy(candidate => candidate.Field, StringComparer.Ordinal)
                 .Take(MostCandidates),
         ];

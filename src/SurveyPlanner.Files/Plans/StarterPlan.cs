@@ -21,20 +21,21 @@ public static class StarterPlan
     /// <summary>Lengths that people write: 1 to 8 times a power of ten.</summary>
     private static readonly double[] RoundSteps = [1, 1.2, 1.5, 2, 2.5, 3, 4, 5, 6, 8, 10];
 
-    /// <summary>The text of a plan that reads without a problem and fits the region: about 20 parallel lines across its long axis.</summary>
+    /// <summary>The text of a plan that reads without a problem and fits the region: about 20 parallel lines across its long axis, wherever they meet it.</summary>
     /// <param name="boundaryPath">The boundary as the plan is to name it: relative to the folder that the plan will stand in.</param>
     /// <param name="facts">What the region is like.</param>
     /// <exception cref="InputException">No plan can name this file.</exception>
     public static string For(string boundaryPath, StarterFacts facts)
     {
         ArgumentNullException.ThrowIfNull(facts);
-        ArgumentOutOfRangeException.ThrowIfNegativeOrZero(facts.LongAxisKm);
+        ArgumentOutOfRangeException.ThrowIfNegativeOrZero(facts.LinesAcrossKm);
         if (string.IsNullOrWhiteSpace(boundaryPath) || boundaryPath.Any(char.IsControl))
         {
             throw new InputException(new Problem("a plan cannot hold this file name, for it is blank or has a control character in it: rename the file", Quoted.Short(boundaryPath)));
         }
 
-        var spacingMetres = Round(facts.LongAxisKm * 1000 / LinesAimedAt);
+        var spacingMetres = Round(facts.LinesAcrossKm * 1000 / LinesAimedAt);
+        var lines = (int)Math.Round(facts.LinesAcrossKm * 1000 / spacingMetres);
         var halfWidthMetres = RoundDown(Math.Min(WidestHalfWidthMetres, spacingMetres * HalfWidthPerSpacing));
         return $"""
             # The plan of a survey. What follows a # is a note; take the # away from a key to use it.
@@ -55,7 +56,7 @@ public static class StarterPlan
             [layout]
             kind = "parallel"                      # {string.Join(" · ", Enum.GetValues<LayoutKind>().Select(PlanWord.Of))}
             bearing = "short-axis"                 # or "long-axis", or degrees from true north: 45; best across what makes numbers change
-            spacing = {Padded(LengthText(spacingMetres))} # about {LinesAimedAt} lines in this region; or lines = 20, or total_length = "400 km"
+            spacing = {Padded(LengthText(spacingMetres))} # about {lines} lines in the region as a whole; or lines = 20, or total_length = "400 km"
             half_width = {Padded(LengthText(halfWidthMetres), 25)} # how far out from the line animals are counted: put in your own; points have a radius instead
             edge = "minus"                         # lines stop at the boundary; "plus": they run on past it by the half-width
 
@@ -89,7 +90,7 @@ public static class StarterPlan
             var strata = string.Create(CultureInfo.InvariantCulture, $"{candidate.Values.Length} strata: {string.Join(", ", shown)}{more}");
             return i == 0
                 ? $"# stratum_field = {Padded(Quoted.Text(candidate.Field), 21)} # {strata}"
-                : $"#   or the field {Quoted.Text(candidate.Field)} # {strata}";
+                : $"#   or the field {Padded(Quoted.Text(candidate.Field), 21)} # {strata}";
         });
         return string.Join('\n', notes);
     }

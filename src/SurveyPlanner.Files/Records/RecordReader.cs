@@ -15,6 +15,11 @@ public static class RecordReader
     /// <exception cref="IOException">It cannot be read at all.</exception>
     public static SurveyRecord Read(string file)
     {
+        if (string.IsNullOrWhiteSpace(file) || file.Contains('\0', StringComparison.Ordinal))
+        {
+            throw new IOException($"The record has no name: give the {OutputNames.Record} in an output folder.");
+        }
+
         byte[] bytes;
         try
         {

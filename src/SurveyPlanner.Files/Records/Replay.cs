@@ -42,6 +42,27 @@ public static class Replay
         throw new InputException(fewest!);
     }
 
+    /// <summary>
+    /// Holds what was read against the record once more: a file may change between being looked at and being read, and one that was not
+    /// there when the record was made (a shapefile's companion) may say something else.
+    /// </summary>
+    /// <param name="record">The record.</param>
+    /// <param name="read">The inputs as they were read.</param>
+    /// <exception cref="InputException">Names each input that is not the recorded one.</exception>
+    public static void RequireRecorded(SurveyRecord record, ImmutableArray<InputFile> read)
+    {
+        var strangers = read.Where(input => !record.Inputs.Any(known => known.Path == input.Path && known.Sha256 == input.Sha256)).ToList();
+        if (strangers.Count > 0)
+        {
+            throw new InputException([.. strangers.Select(input => new Problem(
+                record.Inputs.Any(known => known.Path == input.Path)
+                    ? "This input changed while it was being read; bring back the recorded file and replay again."
+                    : "This input is read along with the others but was not there when the record was made; move it away and replay again.",
+                input.Path,
+                Key: input.Key))]);
+        }
+    }
+
     /// <summary>Holds what was made again against the record.</summary>
     /// <param name="record">The record.</param>
     /// <param name="plan">The plan made again from it.</param>

@@ -37,7 +37,7 @@ public sealed class CoverageAtTable
     public static CoverageAtTable Read(string path)
     {
         var problems = new List<Problem>();
-        var table = TextTable.Read(path, "table of positions", [Lon, Lat], problems);
+        var table = TextTable.Read(path, "table of positions", [Lon, Lat], new InputFiles(), problems);
         var positions = ImmutableArray.CreateBuilder<LonLat>(table.Rows.Length);
         if (problems.Count == 0 && !(table.Has(Lon) && table.Has(Lat)))
         {
@@ -51,7 +51,7 @@ public sealed class CoverageAtTable
                 var (lon, lat) = (Degrees(table, row, Lon, -180, 360), Degrees(table, row, Lat, -90, 90));
                 if (lon is { } east && lat is { } north)
                 {
-                    positions.Add(new LonLat(Longitudes.Normalise(east), north));
+                    positions.Add(new LonLat(Longitude.Normalise(east), north));
                 }
             }
         }
@@ -117,7 +117,7 @@ public sealed class CoverageAtTable
     {
         if (coverage.IsOutside)
         {
-            return ["", "", "", "", "outside"];
+            return ["", "", "", "", Method(coverage)];
         }
 
         static string Figure(double? value) => value is { } known ? Figures.Significant(known, Digits) : "";
@@ -128,7 +128,10 @@ public sealed class CoverageAtTable
             Figure(coverage.Best),
             isExact ? "" : Figure(coverage.StandardError),
             Figure(coverage.ExpectedTimes),
-            isExact ? "exact" : "simulated",
+            Method(coverage),
         ];
     }
+
+    /// <summary>How the coverage at a position is known.</summary>
+    internal static string Method(PositionCoverage coverage) => coverage.IsOutside ? "outside" : coverage.Exact is not null ? "exact" : "simulated";
 }

@@ -21,12 +21,14 @@ public static class PilotTableReader
 
     /// <param name="transectsPath">Table of transects.</param>
     /// <param name="detectionsPath">Table of detections; null when there is none.</param>
+    /// <param name="files">The files of the run; unless given, of this reading alone.</param>
     /// <exception cref="InputException">Every row of both tables that cannot be read. What the rows mean together is judged by the core.</exception>
     /// <exception cref="IOException">A file is there and cannot be read.</exception>
-    public static PilotTable Read(string transectsPath, string? detectionsPath)
+    public static PilotTable Read(string transectsPath, string? detectionsPath, InputFiles? files = null)
     {
+        files ??= new InputFiles();
         var problems = new List<Problem>();
-        var transects = TextTable.Read(transectsPath, "table of transects", [Stratum, Transect, Length, Visits, Count], problems);
+        var transects = TextTable.Read(transectsPath, "table of transects", [Stratum, Transect, Length, Visits, Count], files.Under("pilot.transects"), problems);
         var isPoints = transects.Has(Visits);
         var rows = ReadTransects(transects, isPoints, problems);
         transects.Close();
@@ -34,7 +36,7 @@ public static class PilotTableReader
         var notices = transects.Notices;
         if (detectionsPath is not null)
         {
-            var table = TextTable.Read(detectionsPath, "table of detections", [Stratum, Transect, Distance, Size], problems);
+            var table = TextTable.Read(detectionsPath, "table of detections", [Stratum, Transect, Distance, Size], files.Under("pilot.detections"), problems);
             detections = ReadDetections(table, problems);
             table.Close();
             notices.AddRange(table.Notices);

@@ -49,13 +49,14 @@ internal sealed class TextTable
     /// <param name="path">The file.</param>
     /// <param name="noun">What it is, for messages.</param>
     /// <param name="columns">The columns that it may have.</param>
+    /// <param name="files">The files of the run.</param>
     /// <param name="problems">Receives what is wrong.</param>
-    public static TextTable Read(string path, string noun, IReadOnlyList<Column> columns, List<Problem> problems)
+    public static TextTable Read(string path, string noun, IReadOnlyList<Column> columns, InputFiles files, List<Problem> problems)
     {
         var table = new TextTable(path, problems);
         try
         {
-            var rows = CsvReader.Read(TextFile.Read(path, noun, MostKilobytes), path);
+            var rows = CsvReader.Read(TextFile.Read(path, noun, MostKilobytes, files), path);
             if (rows.Length == 0)
             {
                 problems.Add(new Problem($"is empty: the first line of a {noun} names its columns", path, 1, 1));

@@ -14,7 +14,7 @@ internal sealed class ChartDrawing
     private const double TitleWidth = 24;
     private const double LabelStep = 17;
     private const double NamesMargin = 190;
-    private const int LongestName = 20;
+    private const int LongestName = 18;
 
     private readonly Chart _chart;
     private readonly LabelPlacer _placer = new(Width, Height);

@@ -21,8 +21,12 @@ internal sealed class LabelPlacer(double width, double height)
     private const double Square = 64;
     private readonly Dictionary<(int, int), List<Box>> _taken = [];
 
-    /// <summary>Length of a text, estimated: 0.6 of its size a character (texts are short and mostly digits).</summary>
-    public static double LengthOf(string text, double sizePixels) => text.Length * sizePixels * 0.6;
+    /// <summary>Length of a text, estimated: 0.6 of its size a character (texts are short and mostly digits), the whole of it where the script is wide.</summary>
+    public static double LengthOf(string text, double sizePixels) => text.Sum(c => IsWide(c) ? 1 : 0.6) * sizePixels;
+
+    // Blocks of East Asian wide characters (Unicode Standard Annex 11; ranges from memory).
+    private static bool IsWide(char c)
+        => c is (>= '\u1100' and <= '\u115f') or (>= '\u2e80' and <= '\ua4cf') or (>= '\uac00' and <= '\ud7a3') or (>= '\uf900' and <= '\ufaff') or (>= '\uff00' and <= '\uff60');
 
     /// <summary>Whether there is room; if so it is taken.</summary>
     public bool TryPlace(Label label, double sizePixels)

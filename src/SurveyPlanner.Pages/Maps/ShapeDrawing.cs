@@ -22,6 +22,53 @@ public sealed record ShapeDrawing(IReadOnlyList<Pixel[]> Rings)
         }
     }
 
+    /// <summary>
+    /// The edges alone where parts of the shape meet, as those of a region cut at 180° do: what two of them share is no edge.
+    /// Null where none meet, and <see cref="Path"/> has the edges too.
+    /// </summary>
+    public string? Outline
+    {
+        get
+        {
+            var edges = Rings.SelectMany(Edges).ToHashSet();
+            bool IsShared((Pixel From, Pixel To) edge) => edges.Contains((edge.To, edge.From));
+            if (!edges.Any(IsShared))
+            {
+                return null;
+            }
+
+            var path = new PathData();
+            foreach (var ring in Rings)
+            {
+                // Begun after a shared edge, so that no run of others is cut in two.
+                var all = Edges(ring).ToArray();
+                var start = Array.FindIndex(all, IsShared) + 1;
+                var run = new List<Pixel>();
+                foreach (var edge in all[start..].Concat(all[..start]))
+                {
+                    if (run.Count > 0 && IsShared(edge))
+                    {
+                        path.Polyline([.. run]);
+                        run.Clear();
+                    }
+                    else if (!IsShared(edge))
+                    {
+                        run.AddRange(run.Count == 0 ? [edge.From, edge.To] : [edge.To]);
+                    }
+                }
+
+                if (run.Count > 0)
+                {
+                    path.Polyline([.. run]);
+                }
+            }
+
+            return path.ToString();
+        }
+    }
+
+    private static IEnumerable<(Pixel From, Pixel To)> Edges(Pixel[] ring) => ring.Select((from, i) => (from, ring[(i + 1) % ring.Length]));
+
     public static ShapeDrawing Of(PlaneShape shape, MapFrame frame)
     {
         var rings = new List<Pixel[]>();
@@ -60,6 +107,25 @@ public sealed record ShapeDrawing(IReadOnlyList<Pixel[]> Rings)
             select place;
         Pixel[] places = [.. inside.Take(most)];
         return places.Length > 0 ? places : [new Pixel((minX + maxX) / 2, (minY + maxY) / 2)];
+    }
+
+    /// <summary>How long a text in the middle of which a place lies may be without leaving the shape on either side.</summary>
+    public double WidthAt(Pixel place)
+    {
+        var nearest = double.MaxValue;
+        foreach (var ring in Rings)
+        {
+            for (var i = 0; i < ring.Length; i++)
+            {
+                var (a, b) = (ring[i], ring[(i + 1) % ring.Length]);
+                if ((a.Y > place.Y) != (b.Y > place.Y))
+                {
+                    nearest = Math.Min(nearest, Math.Abs(a.X + ((b.X - a.X) * (place.Y - a.Y) / (b.Y - a.Y)) - place.X));
+                }
+            }
+        }
+
+        return 2 * nearest;
     }
 
     // A name is wider than high: room to the sides counts for less.

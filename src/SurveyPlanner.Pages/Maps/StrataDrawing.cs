@@ -1,3 +1,4 @@
+using System.Globalization;
 using SurveyPlanner.Pages.Look;
 using SurveyPlanner.Pages.Words;
 using SurveyPlanner.Regions;
@@ -8,7 +9,12 @@ namespace SurveyPlanner.Pages.Maps;
 public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string Exclusions)
 {
     public const double NameSize = 14;
-    private const int LongestName = 28;
+
+    // A name is written out up to the first; a longer one is cut to the room there is, but never below the second.
+    private const double LongestName = 235;
+    private const double ShortestCut = 118;
+
+    private const double SpotPixels = 3;
 
     /// <summary>A lone stratum needs no name: the map's title has it.</summary>
     internal static StrataDrawing Of(Region region, MapFrame frame, LabelPlacer placer)
@@ -25,8 +31,7 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
 
     private static Label NameLabel(string name, ShapeDrawing shape, LabelPlacer placer)
     {
-        var text = PlainText.Shorten(name, LongestName);
-        var candidates = shape.RoomiestPlaces(120).Select(place => new Label(text, place with { Y = place.Y + (NameSize / 3) })).ToArray();
+        var candidates = shape.RoomiestPlaces(120).Select(place => new Label(Fitted(name, shape, place), place with { Y = place.Y + (NameSize / 3) })).ToArray();
         if (candidates.FirstOrDefault(label => placer.TryPlace(label, NameSize)) is { } free)
         {
             return free;
@@ -37,19 +42,37 @@ public sealed record StrataDrawing(IReadOnlyList<StratumDrawing> Strata, string 
         return candidates[0];
     }
 
-    // Neighbours (strata that share a vertex on the drawing) get different fills as far as four allow.
+    private static string Fitted(string name, ShapeDrawing shape, Pixel place)
+    {
+        var length = LabelPlacer.LengthOf(name, NameSize);
+        return length <= LongestName
+            ? name
+            : PlainText.Shorten(name, (int)(Math.Clamp(shape.WidthAt(place), ShortestCut, LongestName) / length * new StringInfo(name).LengthInTextElements));
+    }
+
+    // Neighbours (strata whose edges run over the same spot of the drawing) get different fills as far as four allow, and so do all while there are no more than four.
     private static int[] FillsFor(ShapeDrawing[] shapes)
     {
-        var corners = shapes.Select(shape => shape.Rings.SelectMany(ring => ring).Select(p => ((int)p.X, (int)p.Y)).ToHashSet()).ToArray();
+        var edges = shapes.Select(shape => shape.Rings.SelectMany(Spots).ToHashSet()).ToArray();
         var fills = new int[shapes.Length];
         for (var i = 0; i < shapes.Length; i++)
         {
-            var used = Enumerable.Range(0, i).Where(j => corners[i].Overlaps(corners[j])).Select(j => fills[j]).ToArray();
-            fills[i] = Enumerable.Range(0, Tokens.StratumFills.Count).OrderBy(fill => used.Count(u => u == fill)).ThenBy(fill => fill).First();
+            var used = Enumerable.Range(0, i).Where(j => edges[i].Overlaps(edges[j])).Select(j => fills[j]).ToArray();
+            fills[i] = Enumerable.Range(0, Tokens.StratumFills.Count)
+                .OrderBy(fill => used.Count(u => u == fill)).ThenBy(fill => fills.AsSpan(0, i).Count(fill)).ThenBy(fill => fill).First();
         }
 
         return fills;
     }
+
+    // A step of half a spot's side misses none that the edge runs through for long.
+    private static IEnumerable<(int, int)> Spots(Pixel[] ring)
+        => from i in Enumerable.Range(0, ring.Length)
+           let a = ring[i]
+           let b = ring[(i + 1) % ring.Length]
+           let steps = Math.Max(1, (int)(a.DistanceTo(b) / (SpotPixels / 2)))
+           from step in Enumerable.Range(0, steps)
+           select ((int)((a.X + ((b.X - a.X) * step / steps)) / SpotPixels), (int)((a.Y + ((b.Y - a.Y) * step / steps)) / SpotPixels));
 }
 
 /// <summary>One stratum on a drawing.</summary>

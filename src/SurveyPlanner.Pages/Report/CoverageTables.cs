@@ -23,9 +23,9 @@ internal static class CoverageTables
                 Figures.Three(coverage.Min),
                 Figures.Three(coverage.Max),
                 Figures.Three(coverage.Cv * 100),
-                Figures.Three(coverage.ShareBelow(0.5) * 100),
-                Figures.Three(coverage.ShareBelow(0.9) * 100),
-                Figures.Three(coverage.ShareAbove(1.1) * 100),
+                Figures.AreaShare(coverage.ShareBelow(0.5)),
+                Figures.AreaShare(coverage.ShareBelow(0.9)),
+                Figures.AreaShare(coverage.ShareAbove(1.1)),
             ]),
         ]);
 
@@ -48,7 +48,7 @@ internal static class CoverageTables
     public static Table OfClasses(IEnumerable<CoverageClass> classes) => new(
         "Area by coverage probability",
         [new("Multiple of nominal", false), new("Area, km²"), new("Share, %")],
-        [.. classes.Select(one => (string[])[one.Name, Figures.Three(one.AreaKm2), Figures.Three(one.Share * 100)])]);
+        [.. classes.Select(one => (string[])[one.Name, Figures.Three(one.AreaKm2), Figures.AreaShare(one.Share)])]);
 
     public static Table OfEdge(IEnumerable<StratumCoverage> strata) => new(
         "Coverage by distance from the boundary",

@@ -90,7 +90,7 @@ internal static class EffortTables
         "Effort by stratum",
         [
             new("Stratum", false), new(RateHeading(effort.IsPoints)), new("Share of effort, %"), new(EffortWords.Unit(effort, capital: true)),
-            .. Lines(effort, [new Column("Lines")]), new("Expected detections"), new("CV of its own density, %"), new("Effort for the target in it alone"),
+            .. Lines(effort, [new Column("Lines")]), new("Expected detections"), new("CV of its own density, %"), new($"For the target in it alone, {EffortWords.Unit(effort)}"),
         ],
         [
             .. effort.Strata.Select(stratum => (string[])

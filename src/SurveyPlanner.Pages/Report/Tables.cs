@@ -54,7 +54,7 @@ internal static class Tables
         "Strata as read and projected",
         [
             new("Stratum", false), new("Area on the ellipsoid, km²"), new("Area in the plane, km²"), new("Difference, parts per million"), new("Parts"),
-            new("Holes"), new("Vertices"), new("Long side, km"), new("Short side, km"), new("Long side, ° true"), new("Grid north, ° true"),
+            new("Holes"), new("Vertices in the file"), new("Long side, km"), new("Short side, km"), new("Long side, ° true"), new("Grid north, ° true"),
         ],
         [
             .. region.Strata.Select(stratum => (string[])
@@ -65,7 +65,7 @@ internal static class Tables
                 PartsPerMillion(stratum),
                 Figures.Count(stratum.Shape.PartCount),
                 Figures.Count(stratum.Shape.HoleCount),
-                Figures.Count(stratum.Shape.VertexCount),
+                Figures.Count(stratum.OutlineVertices),
                 Figures.Three(stratum.LongAxisKm),
                 Figures.Three(stratum.ShortAxisKm),
                 Figures.Bearing(stratum.LongAxisBearing),

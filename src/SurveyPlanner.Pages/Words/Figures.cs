@@ -11,6 +11,9 @@ internal static class Figures
     // Below this a share or a coefficient of variation is rounding error of double arithmetic, not a finding.
     private const double Nothing = 1e-9;
 
+    // Percent: a hundred-thousandth of the area, less than any cell that is looked at.
+    private const double LeastShare = 0.001;
+
     /// <summary>Three significant figures, never in powers of ten; thousands set off by a narrow space.</summary>
     public static string Three(double? value)
     {
@@ -32,6 +35,9 @@ internal static class Figures
 
     /// <summary>A share of one as a percentage with three significant figures and its sign.</summary>
     public static string Percent(double? share) => share is { } s && double.IsFinite(s) ? Three(s * 100) + "\u00a0%" : None;
+
+    /// <summary>A share of an area in percent, without the sign; of slivers of cells at a boundary, only that they are there.</summary>
+    public static string AreaShare(double share) => share * 100 is >= Nothing and < LeastShare ? "under 0.001" : Three(share * 100);
 
     /// <summary>A share of one that somebody chose, such as a target, as a percentage without digits that were not given.</summary>
     public static string ChosenPercent(double share) => (100 * share).ToString("0.####", CultureInfo.InvariantCulture) + "\u00a0%";

@@ -1,4 +1,5 @@
 using System.Globalization;
+using System.Text;
 using System.Text.RegularExpressions;
 
 namespace SurveyPlanner.Pages.Words;
@@ -25,7 +26,10 @@ internal static partial class PlainText
         };
     });
 
-    /// <summary>At most so many characters, the last one an ellipsis where text was cut; never cuts a character in two.</summary>
+    /// <summary>
+    /// At most so many characters, with an ellipsis where text was left out: two thirds of the way, since names that begin alike mostly
+    /// differ at their end. Never cuts a character in two.
+    /// </summary>
     public static string Shorten(string text, int most)
     {
         var elements = new StringInfo(text);
@@ -34,8 +38,41 @@ internal static partial class PlainText
             return text;
         }
 
-        return elements.SubstringByTextElements(0, most - 1) + "…";
+        var tail = (most - 1) / 3;
+        var head = elements.SubstringByTextElements(0, most - 1 - tail);
+        return head + "…" + (tail == 0 ? "" : elements.SubstringByTextElements(elements.LengthInTextElements - tail));
     }
+
+    /// <summary>The text in pieces between which a line may be broken: one of no space for long would stretch a table beyond the page.</summary>
+    public static IReadOnlyList<string> Pieces(string text)
+    {
+        if (text.Length <= LongestRun)
+        {
+            return [text];
+        }
+
+        var pieces = new List<string>();
+        var (piece, run) = (new StringBuilder(), 0);
+        var elements = StringInfo.GetTextElementEnumerator(text);
+        while (elements.MoveNext())
+        {
+            var element = elements.GetTextElement();
+            run = string.IsNullOrWhiteSpace(element) ? 0 : run + 1;
+            if (run > LongestRun)
+            {
+                pieces.Add(piece.ToString());
+                piece.Clear();
+                run = 1;
+            }
+
+            piece.Append(element);
+        }
+
+        return [.. pieces, piece.ToString()];
+    }
+
+    /// <summary>Longer than nearly all words of nearly all languages.</summary>
+    private const int LongestRun = 24;
 
     private static bool IsForbidden(int code) => code
         is < 0x20

@@ -23,11 +23,11 @@ internal static class Positions
         => $"{Figures.Fixed(Math.Abs(position.Lat), 1)}° {(position.Lat < 0 ? 'S' : 'N')} "
             + $"{Figures.Fixed(Math.Abs(Normal(position.Lon)), 1)}° {(Normal(position.Lon) < 0 ? 'W' : 'E')}";
 
-    /// <summary>Longitude in (-180, 180].</summary>
+    /// <summary>Longitude in (-180, 180]: 180° is called east.</summary>
     public static double Normal(double lon)
     {
-        var turned = lon % 360;
-        return turned > 180 ? turned - 360 : turned <= -180 ? turned + 360 : turned;
+        var turned = Longitude.Normalise(lon);
+        return turned == -180 ? 180 : turned;
     }
 
     private static string Minutes(double degrees, int width, char positive, char negative)

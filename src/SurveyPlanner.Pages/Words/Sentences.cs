@@ -93,7 +93,8 @@ internal static class Sentences
         var even = classes.First(one => one.Index == CoverageClasses.AsPlanned).Share;
         var never = classes.FirstOrDefault(one => one.Index == CoverageClasses.Never);
         var lowest = coverages.MinBy(coverage => coverage.Nominal > 0 ? coverage.Min / coverage.Nominal : double.MaxValue)!;
-        var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + (lowest.Cells.IsEmpty ? "" : ", near " + Positions.Rough(lowest.Cells.MinBy(cell => cell.Best)!.Position));
+        var place = lowest.Cells.IsEmpty ? "" : $", at {Positions.Decimal(lowest.Cells.MinBy(cell => cell.Best)!.Position)} (latitude, longitude)";
+        var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + place;
         return $"{Figures.Percent(even)} of the area has a coverage probability within 10 % of nominal. "
             + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}{where}. "
             + (never is null ? "No place is without coverage."

@@ -44,7 +44,7 @@ public sealed class AzimuthalEqualArea : EqualAreaProjection
     public override PlanePoint Project(LonLat position)
     {
         var (sin, cos) = Math.SinCos(_ellipsoid.Authalic(position.Lat * RadiansPerDegree));
-        var (sinLon, cosLon) = Math.SinCos(ProjectionMath.LongitudeFrom(Centre.Lon, position.Lon) * RadiansPerDegree);
+        var (sinLon, cosLon) = Math.SinCos(Longitude.From(Centre.Lon, position.Lon) * RadiansPerDegree);
         var cosDistance = (_sinCentre * sin) + (_cosCentre * cos * cosLon);
         if (1 + cosDistance < 1e-12)
         {
@@ -66,7 +66,7 @@ public sealed class AzimuthalEqualArea : EqualAreaProjection
         var rho = Math.Sqrt((x * x) + (y * y));
         if (rho == 0)
         {
-            return new LonLat(ProjectionMath.NormaliseLongitude(Centre.Lon), Centre.Lat);
+            return new LonLat(Longitude.Normalise(Centre.Lon), Centre.Lat);
         }
 
         var half = Math.Asin(Math.Min(1, rho / (2 * _ellipsoid.AuthalicRadiusMetres)));
@@ -79,6 +79,6 @@ public sealed class AzimuthalEqualArea : EqualAreaProjection
         var cosAuthalic = Math.Sqrt((east * east) + (north * north)) / rho;
         var latitude = _ellipsoid.FromAuthalic(Math.Atan2(sinAuthalic, cosAuthalic));
         var longitude = Centre.Lon + (Math.Atan2(east, north) / RadiansPerDegree);
-        return new LonLat(ProjectionMath.NormaliseLongitude(longitude), latitude / RadiansPerDegree);
+        return new LonLat(Longitude.Normalise(longitude), latitude / RadiansPerDegree);
     }
 }

@@ -53,7 +53,7 @@ public sealed class ConicEqualArea : EqualAreaProjection
     public override PlanePoint Project(LonLat position)
     {
         var rho = Rho(position.Lat);
-        var theta = _n * ProjectionMath.LongitudeFrom(Centre.Lon, position.Lon) * RadiansPerDegree;
+        var theta = _n * Longitude.From(Centre.Lon, position.Lon) * RadiansPerDegree;
         var (sin, cos) = Math.SinCos(theta);
         return new PlanePoint(rho * sin, _rho0 - (rho * cos));
     }
@@ -70,7 +70,7 @@ public sealed class ConicEqualArea : EqualAreaProjection
         // (1 - s)(1 + s) under the root keeps the digits that 1 - s² would lose near a pole.
         var authalic = Math.Atan2(sinAuthalic, Math.Sqrt((1 - sinAuthalic) * (1 + sinAuthalic)));
         var longitude = Centre.Lon + (theta / _n / RadiansPerDegree);
-        return new LonLat(ProjectionMath.NormaliseLongitude(longitude), _ellipsoid.FromAuthalic(authalic) / RadiansPerDegree);
+        return new LonLat(Longitude.Normalise(longitude), _ellipsoid.FromAuthalic(authalic) / RadiansPerDegree);
     }
 
     private double Q(double latitude) => _ellipsoid.QPole * Math.Sin(_ellipsoid.Authalic(latitude * RadiansPerDegree));

@@ -91,5 +91,5 @@ internal sealed class EdgeDensifier(EqualAreaProjection projection, double toler
         => new(a.Lon + (share * (b.Lon - a.Lon)), a.Lat + (share * (b.Lat - a.Lat)));
 
     private static bool IsFirst(LonLat a, LonLat b)
-        => a.Lat != b.Lat ? a.Lat < b.Lat : ProjectionMath.NormaliseLongitude(a.Lon) <= ProjectionMath.NormaliseLongitude(b.Lon);
+        => a.Lat != b.Lat ? a.Lat < b.Lat : Longitude.Normalise(a.Lon) <= Longitude.Normalise(b.Lon);
 }

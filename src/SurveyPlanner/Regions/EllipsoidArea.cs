@@ -27,7 +27,7 @@ internal static class EllipsoidArea
         for (var i = 0; i < ring.Count; i++)
         {
             var (from, to) = (ring[i], ring[(i + 1) % ring.Count]);
-            var east = ProjectionMath.NormaliseLongitude(to.Lon - from.Lon) * RadiansPerDegree;
+            var east = Longitude.Difference(from.Lon, to.Lon) * RadiansPerDegree;
             if (east == 0)
             {
                 continue;

@@ -16,7 +16,7 @@ public static class Geodesic
         var shape = ellipsoid ?? Ellipsoid.Wgs84;
         var (a, b) = (shape.SemiMajorMetres, shape.SemiMinorMetres);
         var f = (a - b) / a;
-        var difference = ProjectionMath.NormaliseLongitude(to.Lon - from.Lon) * RadiansPerDegree;
+        var difference = Longitude.Difference(from.Lon, to.Lon) * RadiansPerDegree;
         var (sinU1, cosU1) = Reduced(from.Lat, f);
         var (sinU2, cosU2) = Reduced(to.Lat, f);
         var lambda = difference;

@@ -12,13 +12,13 @@ public readonly record struct GeographicExtent(double West, double South, double
             for (var i = 0; i < shape.VertexCount; i++)
             {
                 var position = projection.Unproject(new PlanePoint(shape.X[i], shape.Y[i]));
-                var fromCentre = ProjectionMath.LongitudeFrom(projection.Centre.Lon, position.Lon);
+                var fromCentre = Longitude.From(projection.Centre.Lon, position.Lon);
                 (west, east) = (Math.Min(west, fromCentre), Math.Max(east, fromCentre));
                 (south, north) = (Math.Min(south, position.Lat), Math.Max(north, position.Lat));
             }
         }
 
         return new GeographicExtent(
-            ProjectionMath.NormaliseLongitude(projection.Centre.Lon + west), south, ProjectionMath.NormaliseLongitude(projection.Centre.Lon + east), north);
+            Longitude.Normalise(projection.Centre.Lon + west), south, Longitude.Normalise(projection.Centre.Lon + east), north);
     }
 }

@@ -81,7 +81,7 @@ internal static class PlanningProjection
     private static ConicEqualArea? Conic(LonLat centre, IReadOnlyList<LonLat> sample)
     {
         var (south, north) = (sample.Min(p => p.Lat), sample.Max(p => p.Lat));
-        var reach = sample.Max(p => Math.Abs(ProjectionMath.LongitudeFrom(centre.Lon, p.Lon)));
+        var reach = sample.Max(p => Math.Abs(Longitude.From(centre.Lon, p.Lon)));
 
         // One sixth of the height in from either edge: the usual rule for standard parallels (Snyder 1987, p. 99).
         var (lat1, lat2) = (Round(south + ((north - south) / 6)), Round(north - ((north - south) / 6)));
@@ -109,7 +109,7 @@ internal static class PlanningProjection
     /// <summary>The longitude opposite the widest empty stretch of the circle: right on both sides of 180°.</summary>
     private static double MiddleLongitude(IReadOnlyList<LonLat> sample)
     {
-        var sorted = sample.Select(p => ProjectionMath.NormaliseLongitude(p.Lon)).Order().ToList();
+        var sorted = sample.Select(p => Longitude.Normalise(p.Lon)).Order().ToList();
         var (widest, middle) = (sorted[0] + 360 - sorted[^1], (sorted[0] + sorted[^1]) / 2);
         for (var i = 1; i < sorted.Count; i++)
         {
@@ -120,7 +120,7 @@ internal static class PlanningProjection
             }
         }
 
-        return ProjectionMath.NormaliseLongitude(middle);
+        return Longitude.Normalise(middle);
     }
 
     private static IReadOnlyList<LonLat> Sample(IReadOnlyList<LonLat> positions)

@@ -2,25 +2,6 @@ using System.Globalization;
 
 namespace SurveyPlanner.Regions;
 
-/// <summary>Angles shared by the projections.</summary>
-internal static class ProjectionMath
-{
-    /// <summary>The same longitude in [-180, 180).</summary>
-    public static double NormaliseLongitude(double degrees)
-    {
-        if (degrees is >= -180 and < 180)
-        {
-            return degrees;
-        }
-
-        var turned = degrees - (360 * Math.Floor((degrees + 180) / 360));
-        return turned >= 180 ? turned - 360 : turned;
-    }
-
-    /// <summary>Degrees east of a meridian, in [-180, 180). 180 and -180 give the same digits, so that a region cut there closes again.</summary>
-    public static double LongitudeFrom(double meridian, double longitude) => NormaliseLongitude(NormaliseLongitude(longitude) - meridian);
-}
-
 /// <summary>Projections as WKT 2 (ISO 19162:2019) with the codes of the EPSG registry for methods and parameters.</summary>
 internal static class ProjectionWkt
 {

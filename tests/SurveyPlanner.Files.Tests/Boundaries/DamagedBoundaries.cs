@@ -6,10 +6,8 @@ using SurveyPlanner.Regions;
 namespace SurveyPlanner.Files.Tests.Boundaries;
 
 /// <summary>Files cut short or with bytes changed: refused, or read whole; never a crash, and never fewer parts in silence.</summary>
-public sealed class DamagedBoundaries : IDisposable
+public sealed class DamagedBoundaries
 {
-    private readonly string _folder = Directory.CreateTempSubdirectory("boundaries-").FullName;
-
     public static TheoryData<string> Samples =>
     [
         "dirty/crs_legacy_urn_3338.geojson", "dirty/geom_null_and_good.geojson", "dirty/geom_overlapping_strata.geojson", "dirty/file_utf16le_bom.geojson",
@@ -17,8 +15,6 @@ public sealed class DamagedBoundaries : IDisposable
         "dirty/shp_no_shx.zip", "dirty/shp_utf8_with_cpg_long_fields.zip", "dirty/file_zip_path_traversal.zip", "dirty/gpkg_epsg3035_archipelago.gpkg",
         "strata_maine_counties.geojson", "marine_archipelago_sea.geojson", "antimeridian_fiji.geojson", "inland_county_polygon.geojson",
     ];
-
-    public void Dispose() => Directory.Delete(_folder, recursive: true);
 
     [Theory]
     [MemberData(nameof(Samples))]
@@ -149,19 +145,11 @@ public sealed class DamagedBoundaries : IDisposable
         => Gen.Select(Gen.Int[0, length - 1], Gen.Byte, Gen.Int[0, 9], (at, value, kind) => new Change(at, value, kind > 4 ? 0 : kind)).Array[1, 4].Select(all => new Changes([.. all]));
 
     /// <summary>The boundary, or null when it is refused in a sentence. Any other exception is a failure of the test.</summary>
-    private Boundary? Read(byte[] bytes, string name)
+    private static Boundary? Read(byte[] bytes, string name)
     {
-        var path = ReferenceFiles.Region(name);
-        if (bytes.AsSpan().StartsWith("SQLite"u8))
-        {
-            // This one format is read by a library that wants a file.
-            path = Path.Combine(_folder, "damaged.gpkg");
-            File.WriteAllBytes(path, bytes);
-        }
-
         try
         {
-            return BoundaryReader.Read(bytes, path, Path.GetFileName(name), BoundaryOptions.Default);
+            return BoundaryReader.Read(bytes, ReferenceFiles.Region(name), Path.GetFileName(name), BoundaryOptions.Default, new InputFiles());
         }
         catch (InputException)
         {

@@ -11,7 +11,7 @@ internal static class InMemory
 {
     public static Boundary Read(string text, string name = "made-up.geojson", BoundaryOptions? options = null) => Read(Encoding.UTF8.GetBytes(text), name, options);
 
-    public static Boundary Read(byte[] bytes, string name, BoundaryOptions? options = null) => BoundaryReader.Read(bytes, name, name, options ?? BoundaryOptions.Default);
+    public static Boundary Read(byte[] bytes, string name, BoundaryOptions? options = null) => BoundaryReader.Read(bytes, name, name, options ?? BoundaryOptions.Default, new InputFiles());
 
     /// <summary>The sentence that a file is refused with.</summary>
     public static string Refusal(string text, string name = "made-up.geojson", BoundaryOptions? options = null) => Refusal(Encoding.UTF8.GetBytes(text), name, options);

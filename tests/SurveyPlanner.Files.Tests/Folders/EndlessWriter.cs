@@ -16,6 +16,12 @@ internal static class EndlessWriter
     public static OutputFile[] Files(string content) =>
         [.. Names.Select(name => new OutputFile(name, Encoding.UTF8.GetBytes(content)))];
 
+    public static void Write(string target, OutputFile[] files)
+    {
+        using var folder = OutputFolder.Reserve(target, force: true);
+        folder.Write(files);
+    }
+
     /// <summary>Starts the child and returns once it has written the folder for the first time.</summary>
     public static Process Start(string target)
     {
@@ -38,7 +44,7 @@ internal static class EndlessWriter
 
         for (var round = 0; ; round++)
         {
-            OutputFolder.Write(target, Files(new string((char)('a' + (round % 26)), 20_000)), force: true);
+            Write(target, Files(new string((char)('a' + (round % 26)), 20_000)));
             if (round == 0)
             {
                 Console.WriteLine("written");

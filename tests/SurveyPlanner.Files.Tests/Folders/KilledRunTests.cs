@@ -1,5 +1,3 @@
-using SurveyPlanner.Files.Folders;
-
 namespace SurveyPlanner.Files.Tests.Folders;
 
 public sealed class KilledRunTests
@@ -24,7 +22,7 @@ public sealed class KilledRunTests
             Assert.Equal(EndlessWriter.Names.Order(), Directory.GetFiles(whole).Select(Path.GetFileName).Order());
             Assert.Equal(20_000, Assert.Single(Directory.GetFiles(whole).Select(File.ReadAllText).Distinct()).Length);
 
-            OutputFolder.Write(target, EndlessWriter.Files("next"), force: true, TestContext.Current.CancellationToken);
+            EndlessWriter.Write(target, EndlessWriter.Files("next"));
             Assert.Equal(["out", .. EndlessWriter.Names.Select(name => "out/" + name).Order()], folder.Entries);
         }
     }

@@ -32,6 +32,8 @@ public sealed class OneFileTests : IDisposable
             Assert.DoesNotContain("\n", trouble.Message, StringComparison.Ordinal);
         }
 
+        Assert.Contains("is a folder", Assert.Throws<IOException>(() => OneFile.Write(_folder.At("folder"), "x")).Message, StringComparison.Ordinal);
+        Assert.Contains("has no name", Assert.Throws<IOException>(() => OneFile.Write("", "x")).Message, StringComparison.Ordinal);
         Assert.Equal(before, _folder.Entries);
     }
 }

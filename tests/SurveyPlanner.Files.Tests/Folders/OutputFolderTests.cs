@@ -14,7 +14,7 @@ public sealed class OutputFolderTests : IDisposable
     [Fact]
     public void A_folder_is_written_with_exactly_its_files()
     {
-        OutputFolder.Write(Target, Files("one"), force: false, TestContext.Current.CancellationToken);
+        Write(Target, Files("one"), force: false);
 
         Assert.Equal(["out", "out/summary.json", "out/transects.gpx", "out/waypoints.csv"], _folder.Entries);
         Assert.Equal("one", Content());
@@ -23,7 +23,7 @@ public sealed class OutputFolderTests : IDisposable
     [Fact]
     public void A_path_with_a_slash_at_its_end_is_the_same_folder()
     {
-        OutputFolder.Write(Target + "/", Files("one"), force: false, TestContext.Current.CancellationToken);
+        Write(Target + "/", Files("one"), force: false);
 
         Assert.Equal("one", Content());
     }
@@ -31,14 +31,14 @@ public sealed class OutputFolderTests : IDisposable
     [Fact]
     public void An_existing_folder_is_refused_without_force_and_replaced_with_it()
     {
-        OutputFolder.Write(Target, Files("one"), force: false, TestContext.Current.CancellationToken);
+        Write(Target, Files("one"), force: false);
 
-        Refused("exists already", () => OutputFolder.Write(Target, Files("two"), force: false));
-        Refused("exists already", () => OutputFolder.Check(Target, force: false));
+        Refused("exists already", () => Write(Target, Files("two"), force: false));
+        Refused("exists already", () => Check(Target, force: false));
         Assert.Equal("one", Content());
 
-        OutputFolder.Check(Target, force: true);
-        OutputFolder.Write(Target, [new OutputFile("summary.json", "two"u8.ToArray())], force: true, TestContext.Current.CancellationToken);
+        Check(Target, force: true);
+        Write(Target, [new OutputFile("summary.json", "two"u8.ToArray())], force: true);
         Assert.Equal(["out", "out/summary.json"], _folder.Entries);
         Assert.Equal("two", Content());
     }
@@ -49,11 +49,11 @@ public sealed class OutputFolderTests : IDisposable
     [InlineData("Summary.json")]
     public void A_folder_with_a_foreign_file_is_never_replaced(string foreign)
     {
-        OutputFolder.Write(Target, Files("one"), force: false, TestContext.Current.CancellationToken);
+        Write(Target, Files("one"), force: false);
         File.WriteAllText(Path.Combine(Target, foreign), "mine");
 
-        Refused(foreign, () => OutputFolder.Write(Target, Files("two"), force: true));
-        Refused("did not write", () => OutputFolder.Check(Target, force: true));
+        Refused(foreign, () => Write(Target, Files("two"), force: true));
+        Refused("did not write", () => Check(Target, force: true));
         Assert.Equal("one", Content());
         Assert.Equal("mine", File.ReadAllText(Path.Combine(Target, foreign)));
     }
@@ -62,12 +62,12 @@ public sealed class OutputFolderTests : IDisposable
     public void A_folder_with_a_folder_or_a_link_in_it_is_never_replaced()
     {
         Directory.CreateDirectory(Path.Combine(Target, "summary.json"));
-        Refused("summary.json", () => OutputFolder.Write(Target, Files("two"), force: true));
+        Refused("summary.json", () => Write(Target, Files("two"), force: true));
 
         Directory.Delete(Path.Combine(Target, "summary.json"));
         File.WriteAllText(_folder.At("elsewhere"), "mine");
         File.CreateSymbolicLink(Path.Combine(Target, "summary.json"), _folder.At("elsewhere"));
-        Refused("summary.json", () => OutputFolder.Write(Target, Files("two"), force: true));
+        Refused("summary.json", () => Write(Target, Files("two"), force: true));
         Assert.Equal("mine", File.ReadAllText(_folder.At("elsewhere")));
     }
 
@@ -80,14 +80,14 @@ public sealed class OutputFolderTests : IDisposable
         Directory.CreateSymbolicLink(_folder.At("dangling"), _folder.At("nowhere"));
         var before = _folder.Entries;
 
-        Refused("is a file", () => OutputFolder.Write(_folder.At("file"), Files("x"), force: true));
-        Refused("is a link", () => OutputFolder.Write(_folder.At("link"), Files("x"), force: true));
-        Refused("is a link", () => OutputFolder.Write(_folder.At("link") + "/", Files("x"), force: true));
-        Refused("is a link", () => OutputFolder.Write(_folder.At("dangling"), Files("x"), force: false));
-        Refused("does not exist: make it first", () => OutputFolder.Write(_folder.At("no", "out"), Files("x"), force: false));
-        Refused("root of a disk", () => OutputFolder.Write("/", Files("x"), force: true));
-        Refused("no name", () => OutputFolder.Write("", Files("x"), force: true));
-        Refused("no name", () => OutputFolder.Write("a\0b", Files("x"), force: true));
+        Refused("is a file", () => Write(_folder.At("file"), Files("x"), force: true));
+        Refused("is a link", () => Write(_folder.At("link"), Files("x"), force: true));
+        Refused("is a link", () => Write(_folder.At("link") + "/", Files("x"), force: true));
+        Refused("is a link", () => Write(_folder.At("dangling"), Files("x"), force: false));
+        Refused("is a file, not a folder", () => Write(_folder.At("file", "no", "out"), Files("x"), force: false));
+        Refused("root of a disk", () => Write("/", Files("x"), force: true));
+        Refused("no name", () => Write("", Files("x"), force: true));
+        Refused("no name", () => Write("a\0b", Files("x"), force: true));
         Assert.Equal(before, _folder.Entries);
         Assert.Equal("mine", File.ReadAllText(_folder.At("file")));
     }
@@ -101,7 +101,7 @@ public sealed class OutputFolderTests : IDisposable
     [InlineData("SUMMARY.JSON")]
     public void A_file_name_that_leads_elsewhere_or_comes_twice_is_our_fault(string name)
     {
-        Assert.Throws<ArgumentException>(() => OutputFolder.Write(Target, [.. Files("x"), new OutputFile(name, default)], force: false));
+        Assert.Throws<ArgumentException>(() => Write(Target, [.. Files("x"), new OutputFile(name, default)], force: false));
         Assert.Empty(_folder.Entries);
     }
 
@@ -119,14 +119,14 @@ public sealed class OutputFolderTests : IDisposable
             var target = folder.At("out");
             if (replaces)
             {
-                OutputFolder.Write(target, Files("old"), force: false, TestContext.Current.CancellationToken);
+                Write(target, Files("old"), force: false);
             }
 
             var disk = new FailingDisk(failAt, forGood);
-            var failed = Record.Exception(() => OutputFolder.Write(target, Files("new"), replaces, disk, TestContext.Current.CancellationToken));
+            var failed = Record.Exception(() => Write(target, Files("new"), replaces, disk: disk));
 
             AssertWholeAfter(failed, target, folder, replaces, forGood);
-            OutputFolder.Write(target, Files("next"), force: replaces || failed is null, TestContext.Current.CancellationToken);
+            Write(target, Files("next"), force: replaces || failed is null);
             Assert.Equal(["out", "out/summary.json", "out/transects.gpx", "out/waypoints.csv"], folder.Entries);
             Assert.Equal("next", File.ReadAllText(Path.Combine(target, "summary.json")));
             if (disk.Steps < failAt)
@@ -169,7 +169,7 @@ public sealed class OutputFolderTests : IDisposable
         File.WriteAllText(Path.Combine(old, "summary.json"), "old");
         File.WriteAllText(_folder.At(".out.work-999-0123abcd", "lock"), "");
 
-        Refused("exists already", () => OutputFolder.Check(Target, force: false));
+        Refused("exists already", () => Check(Target, force: false));
         Assert.Equal(["out", "out/summary.json"], _folder.Entries);
     }
 
@@ -179,7 +179,7 @@ public sealed class OutputFolderTests : IDisposable
         string[] lookalikes = [".out.work-", ".out.work-1-XYZ", ".out.work-1-0123abcdef", ".other.work-1-0123abcd", "out.work-1-0123abcd"];
         Array.ForEach(lookalikes, name => Directory.CreateDirectory(_folder.At(name)));
 
-        OutputFolder.Write(Target, Files("one"), force: false, TestContext.Current.CancellationToken);
+        Write(Target, Files("one"), force: false);
 
         Assert.All(lookalikes, name => Assert.True(Directory.Exists(_folder.At(name)), name));
     }
@@ -189,10 +189,73 @@ public sealed class OutputFolderTests : IDisposable
     {
         using (WorkFolder.Begin(new Disk(), Target))
         {
-            Refused($"process {Environment.ProcessId}", () => OutputFolder.Write(Target, Files("x"), force: false));
+            Refused($"process {Environment.ProcessId}", () => Write(Target, Files("x"), force: false));
         }
 
         Assert.Empty(_folder.Entries);
+    }
+
+    [Fact]
+    public void A_second_run_is_told_before_its_work_and_the_first_goes_on()
+    {
+        using (var first = OutputFolder.Reserve(Target, force: false, TestContext.Current.CancellationToken))
+        {
+            Refused($"another run (process {Environment.ProcessId}) is at work on it now", () => Check(Target, force: false));
+            Refused("at work on it now", () => Check(Target, force: true));
+            first.Write(Files("one"));
+        }
+
+        Refused("exists already", () => Check(Target, force: false));
+        Check(Target, force: true);
+        Assert.Equal(["out", "out/summary.json", "out/transects.gpx", "out/waypoints.csv"], _folder.Entries);
+    }
+
+    [Fact]
+    public void Folders_above_are_made_and_taken_away_again_unless_something_is_written()
+    {
+        Directory.CreateDirectory(_folder.At("a"));
+        var target = _folder.At("a", "b", "c", "out");
+        Check(target, force: false);
+        Assert.Equal(["a"], _folder.Entries);
+
+        Write(target, Files("one"), force: false);
+        Assert.Equal(3, Directory.GetFiles(target).Length);
+    }
+
+    [Fact]
+    public void A_folder_that_came_to_be_in_the_meantime_is_not_written_over()
+    {
+        using (var folder = OutputFolder.Reserve(Target, force: false, TestContext.Current.CancellationToken))
+        {
+            Directory.CreateDirectory(Target);
+            Refused("exists already", () => folder.Write(Files("x")));
+        }
+
+        Assert.Equal(["out"], _folder.Entries);
+    }
+
+    [Fact]
+    public void Stopping_lets_go_at_once_whatever_the_run_is_at()
+    {
+        using var stop = new CancellationTokenSource();
+        using var folder = OutputFolder.Reserve(_folder.At("new", "out"), force: false, stop.Token);
+        Assert.NotEmpty(_folder.Entries);
+        stop.Cancel();
+
+        Assert.Empty(_folder.Entries);
+        Assert.Throws<OperationCanceledException>(() => folder.Write(Files("x")));
+        Assert.Empty(_folder.Entries);
+    }
+
+    /// <summary>The kernel's own tree takes no folder, not even from root (proc(5)).</summary>
+    [Fact]
+    public void A_place_that_takes_no_folder_is_one_sentence()
+    {
+        Assert.SkipUnless(OperatingSystem.IsLinux(), "needs /proc");
+        Refused("Cannot write /proc/x: the system lets nothing be made there", () => Check("/proc/x", force: false));
+        Refused("Cannot write /proc/x/y: the system lets nothing be made there", () => Check("/proc/x/y", force: false));
+        Refused("Cannot write /proc/x.svg: the system lets nothing be made there", () => OneFile.Write("/proc/x.svg", "x"));
+        Refused("the name is too long", () => Check(_folder.At(new string('x', 300)), force: false));
     }
 
     [Fact]
@@ -201,7 +264,7 @@ public sealed class OutputFolderTests : IDisposable
         using var cancellation = new CancellationTokenSource();
         cancellation.Cancel();
 
-        Assert.Throws<OperationCanceledException>(() => OutputFolder.Write(Target, Files("x"), force: false, cancellation.Token));
+        Assert.Throws<OperationCanceledException>(() => Write(Target, Files("x"), force: false, cancellation.Token));
         Assert.Empty(_folder.Entries);
     }
 
@@ -212,7 +275,7 @@ public sealed class OutputFolderTests : IDisposable
         {
             var target = _folder.At("out" + round);
             var runs = Enumerable.Range(0, 8).Select(run => Task.Run(() => Record.Exception(
-                () => OutputFolder.Write(target, Files($"run {run}"), force: false)))).ToArray();
+                () => Write(target, Files($"run {run}"), force: false)))).ToArray();
             var outcomes = await Task.WhenAll(runs);
 
             Assert.True(outcomes.Count(outcome => outcome is null) <= 1);
@@ -230,11 +293,11 @@ public sealed class OutputFolderTests : IDisposable
     [Fact]
     public async Task Of_many_runs_with_force_the_folder_is_always_one_of_theirs()
     {
-        OutputFolder.Write(Target, Files("first"), force: false, TestContext.Current.CancellationToken);
+        Write(Target, Files("first"), force: false);
         for (var round = 0; round < 10; round++)
         {
             var runs = Enumerable.Range(0, 8).Select(run => Task.Run(() => Record.Exception(
-                () => OutputFolder.Write(Target, Files($"run {run}"), force: true)))).ToArray();
+                () => Write(Target, Files($"run {run}"), force: true)))).ToArray();
             var outcomes = await Task.WhenAll(runs);
 
             Assert.All(outcomes.OfType<Exception>(), outcome => Assert.IsType<IOException>(outcome));
@@ -257,6 +320,14 @@ public sealed class OutputFolderTests : IDisposable
 
         Assert.StartsWith("Cannot write out: ", sentence, StringComparison.Ordinal);
         Assert.Contains(expected, sentence, StringComparison.Ordinal);
+    }
+
+    private static void Check(string path, bool force) => OutputFolder.Reserve(path, force, TestContext.Current.CancellationToken).Dispose();
+
+    private static void Write(string path, IReadOnlyCollection<OutputFile> files, bool force, CancellationToken? stop = null, IDisk? disk = null)
+    {
+        using var folder = OutputFolder.Reserve(path, force, disk ?? new Disk(), stop ?? TestContext.Current.CancellationToken);
+        folder.Write(files);
     }
 
     private static OutputFile[] Files(string content) => EndlessWriter.Files(content);

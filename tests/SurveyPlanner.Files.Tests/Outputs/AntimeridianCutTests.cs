@@ -58,7 +58,7 @@ public sealed class AntimeridianCutTests
         {
             var path = steps.Aggregate(
                 ImmutableArray.Create(new LonLat(179.5, 0)),
-                (walked, next) => walked.Add(new LonLat(Longitudes.Normalise(walked[^1].Lon + next.Item1), walked[^1].Lat + next.Item2)));
+                (walked, next) => walked.Add(new LonLat(Longitude.Normalise(walked[^1].Lon + next.Item1), walked[^1].Lat + next.Item2)));
             var parts = AntimeridianCut.Cut(path);
 
             // Each crossing may drop a part that vanishes in rounding, at most 1e-7 degrees long.

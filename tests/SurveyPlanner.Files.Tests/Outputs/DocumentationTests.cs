@@ -1,5 +1,6 @@
 using System.Text;
 using System.Text.Json;
+using SurveyPlanner.Coverage;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Files.Tests.Outputs;
@@ -18,8 +19,11 @@ public sealed class DocumentationTests
         using var transects = JsonDocument.Parse(TransectsGeoJson.Write(plan).Content);
         var properties = transects.RootElement.GetProperty("features").EnumerateArray().SelectMany(feature => Keys(feature.GetProperty("properties")));
 
+        PositionCoverage[] asked = [new(new(1, 2), "a", null, 0.25, 0.25, 0.01), new(new(1, 2), "a", 0.25, 0.25, 0.25, 0.01)];
+        using var positions = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteCoverageAt(json, asked)));
+
         Assert.All(
-            new[] { summary, full, points }.SelectMany(document => Keys(document.RootElement)).Concat(properties).Distinct(), AssertDocumented);
+            new[] { summary, full, points, positions }.SelectMany(document => Keys(document.RootElement)).Concat(properties).Distinct(), AssertDocumented);
     }
 
     [Fact]

@@ -64,6 +64,6 @@ public sealed class LonLatPathTests
         from step in Enumerable.Range(0, 21)
         let share = step / 20.0
         select new LonLat(
-            edge.First.Lon + (share * Longitudes.Difference(edge.First.Lon, edge.Second.Lon)),
+            edge.First.Lon + (share * Longitude.Difference(edge.First.Lon, edge.Second.Lon)),
             edge.First.Lat + (share * (edge.Second.Lat - edge.First.Lat)));
 }

@@ -1,4 +1,5 @@
 using System.Text.Json;
+using SurveyPlanner.Effort;
 using SurveyPlanner.Files.Outputs;
 using SurveyPlanner.Pilots;
 
@@ -112,6 +113,8 @@ public sealed class SummaryWriterTests
         AssertFigure(asked.AssuredEffort.Value, required.GetProperty("length_km_planned"));
         AssertFigure(0.935, effort.GetProperty("uncertainty").GetProperty("measured").GetProperty("share_of_intervals_that_held"));
 
+        var planned = Assert.Single(plan.Effort.Allocations, option => option.Allocation == plan.Design.Effort.Allocation);
+        Assert.Equal(planned.Allocation.ToString().ToLowerInvariant(), effort.GetProperty("planned_allocation").GetString());
         Assert.Equal(["proportional", "equal", "optimal"], effort.GetProperty("allocations").EnumerateArray().Select(option => option.GetProperty("allocation").GetString()));
         var (optimal, written) = (plan.Effort.Allocations[2], effort.GetProperty("allocations")[2]);
         AssertFigure(optimal.Cost!.Value, written.GetProperty("cost"));
@@ -124,6 +127,21 @@ public sealed class SummaryWriterTests
         AssertFigure(fits.Fits[0].EffectiveMetres!.Value, detection.GetProperty("fits")[0].GetProperty("effective_half_width_m"));
         Assert.Equal(fits.Histogram.Sum(bar => bar.Count), detection.GetProperty("histogram").EnumerateArray().Sum(bar => bar.GetProperty("detections").GetInt32()));
         Assert.True(document.RootElement.GetProperty("strata")[1].GetProperty("effort").GetProperty("pilot").TryGetProperty("detection", out _));
+    }
+
+    [Fact]
+    public void Which_allocation_was_planned_is_said_where_there_is_something_to_share()
+    {
+        var plan = TestPlans.WithDetections();
+        foreach (var allocation in Enum.GetValues<Allocation>())
+        {
+            var planned = plan with { Design = plan.Design with { Effort = plan.Design.Effort with { Allocation = allocation } } };
+            using var document = JsonDocument.Parse(SummaryWriter.Write(planned, draw: 1).Content);
+            Assert.Equal(allocation.ToString(), document.RootElement.GetProperty("effort").GetProperty("planned_allocation").GetString(), ignoreCase: true);
+        }
+
+        using var one = JsonDocument.Parse(SummaryWriter.Write(plan with { Effort = plan.Effort! with { Strata = plan.Effort.Strata[..1] } }, draw: 1).Content);
+        Assert.False(one.RootElement.GetProperty("effort").TryGetProperty("planned_allocation", out _));
     }
 
     [Fact]
@@ -161,10 +179,11 @@ public sealed class SummaryWriterTests
     [Fact]
     public void Effort_alone_has_the_same_form()
     {
-        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, TestPlans.WithEffort().Effort!)));
+        using var document = JsonDocument.Parse(JsonDocumentText.Of(json => SummaryWriter.WriteEffortDocument(json, TestPlans.WithDetections().Effort!, Allocation.Optimal)));
 
         Assert.Equal(["format_version", "strata", "effort"], Keys(document.RootElement));
         Assert.Equal(["name", "effort"], Keys(document.RootElement.GetProperty("strata")[0]));
+        Assert.Equal("optimal", document.RootElement.GetProperty("effort").GetProperty("planned_allocation").GetString());
     }
 
     [Fact]

@@ -9,7 +9,7 @@ namespace SurveyPlanner.Files.Tests.Plans;
 
 public partial class StarterPlanTests
 {
-    private static readonly StarterFacts Sound = new("sound", 1234.5, 56, 30, [new StratumFieldCandidate("zone", ["inner bay", "outer sound"])]);
+    private static readonly StarterFacts Sound = new("sound", 1234.5, 56, 30, 56, [new StratumFieldCandidate("zone", ["inner bay", "outer sound"])]);
 
     [Fact]
     public void It_reads_without_a_problem_and_fits_the_region()
@@ -39,7 +39,7 @@ public partial class StarterPlanTests
             exponent =>
             {
                 var longAxisKm = Math.Pow(10, exponent);
-                var design = PlanFileReader.Parse(StarterPlan.For("a.geojson", new StarterFacts("a", 1, longAxisKm, longAxisKm, [])), "a.toml", []).Design.Layout;
+                var design = PlanFileReader.Parse(StarterPlan.For("a.geojson", new StarterFacts("a", 1, longAxisKm, longAxisKm, longAxisKm, [])), "a.toml", []).Design.Layout;
                 var spacing = Assert.IsType<Sizing.Spacing>(design.Sizing).Metres;
 
                 // The widest step between round lengths is a third: half of it, on a ratio scale, is 15.5 percent.
@@ -54,7 +54,7 @@ public partial class StarterPlanTests
             names =>
             {
                 var (survey, field, values) = names;
-                var facts = new StarterFacts(survey, 1, 10, 5, [new StratumFieldCandidate(field, [.. values]), new StratumFieldCandidate(field + "x", [.. values])]);
+                var facts = new StarterFacts(survey, 1, 10, 5, 10, [new StratumFieldCandidate(field, [.. values]), new StratumFieldCandidate(field + "x", [.. values])]);
                 var design = PlanFileReader.Parse(StarterPlan.For("a.geojson", facts), "a.toml", []).Design;
                 Assert.Equal(string.IsNullOrWhiteSpace(survey) ? "survey" : WholeCharacters(survey), design.Name);
             });
@@ -64,11 +64,57 @@ public partial class StarterPlanTests
         => Assert.Contains("rename the file", Assert.Throws<InputException>(() => StarterPlan.For("a\nb.geojson", Sound)).Message);
 
     [Fact]
+    public void Names_come_before_numbers_as_strata()
+    {
+        var square = Islands("[[[10,0],[10.1,0],[10.1,0.1],[10,0.1],[10,0]]]", "[[[10.9,0],[11,0],[11,0.1],[10.9,0.1],[10.9,0]]]").Features[0];
+        BoundaryFeature Feature(int number, string area, string zone)
+            => square with { Number = number, Attributes = square.Attributes.SetItem("area", area).SetItem("zone", zone) };
+        var boundary = new Boundary("a", [Feature(1, "1", "bay"), Feature(2, "2.5", "bank"), Feature(3, "1", "shelf")], "degrees", []);
+
+        Assert.Equal(["zone", "area"], StarterFacts.Of("a", boundary).StratumFields.Select(candidate => candidate.Field));
+    }
+
+    /// <summary>
+    /// Two squares of a tenth of a degree on the equator, nine tenths apart: 1° of longitude is 111.3195 km there (WGS 84, a × π/180), so
+    /// lines running north can fall on 22.2639 km of 111.3195.
+    /// </summary>
+    [Fact]
+    public void Of_scattered_parts_only_their_own_widths_count()
+    {
+        var boundary = Islands("[[[10,0],[10.1,0],[10.1,0.1],[10,0.1],[10,0]]]", "[[[10.9,0],[11,0],[11,0.1],[10.9,0.1],[10.9,0]]]");
+        var facts = StarterFacts.Of("islands", boundary);
+
+        Assert.Equal(111.3195, facts.LongAxisKm, 0.02);
+        Assert.Equal(22.2639, facts.LinesAcrossKm, 0.02);
+        var line = StarterPlan.For("a.geojson", facts).Split('\n').Single(line => line.StartsWith("spacing = ", StringComparison.Ordinal));
+        Assert.StartsWith("spacing = \"1.2 km\" ", line, StringComparison.Ordinal);
+        Assert.Contains(" # about 19 lines in the region as a whole", line, StringComparison.Ordinal);
+    }
+
+    /// <summary>The sentence of the plan against what is drawn: a systematic layout is never more than a line for each part from its mean.</summary>
+    [Theory]
+    [InlineData("polar_svalbard.geojson")]
+    [InlineData("antimeridian_fiji.geojson")]
+    [InlineData("lake_caspian_with_islands.geojson")]
+    public void The_number_of_lines_it_speaks_of_is_the_number_drawn(string name)
+    {
+        var boundary = BoundaryReader.Read(ReferenceData.Path("regions", name));
+        var text = StarterPlan.For("a.geojson", StarterFacts.Of("a", boundary));
+        var said = int.Parse(LinesSaid().Match(text).Groups[1].Value, System.Globalization.CultureInfo.InvariantCulture);
+        var design = PlanFileReader.Parse(text, "a.toml", ["survey.seed=3"]).Design;
+        var drawn = PlanSurvey.DrawOnly(design, new SurveyInputs(boundary, [], null)).Strata[0].Layout;
+
+        Assert.InRange(said, 17, 23);
+        Assert.InRange(drawn.Transects.Length, said - 3, said + 3);
+        Assert.Equal(said, drawn.ExpectedCount, 0.51);
+    }
+
+    [Fact]
     public void The_facts_come_from_the_boundary_and_its_region()
     {
         var boundary = BoundaryReader.Read(ReferenceData.Path("regions", "strata_maine_counties.geojson"));
         var region = RegionBuilder.Build(boundary, new RegionDesign(), []);
-        var facts = StarterFacts.Of("counties", boundary, region);
+        var facts = StarterFacts.Of("counties", boundary);
 
         Assert.Equal(region.AreaKm2, facts.AreaKm2);
         Assert.Equal((region.Strata[0].LongAxisKm, region.Strata[0].ShortAxisKm), (facts.LongAxisKm, facts.ShortAxisKm));
@@ -83,4 +129,21 @@ public partial class StarterPlanTests
 
     [GeneratedRegex(@"^# (?=\[[a-z]|[a-z_]+ = )", RegexOptions.Multiline)]
     private static partial Regex CommentedToml();
+
+    [GeneratedRegex("# about ([0-9]+) lines")]
+    private static partial Regex LinesSaid();
+
+    private static Boundary Islands(params string[] polygons)
+    {
+        var path = Path.Combine(Directory.CreateTempSubdirectory("islands-").FullName, "islands.geojson");
+        File.WriteAllText(path, $$"""{"type":"MultiPolygon","coordinates":[{{string.Join(",", polygons)}}]}""");
+        try
+        {
+            return BoundaryReader.Read(path);
+        }
+        finally
+        {
+            Directory.Delete(Path.GetDirectoryName(path)!, recursive: true);
+        }
+    }
 }

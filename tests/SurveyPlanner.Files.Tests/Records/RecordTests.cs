@@ -153,6 +153,7 @@ public sealed class RecordTests : IDisposable
     {
         var trouble = Assert.Throws<IOException>(() => RecordReader.Read(_folder.At("none.json")));
         Assert.EndsWith("does not exist: give the path of a file that does.", trouble.Message, StringComparison.Ordinal);
+        Assert.Contains("has no name", Assert.Throws<IOException>(() => RecordReader.Read("")).Message, StringComparison.Ordinal);
         Assert.Contains("give the record.json in it", Assert.Throws<InputException>(() => RecordReader.Read(_folder.Path)).Message, StringComparison.Ordinal);
     }
 

@@ -49,6 +49,65 @@ public partial class DrawingTests
         Assert.True(towards > 0);
     }
 
+    /// <summary>Two strata side by side, one five times as wide: a name of 80 characters is cut to what its stratum has room for, a common one not at all.</summary>
+    [Fact]
+    public void Long_names_are_cut_to_their_stratum()
+    {
+        var west = "Administrativebezirkgrenzüberschreitenderzusammenarbeitsgebietnordwestlichersektor";
+        var east = new string('区', 60);
+        var plan = SamplePlan.Of(SampleBoundary.Boxes((west, 20, 0, 25, 5), (east, 25, 0, 26, 5), ("inner bay", 26, 0, 26.5, 5)), SamplePlan.Parallel(100_000), stratumField: "name", cells: 100);
+        var frame = MapFrame.Around(plan.Region.Strata.Select(stratum => stratum.Shape), []);
+        var strata = StrataDrawing.Of(plan.Region, frame, new LabelPlacer(frame.Width, frame.Height)).Strata;
+        var names = strata.Select(stratum => stratum.NameLabel!.Text).ToArray();
+
+        Assert.InRange(names[0].Length, 26, 28);
+        Assert.Equal(("Administrative", "sektor"), (names[0][..14], names[0][^6..]));
+        Assert.InRange(names[1].Length, 8, 14);
+        Assert.InRange(LabelPlacer.LengthOf(names[1], StrataDrawing.NameSize), 0, 1.1 * strata[1].Shape.WidthAt(strata[1].NameLabel!.Place));
+        Assert.Equal("inner bay", names[2]);
+    }
+
+    /// <summary>Two squares that share the side x = 100, as a region cut at 180° does, and an island: the side they share is not drawn.</summary>
+    [Fact]
+    public void Where_parts_of_a_stratum_meet_no_edge_is_drawn()
+    {
+        Pixel[] west = [new(0, 0), new(100, 0), new(100, 100), new(0, 100)];
+        Pixel[] east = [new(100, 100), new(100, 0), new(200, 0), new(200, 100)];
+        Pixel[] island = [new(300, 0), new(320, 0), new(310, 20)];
+        Assert.Null(new ShapeDrawing([west, island]).Outline);
+
+        var drawn = new ShapeDrawing([west, east, island]).Outline!.Split('M', StringSplitOptions.RemoveEmptyEntries)
+            .Select(run => GraticuleTests.Vertices("M" + run).ToArray()).ToArray();
+        Assert.Equal([new(100, 100), new(0, 100), new(0, 0), new(100, 0)], drawn[0]);
+        Assert.Equal([new(100, 0), new(200, 0), new(200, 100), new(100, 100)], drawn[1]);
+        Assert.Equal([new(300, 0), new(320, 0), new(310, 20), new(300, 0)], drawn[2]);
+    }
+
+    /// <summary>The western stratum has no vertex on the side that the eastern one lies against.</summary>
+    [Fact]
+    public void Strata_that_lie_side_by_side_have_different_fills()
+    {
+        var region = SamplePlan.Of(
+            SampleBoundary.Boxes(("a", 0, 0, 1, 3), ("b", 1, 1, 2, 2), ("c", 5, 0, 6, 1), ("d", 6, 0, 7, 1), ("e", 2, 1.2, 3, 1.8), ("f", 3, 1, 4, 2)),
+            SamplePlan.Parallel(50_000), stratumField: "name", cells: 50).Region;
+        var frame = MapFrame.Around(region.Strata.Select(stratum => stratum.Shape), []);
+        var fills = StrataDrawing.Of(region, frame, new LabelPlacer(frame.Width, frame.Height)).Strata.Select(stratum => stratum.Fill).ToArray();
+
+        Assert.Equal(4, fills[..4].Distinct().Count());
+        Assert.NotEqual(fills[1], fills[4]);
+        Assert.NotEqual(fills[4], fills[5]);
+    }
+
+    [Fact]
+    public void The_width_at_a_place_is_twice_the_way_to_the_nearer_side()
+    {
+        // A square of 100 with a hole of 20 in its middle.
+        var shape = new ShapeDrawing([[new(0, 0), new(100, 0), new(100, 100), new(0, 100)], [new(40, 40), new(60, 40), new(60, 60), new(40, 60)]]);
+        Assert.Equal(60, shape.WidthAt(new Pixel(30, 20)), 1e-9);
+        Assert.Equal(20, shape.WidthAt(new Pixel(30, 50)), 1e-9);
+        Assert.Equal(100, shape.WidthAt(new Pixel(50, 90)), 1e-9);
+    }
+
     [Theory]
     [InlineData(178, -17)]
     [InlineData(21, 60)]

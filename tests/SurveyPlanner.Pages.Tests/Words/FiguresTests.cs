@@ -1,3 +1,4 @@
+using System.Globalization;
 using CsCheck;
 using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Pages.Words;
@@ -72,11 +73,35 @@ public class FiguresTests
     public void References_of_forbidden_characters_are_replaced_and_the_others_spelled_out(string html, string expected)
         => Assert.Equal(expected, PlainText.SettleReferences(html));
 
+    [Theory]
+    [InlineData(0, "0")]
+    [InlineData(1.01e-7, "under 0.001")]
+    [InlineData(0.00001, "0.00100")]
+    [InlineData(0.0137, "1.37")]
+    [InlineData(1, "100")]
+    public void A_sliver_of_area_is_not_given_digits(double share, string expected) => Assert.Equal(expected, Figures.AreaShare(share));
+
+    [Theory]
+    [InlineData("Outer sound")]
+    [InlineData("Administrativebezirkgrenzüberschreitenderzusammenarbeitsgebiet nordwestlich")]
+    [InlineData("👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬👩‍🔬")]
+    [InlineData("")]
+    public void A_text_may_be_broken_where_it_has_no_space_for_long_and_nowhere_else(string text)
+    {
+        var pieces = PlainText.Pieces(text);
+        Assert.Equal(text, string.Concat(pieces));
+        Assert.All(pieces.SelectMany(piece => piece.Split(' ')), run => Assert.InRange(new StringInfo(run).LengthInTextElements, 0, 24));
+        Assert.Equal(new StringInfo(text).LengthInTextElements, pieces.Sum(piece => new StringInfo(piece).LengthInTextElements));
+        Assert.Equal(text.Split(' ').Sum(run => Math.Max(0, (new StringInfo(run).LengthInTextElements - 1) / 24)), pieces.Count - 1);
+    }
+
     [Fact]
     public void Shortening_never_cuts_a_character_in_two()
     {
         Assert.Equal("Bay", PlainText.Shorten("Bay", 3));
         Assert.Equal("Ba…", PlainText.Shorten("Bay of", 3));
         Assert.Equal("😀…", PlainText.Shorten("😀😀😀", 2));
+        Assert.Equal("Northern waters of…th, west", PlainText.Shorten("Northern waters of the great firth, west", 27));
+        Assert.Equal("Northern waters of…th, east", PlainText.Shorten("Northern waters of the great firth, east", 27));
     }
 }
