@@ -24,6 +24,9 @@ internal sealed class HullSides
         _left = [.. Walk(hull, highestLeft, lowestLeft).Reverse()];
     }
 
+    private HullSides(HullSides hull, (double X, double Y)[] left, (double X, double Y)[] right)
+        => (MinY, MaxY, _left, _right) = (hull.MinY, hull.MaxY, left, right);
+
     public double MinY { get; }
 
     public double MaxY { get; }
@@ -36,6 +39,14 @@ internal sealed class HullSides
 
     /// <summary>x of the right side; beyond the ends that of the end.</summary>
     public double Right(double y) => At(_right, Within(y));
+
+    /// <summary>
+    /// The same, but a side ends where it becomes flatter than a leg of a zigzag that turns at such steps along the axis, and goes on straight along
+    /// the axis from there: what is flatter closes the band, and is no side to turn at. (The ends of a box between parallels and meridians are never
+    /// quite at right angles to its axis.)
+    /// </summary>
+    public HullSides WithoutFlatEnds(double spacingMetres)
+        => new(this, SteepPart(_left, spacingMetres), SteepPart(_right, spacingMetres));
 
     /// <summary>The hull in sections with straight sides, from its lower to its upper end.</summary>
     public ImmutableArray<ZigzagSection> Sections()
@@ -65,6 +76,26 @@ internal sealed class HullSides
     /// A millionth inside the ends: an end that is flat but for rounding keeps both its corners, and turning the region changes nothing.
     /// </summary>
     private double Within(double y) => Math.Clamp(y, MinY + Margin, MaxY - Margin);
+
+    private (double X, double Y)[] SteepPart((double X, double Y)[] chain, double spacingMetres)
+    {
+        // A leg crosses the hull while it advances by the spacing.
+        double Width(double y) => Right(y) - Left(y);
+        bool IsFlat((double X, double Y) end, (double X, double Y) inner)
+            => Math.Abs(inner.X - end.X) * spacingMetres > Math.Abs(inner.Y - end.Y) * Math.Max(Width(inner.Y), Width(end.Y));
+        var (first, last) = (0, chain.Length - 1);
+        while (first < last && IsFlat(chain[first], chain[first + 1]))
+        {
+            first++;
+        }
+
+        while (first < last && IsFlat(chain[last], chain[last - 1]))
+        {
+            last--;
+        }
+
+        return chain[first..(last + 1)];
+    }
 
     private static double At((double X, double Y)[] chain, double y)
     {
