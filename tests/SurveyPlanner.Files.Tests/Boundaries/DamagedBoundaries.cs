@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using CsCheck;
 using SurveyPlanner.Files.Boundaries;
 using SurveyPlanner.Regions;
+using SurveyPlanner.TestShapes;
 
 namespace SurveyPlanner.Files.Tests.Boundaries;
 
@@ -93,7 +94,7 @@ public sealed class DamagedBoundaries
     public void A_file_with_changed_bytes_never_fails_in_another_way_than_by_a_sentence(string sample, int times)
     {
         var bytes = File.ReadAllBytes(ReferenceFiles.Region(sample));
-        Damage(bytes.Length).Sample(damage => { Read(damage.Apply(bytes), sample); }, seed: "0N0XIzNsQ0O2", iter: times, threads: 1);
+        Damage(bytes.Length).Hold(times, seed: 1, damage => Read(damage.Apply(bytes), sample));
     }
 
     [Fact]
@@ -101,19 +102,19 @@ public sealed class DamagedBoundaries
     {
         using var members = new ZipMembers(File.ReadAllBytes(ReferenceFiles.Dirty("shp_latin1_with_cpg.zip")), "latin.zip");
         var parts = ShapefileParts.From("shp_latin1_with_cpg.shp", members.Names, members.Read);
-        Gen.Select(Damage(parts.Shp.Length), Damage(parts.Dbf!.Length), Damage(parts.Prj!.Length), Gen.Int[0, 3]).Sample(
-            (shp, dbf, prj, which) =>
+        Gen.Select(Damage(parts.Shp.Length), Damage(parts.Dbf!.Length), Damage(parts.Prj!.Length), Gen.Int[0, 3]).Hold(
+            3000,
+            seed: 1,
+            damage =>
             {
+                var (shp, dbf, prj, which) = damage;
                 Read(parts with
                 {
                     Shp = which == 0 ? shp.Apply(parts.Shp) : parts.Shp,
                     Dbf = which == 1 ? dbf.Apply(parts.Dbf) : parts.Dbf,
                     Prj = which == 2 ? prj.Apply(parts.Prj) : parts.Prj,
                 });
-            },
-            seed: "0N0XIzNsQ0O2",
-            iter: 3000,
-            threads: 1);
+            });
     }
 
     [Fact]
@@ -121,7 +122,7 @@ public sealed class DamagedBoundaries
     {
         using var members = new ZipMembers(File.ReadAllBytes(ReferenceFiles.Dirty("kmz_iceland.kmz")), "iceland.kmz");
         var bytes = members.Read("doc.kml")[..2000].Concat("</coordinates></LinearRing></outerBoundaryIs></Polygon></Placemark></Folder></Document></kml>"u8.ToArray()).ToArray();
-        Damage(bytes.Length).Sample(damage => { Read(damage.Apply(bytes), "x.kml"); }, seed: "0N0XIzNsQ0O2", iter: 2000, threads: 1);
+        Damage(bytes.Length).Hold(2000, seed: 1, damage => Read(damage.Apply(bytes), "x.kml"));
     }
 
     private sealed record Change(int At, byte Value, int Kind)

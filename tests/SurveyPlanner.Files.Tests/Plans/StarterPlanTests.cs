@@ -4,6 +4,7 @@ using SurveyPlanner.Files.Boundaries;
 using SurveyPlanner.Files.Plans;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Regions;
+using SurveyPlanner.TestShapes;
 
 namespace SurveyPlanner.Files.Tests.Plans;
 
@@ -34,8 +35,8 @@ public partial class StarterPlanTests
 
     [Fact]
     public void Whatever_the_region_it_gives_about_twenty_lines_with_strips_far_apart()
-        => Gen.Double[-3, 4].Check(
-            500,
+        => Gen.Double[-3, 4].Hold(
+            500, seed: 1,
             exponent =>
             {
                 var longAxisKm = Math.Pow(10, exponent);
@@ -49,8 +50,8 @@ public partial class StarterPlanTests
 
     [Fact]
     public void Whatever_the_names_it_reads_and_says_them_back()
-        => Gen.Select(Gen.String, Gen.String, Gen.String.Array[0, 3]).Check(
-            300,
+        => Gen.Select(Gen.String, Gen.String, Gen.String.Array[0, 3]).Hold(
+            300, seed: 1,
             names =>
             {
                 var (survey, field, values) = names;
