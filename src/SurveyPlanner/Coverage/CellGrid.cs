@@ -22,13 +22,12 @@ internal sealed class CellGrid
         X = x;
         Cells = cells;
         _rowSlots = new int[rowY.Length];
-        _rows = new SlotTable(rowY, _rowSlots);
+        _rows = new SlotTable(rowY, 0, rowY.Length, _rowSlots);
         _placeSlots = new int[x.Length];
         _rowPlaces = new SlotTable[rowY.Length];
         for (var row = 0; row < rowY.Length; row++)
         {
-            var places = rowStarts[row]..rowStarts[row + 1];
-            _rowPlaces[row] = new SlotTable(x.AsSpan(places), _placeSlots.AsSpan(places));
+            _rowPlaces[row] = new SlotTable(x, rowStarts[row], rowStarts[row + 1], _placeSlots);
         }
     }
 
@@ -79,18 +78,12 @@ internal sealed class CellGrid
     /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end, not after it where there are none.</summary>
     public (int First, int End) Run(int row, double low, double high)
     {
-        var (start, count) = (RowStarts[row], RowStarts[row + 1] - RowStarts[row]);
         ref readonly var places = ref _rowPlaces[row];
 
         // Most rows at a coast hold a place or two, which most ranges miss.
-        if (high < places.First || low > places.Last)
-        {
-            return (start, start);
-        }
-
-        var x = X.AsSpan(start, count);
-        var slots = _placeSlots.AsSpan(start, count);
-        return (start + places.FirstFrom(x, slots, low), start + places.FirstBeyond(x, slots, high));
+        return high < places.First || low > places.Last
+            ? (0, 0)
+            : (places.FirstFrom(X, _placeSlots, low), places.FirstBeyond(X, _placeSlots, high));
     }
 }
 

@@ -1,30 +1,37 @@
 namespace SurveyPlanner.Coverage;
 
 /// <summary>
-/// Finds a place in an ascending list in a step or two where the list is spread fairly evenly: the stretch from first to last value is cut into
+/// Finds a place in an ascending stretch of a list in a step or two where it is spread fairly evenly: the way from first to last value is cut into
 /// as many equal slots as there are values, and for each slot it is noted which value is its first. Where values crowd, it halves.
 /// </summary>
 internal readonly struct SlotTable
 {
+    private readonly int _start;
+    private readonly int _end;
     private readonly double _slotsPerUnit;
+    private readonly double _lastSlot;
 
-    /// <param name="values">Ascending.</param>
-    /// <param name="firsts">As many as values: takes the index of the first value of each slot or a later one.</param>
-    public SlotTable(ReadOnlySpan<double> values, Span<int> firsts)
+    /// <param name="values">The list.</param>
+    /// <param name="start">Index of the first value of the stretch.</param>
+    /// <param name="end">Index after its last.</param>
+    /// <param name="firsts">As long as the list: takes, in the same stretch, the index of the first value of each slot or a later one.</param>
+    public SlotTable(double[] values, int start, int end, int[] firsts)
     {
-        if (values.Length == 0)
+        (_start, _end) = (start, end);
+        if (start == end)
         {
             // Nothing is at least or at most what it would have to be.
             (First, Last) = (double.PositiveInfinity, double.NegativeInfinity);
             return;
         }
 
-        (First, Last) = (values[0], values[^1]);
-        _slotsPerUnit = Last > First ? values.Length / (Last - First) : 0;
-        var i = 0;
-        for (var slot = 0; slot < firsts.Length; slot++)
+        (First, Last) = (values[start], values[end - 1]);
+        _slotsPerUnit = Last > First ? (end - start) / (Last - First) : 0;
+        _lastSlot = end - start - 1;
+        var i = start;
+        for (var slot = start; slot < end; slot++)
         {
-            while (Slot(values[i], values.Length) < slot)
+            while (SlotOf(values[i]) < slot)
             {
                 i++;
             }
@@ -39,27 +46,25 @@ internal readonly struct SlotTable
     /// <summary>The last value; minus infinity where there is none.</summary>
     public double Last { get; }
 
-    /// <summary>Index of the first value that is at least so large; the number of values where none is.</summary>
-    public int FirstFrom(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double least)
-        => least <= Last ? CountBelow(values, firsts, least) : values.Length;
+    /// <summary>Index of the first value that is at least so large; the end where none is.</summary>
+    public int FirstFrom(double[] values, int[] firsts, double least) => least <= Last ? Find(values, firsts, least) : _end;
 
-    /// <summary>Index of the first value that is larger; the number of values where none is.</summary>
-    public int FirstBeyond(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double most)
-        => most < Last ? CountBelow(values, firsts, Math.BitIncrement(most)) : values.Length;
+    /// <summary>Index of the first value that is larger; the end where none is.</summary>
+    public int FirstBeyond(double[] values, int[] firsts, double most) => most < Last ? Find(values, firsts, Math.BitIncrement(most)) : _end;
 
-    /// <summary>How many values are less than a number that is not larger than the last.</summary>
-    private int CountBelow(ReadOnlySpan<double> values, ReadOnlySpan<int> firsts, double number)
+    /// <summary>Index of the first value that is at least so large as a number that is not larger than the last.</summary>
+    private int Find(double[] values, int[] firsts, double number)
     {
-        var slot = Slot(number, values.Length);
+        var slot = SlotOf(number);
         var i = firsts[slot];
 
         // Mostly one to go or none, which no branch would foretell.
         i += values[i] < number ? 1 : 0;
-        return values[i] < number ? CountBelowFrom(i, slot + 1 < firsts.Length ? firsts[slot + 1] : values.Length, values, number) : i;
+        return values[i] < number ? Halve(values, i, slot + 1 < _end ? firsts[slot + 1] : _end, number) : i;
     }
 
-    /// <summary>The same, known to be more than <paramref name="low"/> and at most <paramref name="high"/>.</summary>
-    private static int CountBelowFrom(int low, int high, ReadOnlySpan<double> values, double number)
+    /// <summary>The same, known to lie behind <paramref name="low"/> and at most at <paramref name="high"/>.</summary>
+    private static int Halve(double[] values, int low, int high, double number)
     {
         while (high - low > 1)
         {
@@ -70,5 +75,7 @@ internal readonly struct SlotTable
         return high;
     }
 
-    private int Slot(double value, int slots) => Math.Clamp((int)((value - First) * _slotsPerUnit), 0, slots - 1);
+    // Held between the first slot and the last while still a fraction, so that the plain conversion will do.
+    private int SlotOf(double value)
+        => _start + double.ConvertToIntegerNative<int>(double.MaxNative(double.MinNative((value - First) * _slotsPerUnit, _lastSlot), 0));
 }

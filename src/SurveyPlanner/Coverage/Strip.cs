@@ -11,12 +11,14 @@ internal readonly ref struct Strip
     private readonly double _middleY;
     private readonly double _squaredRadius;
 
-    // A rectangle is where two pairs of parallel sides overlap. On a horizontal line each pair leaves a stretch: its middle shifts by so much
-    // for a metre of y, and its half length stays.
+    // A rectangle is where two pairs of parallel sides overlap. On the horizontal line through its middle each pair leaves a stretch, which shifts
+    // by so much for a metre of y.
     private readonly double _shiftAlong;
-    private readonly double _halfAlong;
+    private readonly double _lowAlong;
+    private readonly double _highAlong;
     private readonly double _shiftAcross;
-    private readonly double _halfAcross;
+    private readonly double _lowAcross;
+    private readonly double _highAcross;
 
     public Strip(in Piece piece, double halfWidthMetres)
     {
@@ -31,8 +33,10 @@ internal readonly ref struct Strip
         {
             var length = piece.Length;
             var (alongX, alongY) = ((piece.ToX - piece.FromX) / length, (piece.ToY - piece.FromY) / length);
-            (_shiftAlong, _halfAlong) = Stretch(alongX, alongY, length / 2);
-            (_shiftAcross, _halfAcross) = Stretch(-alongY, alongX, halfWidthMetres);
+            (_shiftAlong, var half) = Stretch(alongX, alongY, length / 2);
+            (_lowAlong, _highAlong) = (_middleX - half, _middleX + half);
+            (_shiftAcross, half) = Stretch(-alongY, alongX, halfWidthMetres);
+            (_lowAcross, _highAcross) = (_middleX - half, _middleX + half);
             reach = (Math.Abs(alongY) * length / 2) + (Math.Abs(alongX) * halfWidthMetres);
         }
 
@@ -56,9 +60,9 @@ internal readonly ref struct Strip
             return;
         }
 
-        var (along, across) = (_middleX + (_shiftAlong * dy), _middleX + (_shiftAcross * dy));
-        low = double.MaxNative(along - _halfAlong, across - _halfAcross);
-        high = double.MinNative(along + _halfAlong, across + _halfAcross);
+        var (along, across) = (_shiftAlong * dy, _shiftAcross * dy);
+        low = double.MaxNative(_lowAlong + along, _lowAcross + across);
+        high = double.MinNative(_highAlong + along, _highAcross + across);
     }
 
     /// <summary>|x · slopeX + y · slopeY| is at most the limit: on a line of constant y a stretch of x, endless where x does not matter.</summary>
