@@ -3,23 +3,18 @@ using SurveyPlanner.Pilots;
 
 namespace SurveyPlanner.Effort;
 
-/// <summary>One detection part of b: a fit, or a value from theory.</summary>
+/// <summary>One detection part of b.</summary>
 /// <param name="Part">n cv² of what density is divided by.</param>
-/// <param name="Fit">The fit it comes from; null for theory, which is taken as certain.</param>
-internal sealed record DetectionSource(double Part, DetectionFit? Fit);
+/// <param name="Draws">What it may be instead; empty where it is taken as certain.</param>
+internal sealed record DetectionSource(double Part, ImmutableArray<double> Draws);
 
 /// <summary>Where the detection parts of b come from.</summary>
 /// <param name="Pooled">One for all strata; null where there is none, or each stratum has its own.</param>
 /// <param name="Own">For each stratum its own; empty where detection is pooled.</param>
-/// <param name="TruncationMetres">Truncation distance of the fits.</param>
 /// <param name="Advice">Assumptions to tell.</param>
-internal sealed record DetectionBasis(
-    DetectionSource? Pooled, ImmutableArray<DetectionSource> Own, double TruncationMetres, ImmutableArray<Advice> Advice)
+internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<DetectionSource> Own, ImmutableArray<Advice> Advice)
 {
-    /// <summary>A truncation distance of two σ, an ordinary one, where no distances say better.</summary>
-    private const double OrdinaryTruncationInSigma = 2;
-
-    public static readonly DetectionBasis None = new(null, [], 0, []);
+    public static readonly DetectionBasis None = new(null, [], []);
 
     public double? PooledPart => Pooled?.Part;
 
@@ -38,29 +33,85 @@ internal sealed record DetectionBasis(
         var pooled = Source(figures.Detection, figures.IsPoints, "", advice);
         if (!design.ByStratum || figures.Strata[0].Stratum.Length == 0)
         {
-            return new DetectionBasis(pooled, [], figures.TruncationMetres ?? 0, [.. advice]);
+            return new DetectionBasis(pooled, [], [.. advice]);
         }
 
         var own = surveyed.Select(stratum =>
             figures.Strata.FirstOrDefault(one => one.Stratum == stratum.Name)?.Detection is { Chosen: not null } fits
                 ? Source(fits, figures.IsPoints, $" in stratum '{stratum.Name}'", advice)
                 : pooled);
-        return new DetectionBasis(null, [.. own], figures.TruncationMetres ?? 0, [.. advice]);
+        return new DetectionBasis(null, [.. own], [.. advice]);
     }
 
+    /// <summary>
+    /// A single model inside its bounds has its cv from the likelihood; where a model was chosen among several, or stopped at a bound, the
+    /// bootstrap gives it; theory where nothing could be fitted.
+    /// </summary>
     private static DetectionSource Source(DetectionFits? fits, bool isPoints, string where, List<Advice> advice)
     {
-        if (fits?.Chosen is { RelativeVariance: { } part } chosen)
+        if (fits?.Chosen is not { } chosen)
         {
-            return new DetectionSource(part, chosen);
+            return Theory(fits is null ? "The pilot has no distances" : $"No detection function could be fitted{where}", isPoints, advice);
         }
 
-        var (mean, variance) = HalfNormalFit.Moments(1 / OrdinaryTruncationInSigma, 1, isPoints);
-        var theory = mean * mean / variance;
-        var why = fits is null ? "The pilot has no distances" : $"No detection function could be fitted with a variance{where}";
+        if (fits.Fits.All(fit => fit.Model == DetectionModel.Strip))
+        {
+            return new DetectionSource(0, []);
+        }
+
+        advice.AddRange(OfBounds(fits, chosen, where));
+        var bootstrap = DetectionBootstrap.Of(fits);
+        if ((fits.Fits.Length == 1 ? chosen.RelativeVariance : null) is { } ofFit)
+        {
+            return new DetectionSource(ofFit, bootstrap.FitParts);
+        }
+
+        if (bootstrap.Part is not { } part)
+        {
+            return Theory($"The detection function{where} has no variance", isPoints, advice);
+        }
+
+        if (chosen.RelativeVariance is { } alone)
+        {
+            advice.Add(new Advice(
+                FormattableString.Invariant($"Detection{where} adds {part:0.00} to b, {alone:0.00} by the {Name(chosen.Model)} fit alone: choosing among {fits.Fits.Length} models makes estimates vary otherwise than one model does. ")
+                    + "If the survey will be analysed with one model fixed beforehand, name it in the plan (models).",
+                "Simulated draws"));
+        }
+
+        // Relative to their mean, since each fit's own figure leaves out the choice of a model.
+        var mean = bootstrap.FitParts.IsEmpty ? 1 : bootstrap.FitParts.Average();
+        return new DetectionSource(part, [.. bootstrap.FitParts.Select(one => part * one / mean)]);
+    }
+
+    private static IEnumerable<Advice> OfBounds(DetectionFits fits, DetectionFit chosen, string where)
+    {
+        if (chosen.Status == FitStatus.OnBound)
+        {
+            yield return new Advice($"The {Name(chosen.Model)} fit{where} stopped at a bound. {chosen.Explanation}");
+        }
+        else if (fits.Fits.FirstOrDefault(fit => fit.Aic < chosen.Aic) is { } passedOver)
+        {
+            yield return new Advice(
+                $"The {Name(passedOver.Model)} fit{where} has a smaller AIC but stopped at a bound, so the {Name(chosen.Model)} fit is used. {passedOver.Explanation}");
+        }
+    }
+
+    private static DetectionSource Theory(string why, bool isPoints, List<Advice> advice)
+    {
+        var theory = HalfNormalFit.OrdinaryPart(isPoints);
         advice.Add(new Advice(
             FormattableString.Invariant($"{why}, so what detection adds to b is taken from half-normal theory: {theory:0.00}."),
             "Arithmetic of half-normal theory"));
-        return new DetectionSource(theory, null);
+        return new DetectionSource(theory, []);
     }
+
+    private static string Name(DetectionModel model) => model switch
+    {
+        DetectionModel.Strip => "strip",
+        DetectionModel.HalfNormal => "half-normal",
+        DetectionModel.HazardRate => "hazard-rate",
+        DetectionModel.UniformCosine => "uniform-cosine",
+        _ => throw new ArgumentOutOfRangeException(nameof(model)),
+    };
 }

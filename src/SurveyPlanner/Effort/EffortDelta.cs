@@ -14,9 +14,8 @@ internal static class EffortDelta
 
     /// <summary>Least and greatest factor on the required effort at 95 %.</summary>
     /// <param name="basis">The basis.</param>
-    /// <param name="refits">Bootstrapped detection parts, as <see cref="EffortDraws.Refits"/>; they give the variance of the fit's.</param>
     /// <param name="model">The basis' model with effort shared as it will be.</param>
-    public static EffortInterval Factors(EffortBasis basis, IReadOnlyList<ImmutableArray<double>> refits, EffortModel model)
+    public static EffortInterval Factors(EffortBasis basis, EffortModel model)
     {
         var variance = 0.0;
         for (var i = 0; i < basis.Sources.Length; i++)
@@ -36,11 +35,11 @@ internal static class EffortDelta
         }
 
         variance += Squared(factor => model with { ClusterPart = model.ClusterPart * factor }) * (basis.ClusterSize?.LogVariance ?? 0);
-        variance += Squared(factor => model with { DetectionPart = model.DetectionPart * factor }) * LogVariance(refits[^1]);
+        variance += Squared(factor => model with { DetectionPart = model.DetectionPart * factor }) * LogVariance(basis.Detection.Pooled?.Draws ?? []);
         for (var h = 0; h < basis.Detection.Own.Length; h++)
         {
             var ofStratum = h;
-            variance += Squared(factor => OwnChanged(ofStratum, factor)) * LogVariance(refits[h]);
+            variance += Squared(factor => OwnChanged(ofStratum, factor)) * LogVariance(basis.Detection.Own[h].Draws);
         }
 
         var most = Math.Exp(StudentQuantile.At(0.975, null) * Math.Sqrt(variance));

@@ -6,21 +6,17 @@ namespace SurveyPlanner.Effort;
 
 /// <summary>
 /// The models that the pilot leaves possible, as draws from the confidence distribution of its figures: encounter rates and dispersions by
-/// <see cref="RateSource.Draw"/>, detection by parametric bootstrap of the fit, cluster size by a chi-square. The required effort under each
+/// <see cref="RateSource.Draw"/>, detection by parametric bootstrap, cluster size by a chi-square. The required effort under each
 /// draw gives the interval and the assured effort (a generalised confidence interval, Weerahandi 1993, from memory). Coverage as measured:
 /// docs/methods/effort.md; percentile, basic and studentised bootstraps were tried there and cover worse.
 /// </summary>
 internal sealed class EffortDraws
 {
     public const int Count = 2000;
-    private const int RefitCount = 200;
 
     private readonly ImmutableArray<EffortModel> _models;
 
-    private EffortDraws(ImmutableArray<EffortModel> models, IReadOnlyList<ImmutableArray<double>> refits) => (_models, Refits) = (models, refits);
-
-    /// <summary>Detection parts by parametric bootstrap: of each stratum where each has its own, last the pooled one; empty where there is no fit.</summary>
-    public IReadOnlyList<ImmutableArray<double>> Refits { get; }
+    private EffortDraws(ImmutableArray<EffortModel> models) => _models = models;
 
     /// <summary>Draws for a basis; null when nothing of it is uncertain.</summary>
     public static EffortDraws? Of(EffortBasis basis, ulong seed)
@@ -30,12 +26,7 @@ internal sealed class EffortDraws
             return null;
         }
 
-        var refits = basis.Detection.Own.Append(basis.Detection.Pooled)
-            .Select((source, i) => source?.Fit is { } fit
-                ? DetectionBootstrap.RelativeVariances(fit, basis.Detection.TruncationMetres, basis.Model.IsPoints, RefitCount, seed, (uint)i)
-                : [])
-            .ToList();
-        return new EffortDraws([.. Enumerable.Range(0, Count).Select(draw => Draw(basis, refits, seed, draw))], refits);
+        return new EffortDraws([.. Enumerable.Range(0, Count).Select(draw => Draw(basis, seed, draw))]);
     }
 
     /// <summary>
@@ -48,9 +39,8 @@ internal sealed class EffortDraws
         return [.. _models.Select(model => model.WithShares(shares).UnitCv2 / unit).Order()];
     }
 
-    private static EffortModel Draw(EffortBasis basis, List<ImmutableArray<double>> refits, ulong seed, int draw)
+    private static EffortModel Draw(EffortBasis basis, ulong seed, int draw)
     {
-        // Streams 0, 1, … of a purpose of their own: the refits use the bootstrap's.
         var rates = basis.Sources
             .Select((source, i) =>
             {
@@ -61,7 +51,7 @@ internal sealed class EffortDraws
         var size = new PhiloxStream(seed, RandomPurpose.PilotDraw, uint.MaxValue, (uint)draw);
         return basis.Model with
         {
-            DetectionPart = Part(refits[^1]) ?? basis.Model.DetectionPart,
+            DetectionPart = Part(basis.Detection.Pooled) ?? basis.Model.DetectionPart,
             ClusterPart = basis.Model.ClusterPart * SizeFactor(basis.ClusterSize, ref size),
             Strata =
             [
@@ -69,12 +59,12 @@ internal sealed class EffortDraws
                 {
                     Rate = rates[basis.SourceOf[i]].Rate,
                     Dispersion = rates[basis.SourceOf[i]].Dispersion,
-                    OwnDetectionPart = (i < refits.Count - 1 ? Part(refits[i]) : null) ?? stratum.OwnDetectionPart,
+                    OwnDetectionPart = (basis.Detection.Own.IsEmpty ? null : Part(basis.Detection.Own[i])) ?? stratum.OwnDetectionPart,
                 }),
             ],
         };
 
-        double? Part(ImmutableArray<double> parts) => parts.IsEmpty ? null : parts[draw % parts.Length];
+        double? Part(DetectionSource? source) => source is { Draws: { IsEmpty: false } draws } ? draws[draw % draws.Length] : null;
     }
 
     /// <summary>df / χ²(df), the degrees of freedom from the variance of the logarithm.</summary>

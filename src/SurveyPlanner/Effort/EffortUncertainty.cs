@@ -24,7 +24,7 @@ public sealed record EffortUncertainty(
         var factors = draws.EffortFactors(model);
         return new EffortUncertainty(
             new EffortInterval(Quantile(0.025), Quantile(0.975)),
-            EffortDelta.Factors(basis, draws.Refits, model),
+            EffortDelta.Factors(basis, model),
             assurance is { } share ? Quantile(share) : null,
             factors.Length,
             basis.GivenB is null ? NearestMeasured(basis, model) : null);

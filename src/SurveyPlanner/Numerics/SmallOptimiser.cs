@@ -157,37 +157,28 @@ internal static class SmallOptimiser
     private static bool[] Held(double[] point, double[] gradient, double[] lower, double[] upper)
         => [.. point.Select((x, i) => (x <= lower[i] && gradient[i] < 0) || (x >= upper[i] && gradient[i] > 0))];
 
-    /// <summary>Slope and negative second derivatives, taken two steps inside the box where the point is at its edge, where the function may be infinite.</summary>
+    /// <summary>
+    /// Slope and negative second derivatives. Along a parameter at the edge of the box they are taken two steps inside it, and its slope is
+    /// carried back; the others keep their own place, so that a search along an edge sees the edge.
+    /// </summary>
     private static (double[] Gradient, double[,] Information) Derivatives(
         Func<double[], double> function, double[] point, double[] lower, double[] upper)
     {
         var n = point.Length;
-        var centre = point.Select((x, i) => Math.Clamp(x, lower[i] + (2 * Step), upper[i] - (2 * Step))).ToArray();
-        var middle = function(centre);
-        var (up, down) = (new double[n], new double[n]);
+        var inside = point.Select((x, i) => Math.Clamp(x, lower[i] + (2 * Step), upper[i] - (2 * Step))).ToArray();
         var (gradient, information) = (new double[n], new double[n, n]);
         for (var i = 0; i < n; i++)
         {
-            (up[i], down[i]) = (function(Moved(centre, i, Step)), function(Moved(centre, i, -Step)));
-            gradient[i] = (up[i] - down[i]) / (2 * Step);
-            information[i, i] = -(up[i] - (2 * middle) + down[i]) / (Step * Step);
+            var centre = Moved(point, i, inside[i] - point[i]);
+            var (middle, up, down) = (function(centre), function(Moved(centre, i, Step)), function(Moved(centre, i, -Step)));
+            information[i, i] = -(up - (2 * middle) + down) / (Step * Step);
+            gradient[i] = ((up - down) / (2 * Step)) - (information[i, i] * (point[i] - inside[i]));
         }
 
         if (n == 2)
         {
-            var both = function(Moved(Moved(centre, 0, Step), 1, Step));
-            var neither = function(Moved(Moved(centre, 0, -Step), 1, -Step));
-            information[0, 1] = information[1, 0] =
-                -(both - up[0] - up[1] + (2 * middle) - down[0] - down[1] + neither) / (2 * Step * Step);
-        }
-
-        // Carried back from the shifted centre to the point itself.
-        for (var i = 0; i < n; i++)
-        {
-            for (var j = 0; j < n; j++)
-            {
-                gradient[i] -= information[i, j] * (point[j] - centre[j]);
-            }
+            double At(int first, int second) => function(Moved(Moved(inside, 0, first * Step), 1, second * Step));
+            information[0, 1] = information[1, 0] = -(At(1, 1) - At(1, -1) - At(-1, 1) + At(-1, -1)) / (4 * Step * Step);
         }
 
         return (gradient, information);

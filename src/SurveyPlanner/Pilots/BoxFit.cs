@@ -7,8 +7,9 @@ namespace SurveyPlanner.Pilots;
 /// <param name="FunctionAt">The detection function at a point of the search.</param>
 /// <param name="Lower">Lower bounds of the search.</param>
 /// <param name="Upper">Upper bounds of the search.</param>
-/// <param name="BoundMeaning">What it means when the search ends on a bound, one sentence.</param>
-internal sealed record BoxFit(DetectionModel Model, Func<double[], DetectionFunction> FunctionAt, double[] Lower, double[] Upper, string BoundMeaning)
+/// <param name="BoundMeaning">What it means when the search ends on a bound at this point, one sentence.</param>
+internal sealed record BoxFit(
+    DetectionModel Model, Func<double[], DetectionFunction> FunctionAt, double[] Lower, double[] Upper, Func<double[], string> BoundMeaning)
 {
     public DetectionFit Fit(DistanceSample data, Func<double[], double> logLikelihood, double[] start)
     {
@@ -25,19 +26,26 @@ internal sealed record BoxFit(DetectionModel Model, Func<double[], DetectionFunc
         }
 
         var function = FunctionAt(maximum.Point);
-        var covariance = SmallOptimiser.Inverse(maximum.Information);
+        var isFlat = DetectionFit.FallsOffNowhere(function, data.Truncation);
+        var onBound = maximum.OnBound || isFlat;
+
+        // Standard errors belong to a maximum inside the box; at its edge the likelihood still rises and its curvature says nothing of them.
+        var covariance = onBound ? null : SmallOptimiser.Inverse(maximum.Information);
         var effective = function.Effective(data.Truncation, data.IsPoints);
         return new DetectionFit(
             Model,
-            maximum.OnBound ? FitStatus.OnBound : FitStatus.Converged,
-            maximum.OnBound ? BoundMeaning : "Converged.",
+            onBound ? FitStatus.OnBound : FitStatus.Converged,
+            isFlat ? DetectionFit.FlatMeaning : onBound ? BoundMeaning(maximum.Point) : "Converged.",
             n,
             function,
             [.. function.Parameters.Select((parameter, i) => new FittedParameter(
                 parameter.Name, parameter.Value, StandardError(point => FunctionAt(point).Parameters[i].Value)))],
             data.LogLikelihood(function),
             data.IsPoints ? Math.Sqrt(effective) : effective,
-            StandardError(point => FunctionAt(point).Effective(data.Truncation, data.IsPoints)) / effective);
+            StandardError(point => FunctionAt(point).Effective(data.Truncation, data.IsPoints)) / effective)
+        {
+            IsFlat = isFlat,
+        };
 
         double? StandardError(Func<double[], double> quantity)
             => covariance is null ? null : Math.Sqrt(SmallOptimiser.DeltaVariance(quantity, maximum, covariance, Lower, Upper));

@@ -3,41 +3,62 @@ using SurveyPlanner.Numerics;
 
 namespace SurveyPlanner.Pilots;
 
-/// <summary>Parametric bootstrap of a detection fit: distances are drawn from the fitted function and the same model is fitted again.</summary>
-internal static class DetectionBootstrap
+/// <summary>
+/// Parametric bootstrap of detection: distances are drawn from the chosen function, all models are fitted again and one is chosen again. It sees
+/// what no single fit's cv contains, the choice of a model (Buckland, Burnham and Augustin 1997, Biometrics 53:603-618, from memory), and it
+/// holds where the chosen fit stopped at a bound.
+/// </summary>
+/// <param name="Part">What detection adds to b: n times the variance of ln μ̂ (points: ln ρ̂²) over the replicates; null when there are too few.</param>
+/// <param name="FitParts">n cv² by the fit that each replicate chooses, where that has one: how uncertain such a figure is.</param>
+internal sealed record DetectionBootstrap(double? Part, ImmutableArray<double> FitParts)
 {
-    /// <summary>Most distances drawn for a replicate; with more the spread is smaller than shown, which matters to nobody.</summary>
-    private const int MostDistances = 1000;
+    /// <summary>A variance from so many replicates is known to 6 %.</summary>
+    public const int Replicates = 500;
 
-    /// <summary>
-    /// n cv² of detection as the pilot leaves it open: the estimate times estimate over replicate, so that a replicate below the estimate
-    /// stands for a truth above it. Replicates whose fit has no cv are left out; empty when all are.
-    /// </summary>
-    public static ImmutableArray<double> RelativeVariances(
-        DetectionFit fit, double truncation, bool isPoints, int replicates, ulong seed, uint stratum)
+    /// <summary>Most distances drawn for a replicate, as many as a survey brings; the part hardly depends on their number.</summary>
+    private const int MostDistances = 200;
+
+    /// <summary>The pilot alone decides the draws, so that b does not change with the seed of the layout.</summary>
+    private const ulong Seed = 0;
+
+    public static DetectionBootstrap Of(DetectionFits fits)
     {
-        if (fit.RelativeVariance is not { } estimate || fit.Parameters.IsEmpty)
+        if (fits.Chosen is not { Function: { } function } chosen)
         {
-            return [];
+            return new DetectionBootstrap(null, []);
         }
 
-        var values = ImmutableArray.CreateBuilder<double>(replicates);
-        for (uint replicate = 0; replicate < replicates; replicate++)
-        {
-            var random = new PhiloxStream(seed, RandomPurpose.Bootstrap, stratum, replicate);
-            var distances = ImmutableArray.CreateBuilder<double>();
-            for (var i = 0; i < Math.Min(fit.Detections, MostDistances); i++)
-            {
-                distances.Add(random.NextDistance(fit.Function!.ProbabilityAt, truncation, isPoints));
-            }
+        var models = fits.Fits.Select(fit => fit.Model).ToList();
+        var count = Math.Min(chosen.Detections, MostDistances);
+        var again = Enumerable.Range(0, Replicates)
+            .AsParallel()
+            .AsOrdered()
+            .Select(replicate => DetectionFitting.Fit(Drawn(function, fits, count, (uint)replicate), fits.TruncationMetres, fits.IsPoints, models).Chosen)
+            .Where(fit => fit is not null)
+            .Select(fit => fit!)
+            .ToList();
+        return again.Count < Replicates / 2
+            ? new DetectionBootstrap(null, [])
+            : new DetectionBootstrap(
+                count * Variance([.. again.Select(fit => Math.Log(fit.Function!.Effective(fits.TruncationMetres, fits.IsPoints)))]),
+                [.. again.Select(fit => fit.RelativeVariance).OfType<double>().Where(part => part > 0)]);
+    }
 
-            var again = DetectionFitting.FitOne(fit.Model, new DistanceSample(distances.ToImmutable(), truncation, isPoints));
-            if (again.RelativeVariance is { } value && value > 0 && double.IsFinite(value))
-            {
-                values.Add(estimate * estimate / value);
-            }
+    private static ImmutableArray<double> Drawn(DetectionFunction function, DetectionFits fits, int count, uint replicate)
+    {
+        var random = new PhiloxStream(Seed, RandomPurpose.Bootstrap, 0, replicate);
+        var distances = new double[count];
+        for (var i = 0; i < count; i++)
+        {
+            distances[i] = random.NextDistance(function.ProbabilityAt, fits.TruncationMetres, fits.IsPoints);
         }
 
-        return values.ToImmutable();
+        return [.. distances];
+    }
+
+    private static double Variance(double[] values)
+    {
+        var mean = values.Average();
+        return values.Sum(value => (value - mean) * (value - mean)) / (values.Length - 1);
     }
 }

@@ -8,7 +8,7 @@ public enum FitStatus
     /// <summary>At a maximum of the likelihood.</summary>
     Converged,
 
-    /// <summary>A parameter stopped at the edge of what the model allows; the likelihood would rise beyond it.</summary>
+    /// <summary>A parameter stopped at the edge of what the model allows; the likelihood would rise beyond it, so there are no standard errors.</summary>
     OnBound,
 
     /// <summary>No maximum was found; there are no figures.</summary>
@@ -30,7 +30,7 @@ public sealed record FittedParameter(string Name, double Value, double? Standard
 /// <param name="Parameters">Its parameters; empty when not converged.</param>
 /// <param name="LogLikelihood">Of the distances given that they were seen; at points without the constant Σ ln 2r, which all models share. Null when not converged.</param>
 /// <param name="EffectiveMetres">Effective strip half-width, or effective radius; null when not converged.</param>
-/// <param name="EffectiveCv">Coefficient of variation of what density is divided by: the effective half-width, or the square of the effective radius; null when unknown.</param>
+/// <param name="EffectiveCv">Coefficient of variation of what density is divided by: the effective half-width, or the square of the effective radius; null when unknown, as at a bound.</param>
 public sealed record DetectionFit(
     DetectionModel Model,
     FitStatus Status,
@@ -42,6 +42,11 @@ public sealed record DetectionFit(
     double? EffectiveMetres,
     double? EffectiveCv)
 {
+    /// <summary>g at the truncation distance from which on a function is as good as a strip.</summary>
+    private const double LeastOfFlat = 0.99;
+
+    internal const string FlatMeaning = "Detections do not fall off with distance: the fit is at its bound, and a strip describes them as well.";
+
     /// <summary>Akaike's information criterion, 2 k - 2 ln L.</summary>
     public double? Aic => (2 * Parameters.Length) - (2 * LogLikelihood);
 
@@ -50,6 +55,11 @@ public sealed record DetectionFit(
 
     /// <summary>Detections less parameters.</summary>
     public int DegreesOfFreedom => Detections - Parameters.Length;
+
+    /// <summary>Whether it stopped at the bound beyond which detection would rise with distance: it then is the strip, an adequate description.</summary>
+    internal bool IsFlat { get; init; }
+
+    internal static bool FallsOffNowhere(DetectionFunction function, double truncationMetres) => function.ProbabilityAt(truncationMetres) > LeastOfFlat;
 
     /// <summary>A fit that found nothing.</summary>
     internal static DetectionFit Failed(DetectionModel model, int detections, string explanation)
@@ -67,7 +77,7 @@ public sealed record HistogramBar(double FromMetres, double ToMetres, int Count,
 /// <param name="IsPoints">Whether distances are radial from points.</param>
 /// <param name="TruncationMetres">The distance beyond which detections were left out.</param>
 /// <param name="Fits">Every fit, also those that failed, in the order asked for.</param>
-/// <param name="Chosen">The one with the smallest AIC; null when none has figures.</param>
+/// <param name="Chosen">The one used, see <see cref="DetectionFitting"/>; null when none has figures.</param>
 /// <param name="Histogram">The distances, scaled to the chosen fit; empty without one.</param>
 public sealed record DetectionFits(
     bool IsPoints,

@@ -3,13 +3,17 @@ using System.Collections.Immutable;
 namespace SurveyPlanner.Pilots;
 
 /// <summary>
-/// Fits detection functions to distances by maximum likelihood and chooses by AIC.
+/// Fits detection functions to distances by maximum likelihood and chooses by AIC among those that did not stop at a bound; a flat function,
+/// the strip, counts as such. A fit at another bound is chosen where nothing else comes within 10 of its AIC.
 /// Assumptions: everything at distance 0 is seen, distances are exact, animals lie anywhere out to the truncation distance with equal chance
 /// per area, detections are independent. Accuracy: half-normal to rounding; the others' parameters to about 1e-6.
 /// References: Buckland and others 2001, Introduction to Distance Sampling, chapters 2 and 3 (from memory).
 /// </summary>
 public static class DetectionFitting
 {
+    /// <summary>A model this much above the smallest AIC has essentially no support (Burnham and Anderson 2002, Model Selection, section 2.6, from memory).</summary>
+    private const double NoSupport = 10;
+
     private const int FewestBars = 5;
     private const int MostBars = 20;
 
@@ -19,7 +23,7 @@ public static class DetectionFitting
     {
         var data = new DistanceSample(distancesMetres, truncationMetres, isPoints);
         var fits = models.Distinct().Select(model => FitOne(model, data)).ToImmutableArray();
-        var chosen = fits.Where(fit => fit.Status != FitStatus.NotConverged).OrderBy(fit => fit.Aic).FirstOrDefault();
+        var chosen = Chosen(fits);
         return new DetectionFits(isPoints, truncationMetres, fits, chosen, chosen is null ? [] : Histogram(data, chosen));
     }
 
@@ -39,6 +43,14 @@ public static class DetectionFitting
             DetectionModel.UniformCosine => UniformCosineFit.Fit(data),
             _ => throw new ArgumentOutOfRangeException(nameof(model)),
         };
+    }
+
+    /// <summary>At a bound AIC and standard errors do not mean what they say, and the fits that end there are the wilder ones (docs/methods/detection.md).</summary>
+    private static DetectionFit? Chosen(IEnumerable<DetectionFit> fits)
+    {
+        var byAic = fits.Where(fit => fit.Status != FitStatus.NotConverged).OrderBy(fit => fit.Aic).ToList();
+        var adequate = byAic.FirstOrDefault(fit => fit.EffectiveCv is not null || fit.IsFlat);
+        return adequate is null || byAic[0].Aic < adequate.Aic - NoSupport ? byAic.FirstOrDefault() : adequate;
     }
 
     private static DetectionFit StripFit(DistanceSample data)

@@ -11,6 +11,9 @@ internal static class HalfNormalFit
     /// <summary>σ may reach this many truncation distances; g at the truncation distance is then 0.995, as good as a strip.</summary>
     private const double WidestSigma = 10;
 
+    /// <summary>A truncation distance of two σ, an ordinary one, where no distances say better.</summary>
+    private const double OrdinaryTruncationInSigma = 2;
+
     /// <summary>Distances beyond this many σ weigh less than rounding.</summary>
     private const double Farthest = 9.5;
 
@@ -29,15 +32,23 @@ internal static class HalfNormalFit
         return new DetectionFit(
             DetectionModel.HalfNormal,
             onBound ? FitStatus.OnBound : FitStatus.Converged,
-            onBound
-                ? "Detections do not fall off with distance: the width is at its upper bound, and a strip describes them as well."
-                : "Converged.",
+            onBound ? DetectionFit.FlatMeaning : "Converged.",
             n,
             function,
-            [new FittedParameter("sigma_m", sigma, Math.Pow(sigma, 3) / Math.Sqrt(n * variance))],
+            [new FittedParameter("sigma_m", sigma, onBound ? null : Math.Pow(sigma, 3) / Math.Sqrt(n * variance))],
             data.LogLikelihood(function),
             data.IsPoints ? function.EffectiveRadius(data.Truncation) : function.EffectiveHalfWidth(data.Truncation),
-            mean / Math.Sqrt(n * variance));
+            onBound ? null : mean / Math.Sqrt(n * variance))
+        {
+            IsFlat = onBound,
+        };
+    }
+
+    /// <summary>n cv² by theory at an ordinary truncation distance: 0.73 for lines, 1.71 for points.</summary>
+    internal static double OrdinaryPart(bool isPoints)
+    {
+        var (mean, variance) = Moments(1 / OrdinaryTruncationInSigma, 1, isPoints);
+        return mean * mean / variance;
     }
 
     /// <summary>σ at which the model's mean of x² is the one seen, by Newton steps in 1/σ², in which the mean falls smoothly.</summary>

@@ -3,11 +3,20 @@ namespace SurveyPlanner.Pilots;
 /// <summary>The hazard-rate model, searched in ln σ and ln b. The start is at two thirds of the mean distance with a middling shape.</summary>
 internal static class HazardRateFit
 {
-    /// <summary>Below 1 the function has a spike instead of a shoulder at distance 0.</summary>
-    private const double LeastShape = 1;
+    /// <summary>
+    /// Below this the function has a spike instead of a shoulder: without truncation it has no effective width at all, so that the width fitted
+    /// would hang on the truncation distance alone.
+    /// </summary>
+    private const double LeastShapeOfLines = 1;
 
-    /// <summary>Beyond this the function is a strip of width σ.</summary>
-    private const double GreatestShape = 50;
+    /// <summary>The same for the effective radius, whose square is an integral of r g.</summary>
+    private const double LeastShapeOfPoints = 2;
+
+    /// <summary>
+    /// At this shape g falls from 0.9 to 0.1 within a third of σ. Steeper ones only trace where a few distances happen to end: the function
+    /// becomes a strip of width σ, whose best σ is the greatest distance, and neither AIC nor standard errors hold for that.
+    /// </summary>
+    private const double GreatestShape = 10;
 
     private const double WidestSigma = 10;
     private const double NarrowestSigma = 1e-3;
@@ -23,14 +32,16 @@ internal static class HazardRateFit
 
         var w = data.Truncation;
         var logs = data.Distances.Select(Math.Log).ToArray();
-        double[] lower = [Math.Log(NarrowestSigma * w), Math.Log(LeastShape)];
+        double[] lower = [Math.Log(NarrowestSigma * w), Math.Log(data.IsPoints ? LeastShapeOfPoints : LeastShapeOfLines)];
         double[] upper = [Math.Log(WidestSigma * w), Math.Log(GreatestShape)];
         var fit = new BoxFit(
             DetectionModel.HazardRate,
             FunctionAt,
             lower,
             upper,
-            "A parameter is at its bound: the distances show either no shoulder or no fall-off that this model could tell from a strip.");
+            point => point[1] >= upper[1]
+                ? FormattableString.Invariant($"The distances end as if cut off at {Math.Exp(point[0]):0.#} m; if farther ones were not written down, make that the truncation distance.")
+                : "The distances heap up near 0 without a shoulder, which leaves the width open; were they rounded to 0, or animals drawn near?");
         double[] start = [Math.Clamp(Math.Log((data.IsPoints ? 1 : 1.3) * mean), lower[0], upper[0]), Math.Log(3)];
         return fit.Fit(data, LogLikelihood, start);
 

@@ -3,17 +3,27 @@ namespace SurveyPlanner.Pilots;
 /// <summary>
 /// One and two cosine terms, the better by AIC. Coefficients stay where the function falls everywhere and is nowhere below 0: a_1 from 0 to 1
 /// with one term; with two the triangle (0, 0), (4/3, 1/3), (4/5, -1/5), searched as share s of the way from the first corner to the
-/// point t of the opposite side.
+/// point t of the opposite side. The search runs in -ln(1 - s), in which the likelihood stays smooth up to the far bound.
 /// </summary>
 internal static class UniformCosineFit
 {
+    /// <summary>
+    /// How far towards the far bounds the search goes: g at the truncation distance then stays above 0.0005. Where it is 0, the likelihood
+    /// falls off a cliff for a distance just short of it.
+    /// </summary>
+    private const double Farthest = 0.999;
+
+    /// <summary>Half way to the far bound.</summary>
+    private static readonly double Start = Math.Log(2);
+
     public static DetectionFit Fit(DistanceSample data)
     {
         var (one, two) = (Fit(data, 1), Fit(data, 2));
         return two.Aic < one.Aic ? two : one;
     }
 
-    private static DetectionFit Fit(DistanceSample data, int terms)
+    /// <summary>With this many terms, one or two.</summary>
+    public static DetectionFit Fit(DistanceSample data, int terms)
     {
         var w = data.Truncation;
         var first = data.Distances.Select(x => Math.Cos(Math.PI * x / w)).ToArray();
@@ -22,9 +32,9 @@ internal static class UniformCosineFit
             DetectionModel.UniformCosine,
             point => new UniformCosineDetection(w, [.. Coefficients(point)]),
             [.. Enumerable.Repeat(0.0, terms)],
-            [.. Enumerable.Repeat(1.0, terms)],
-            "A coefficient is at its bound, beyond which the function would rise with distance or fall below 0.");
-        return fit.Fit(data, LogLikelihood, terms == 1 ? [0.5] : [0.5, 0.5]);
+            terms == 1 ? [-Math.Log(1 - Farthest)] : [-Math.Log(1 - Farthest), 1],
+            _ => "A coefficient is at its bound, beyond which the function would rise with distance or fall below 0.");
+        return fit.Fit(data, LogLikelihood, terms == 1 ? [Start] : [Start, 0.5]);
 
         double LogLikelihood(double[] point)
         {
@@ -43,12 +53,13 @@ internal static class UniformCosineFit
 
     private static double[] Coefficients(double[] point)
     {
+        var s = 1 - Math.Exp(-point[0]);
         if (point.Length == 1)
         {
-            return [point[0]];
+            return [s];
         }
 
-        var (s, t) = (point[0], point[1]);
+        var t = point[1];
         return [s * (((1 - t) * 4 / 3) + (t * 4 / 5)), s * (((1 - t) / 3) - (t / 5))];
     }
 }
