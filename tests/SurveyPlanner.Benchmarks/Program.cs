@@ -7,6 +7,10 @@ switch (args)
 {
     case ["detection-fits"]:
         DetectionFitStudy.Run(Console.Out);
+        DetectionFitStudy.RunTerms(Console.Out);
+        break;
+    case ["detection-parts"]:
+        DetectionPartStudy.Run(Console.Out);
         break;
     case ["pilot-intervals"]:
         PilotIntervalStudy.Run(Console.Out, 2000);
@@ -24,6 +28,6 @@ switch (args)
         BenchmarkSwitcher.FromAssembly(typeof(CoverageMemory).Assembly).Run(args);
         break;
     default:
-        Console.Error.WriteLine("Give the name of a study: detection-fits, pilot-intervals [PILOTS], interval-constructions, coverage-memory [KIND THREADS CELLS VERTICES]; or options of BenchmarkDotNet, such as --filter '*'.");
+        Console.Error.WriteLine("Give the name of a study: detection-fits, detection-parts, pilot-intervals [PILOTS], interval-constructions, coverage-memory [KIND THREADS CELLS VERTICES]; or options of BenchmarkDotNet, such as --filter '*'.");
         break;
 }

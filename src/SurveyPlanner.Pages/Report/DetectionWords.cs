@@ -18,7 +18,8 @@ internal static class DetectionWords
         }
 
         var cv = chosen.EffectiveCv is { } known ? $", with a coefficient of variation of {Figures.Percent(known)}{(fits.IsPoints ? " of its square" : "")}" : ", its variance unknown";
-        var among = fits.Fits.Length > 1 ? $" has the smallest AIC of {fits.Fits.Length} models and" : "";
+        var smallest = fits.Fits.Any(fit => fit.Aic < chosen.Aic) ? $" has the smallest AIC of those of {fits.Fits.Length} models that did not stop at a bound and" : $" has the smallest AIC of {fits.Fits.Length} models and";
+        var among = fits.Fits.Length > 1 ? smallest : "";
         return $"The {Name(chosen.Model)} model{among} gives an effective {(fits.IsPoints ? "radius" : "half-width")} of {Figures.Distance(chosen.EffectiveMetres ?? 0)}"
             + $"{cv}, from {Figures.Counted(chosen.Detections, "distance", "distances")} up to {Figures.Distance(fits.TruncationMetres)}.";
     }
@@ -34,7 +35,7 @@ internal static class DetectionWords
             [
                 Name(fit.Model) + (ReferenceEquals(fit, fits.Chosen) ? ", chosen" : ""),
                 Decimal(fit.Aic),
-                Decimal(fit.Aic - fits.Chosen?.Aic),
+                Decimal(fit.Aic - fits.Fits.Min(one => one.Aic)),
                 Figures.Three(fit.EffectiveMetres),
                 Figures.Three(100 * fit.EffectiveCv),
                 string.Join('\n', fit.Parameters.Select(Parameter)),

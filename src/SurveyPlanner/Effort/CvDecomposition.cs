@@ -17,7 +17,7 @@ public enum CvSource
 /// <summary>One component of the coefficient of variation of density.</summary>
 /// <param name="Source">What it comes from.</param>
 /// <param name="Cv">Its coefficient of variation.</param>
-/// <param name="DegreesOfFreedom">Null for many.</param>
+/// <param name="DegreesOfFreedom">Null for many; below 1 there is no interval.</param>
 /// <param name="Share">Its share of cv², 0 to 1; null when all components are 0.</param>
 public sealed record CvComponent(CvSource Source, double Cv, double? DegreesOfFreedom, double? Share);
 
@@ -34,13 +34,13 @@ public sealed record CvDecomposition(ImmutableArray<CvComponent> Components, dou
         var cv2 = parts.Sum(part => part.Cv * part.Cv);
         var cv = Math.Sqrt(cv2);
         var components = parts.Select(part => new CvComponent(
-            part.Source, part.Cv, part.DegreesOfFreedom < 1 ? null : part.DegreesOfFreedom, cv2 > 0 ? part.Cv * part.Cv / cv2 : null));
+            part.Source, part.Cv, part.DegreesOfFreedom is { } df ? Math.Max(0, df) : null, cv2 > 0 ? part.Cv * part.Cv / cv2 : null));
         if (parts.Any(part => part.DegreesOfFreedom < 1))
         {
             return new CvDecomposition([.. components], cv, null, null);
         }
 
-        var df = Satterthwaite.DegreesOfFreedom([.. parts.Select(part => (part.Cv, part.DegreesOfFreedom))]);
-        return new CvDecomposition([.. components], cv, df, LogNormalInterval.Factor(cv, df));
+        var together = Satterthwaite.DegreesOfFreedom([.. parts.Select(part => (part.Cv, part.DegreesOfFreedom))]);
+        return new CvDecomposition([.. components], cv, together, LogNormalInterval.Factor(cv, together));
     }
 }

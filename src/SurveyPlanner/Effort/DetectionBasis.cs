@@ -60,12 +60,12 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
         }
 
         advice.AddRange(OfBounds(fits, chosen, where));
-        var bootstrap = DetectionBootstrap.Of(fits);
         if ((fits.Fits.Length == 1 ? chosen.RelativeVariance : null) is { } ofFit)
         {
-            return new DetectionSource(ofFit, bootstrap.FitParts);
+            return new DetectionSource(ofFit, DetectionBootstrap.Of(fits, DetectionBootstrap.FewReplicates).FitParts);
         }
 
+        var bootstrap = DetectionBootstrap.Of(fits);
         if (bootstrap.Part is not { } part)
         {
             return Theory($"The detection function{where} has no variance", isPoints, advice);
@@ -74,8 +74,8 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
         if (chosen.RelativeVariance is { } alone)
         {
             advice.Add(new Advice(
-                FormattableString.Invariant($"Detection{where} adds {part:0.00} to b, {alone:0.00} by the {Name(chosen.Model)} fit alone: choosing among {fits.Fits.Length} models makes estimates vary otherwise than one model does. ")
-                    + "If the survey will be analysed with one model fixed beforehand, name it in the plan (models).",
+                FormattableString.Invariant($"Detection{where} adds {part:0.00} to b; by the {Name(chosen.Model)} fit alone it would be {alone:0.00}, but which of {fits.Fits.Length} models the distances choose varies too. ")
+                    + "If the survey will be analysed with one model fixed beforehand, name that alone in the plan (detection.models).",
                 "Simulated draws"));
         }
 

@@ -12,6 +12,9 @@ internal static class EffortAdvice
     // The lower end of what that advises.
     private const int FewestTransects = 10;
 
+    // Visits a point from which on a plan of visits is no plan of points.
+    private const double SomeRevisits = 1.05;
+
     // More strata with too few transects than this are told together.
     private const int MostNamed = 4;
 
@@ -91,6 +94,16 @@ internal static class EffortAdvice
         {
             yield return new Advice(
                 $"The pilot has only {pilot.Pooled.Transects} transects, so its variance is itself uncertain; take the effort as a rough figure.");
+        }
+
+        var visits = pilot.Pooled.Effort / pilot.Pooled.Transects;
+        if (pilot.IsPoints && visits > SomeRevisits)
+        {
+            var planned = plan.Required is { } required
+                ? FormattableString.Invariant($": {Figure(required.Planned)} visits are about {Math.Ceiling(required.Planned / visits):0} points")
+                : "";
+            yield return new Advice(FormattableString.Invariant(
+                $"The pilot visited its points {visits:0.#} times on average, and what is counted here as points are visits to points visited as often{planned}. As many visits to more points, fewer to each, give at least that precision."));
         }
 
         if (pilot.BeyondTruncation > 0)

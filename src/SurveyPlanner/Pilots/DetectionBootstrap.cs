@@ -15,13 +15,17 @@ internal sealed record DetectionBootstrap(double? Part, ImmutableArray<double> F
     /// <summary>A variance from so many replicates is known to 6 %.</summary>
     public const int Replicates = 500;
 
+    /// <summary>Enough for the quantiles of <see cref="FitParts"/>, where the fit has a variance of its own.</summary>
+    public const int FewReplicates = 200;
+
     /// <summary>Most distances drawn for a replicate, as many as a survey brings; the part hardly depends on their number.</summary>
     private const int MostDistances = 200;
 
     /// <summary>The pilot alone decides the draws, so that b does not change with the seed of the layout.</summary>
     private const ulong Seed = 0;
 
-    public static DetectionBootstrap Of(DetectionFits fits)
+    /// <summary>From the chosen fit, as many replicates as asked for.</summary>
+    public static DetectionBootstrap Of(DetectionFits fits, int replicates = Replicates)
     {
         if (fits.Chosen is not { Function: { } function } chosen)
         {
@@ -30,14 +34,14 @@ internal sealed record DetectionBootstrap(double? Part, ImmutableArray<double> F
 
         var models = fits.Fits.Select(fit => fit.Model).ToList();
         var count = Math.Min(chosen.Detections, MostDistances);
-        var again = Enumerable.Range(0, Replicates)
+        var again = Enumerable.Range(0, replicates)
             .AsParallel()
             .AsOrdered()
             .Select(replicate => DetectionFitting.Fit(Drawn(function, fits, count, (uint)replicate), fits.TruncationMetres, fits.IsPoints, models).Chosen)
             .Where(fit => fit is not null)
             .Select(fit => fit!)
             .ToList();
-        return again.Count < Replicates / 2
+        return again.Count < replicates / 2
             ? new DetectionBootstrap(null, [])
             : new DetectionBootstrap(
                 count * Variance([.. again.Select(fit => Math.Log(fit.Function!.Effective(fits.TruncationMetres, fits.IsPoints)))]),

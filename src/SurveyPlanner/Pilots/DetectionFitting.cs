@@ -35,6 +35,11 @@ public static class DetectionFitting
             return DetectionFit.Failed(model, 0, "There are no distances to fit.");
         }
 
+        if (model != DetectionModel.Strip && data.Distances.All(distance => distance == 0))
+        {
+            return DetectionFit.Failed(model, data.Distances.Length, "All distances are 0, so no width can be estimated; were distances written down?");
+        }
+
         return model switch
         {
             DetectionModel.Strip => StripFit(data),

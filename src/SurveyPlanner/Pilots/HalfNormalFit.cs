@@ -21,11 +21,6 @@ internal static class HalfNormalFit
     {
         var n = data.Distances.Length;
         var meanSquare = data.Distances.Sum(x => x * x) / n;
-        if (meanSquare == 0)
-        {
-            return DetectionFit.Failed(DetectionModel.HalfNormal, n, "All distances are 0, so no width can be estimated; were distances written down?");
-        }
-
         var (sigma, onBound) = Sigma(meanSquare, data.Truncation, data.IsPoints);
         var (mean, variance) = Moments(sigma, data.Truncation, data.IsPoints);
         var function = new HalfNormalDetection(sigma);

@@ -25,11 +25,6 @@ internal static class HazardRateFit
     {
         var n = data.Distances.Length;
         var mean = data.Distances.Average();
-        if (mean == 0)
-        {
-            return DetectionFit.Failed(DetectionModel.HazardRate, n, "All distances are 0, so no width can be estimated; were distances written down?");
-        }
-
         var w = data.Truncation;
         var logs = data.Distances.Select(Math.Log).ToArray();
         double[] lower = [Math.Log(NarrowestSigma * w), Math.Log(data.IsPoints ? LeastShapeOfPoints : LeastShapeOfLines)];

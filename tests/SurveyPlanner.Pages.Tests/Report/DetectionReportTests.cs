@@ -40,12 +40,25 @@ public class DetectionReportTests
         Assert.Equal(fits.Fits.Length, table.Rows.Count);
         Assert.Single(table.Rows, row => row[0].EndsWith(", chosen", StringComparison.Ordinal));
         Assert.Equal(["hazard-rate", "–", "–", "–", "–", "", "Did not converge: No maximum <was> found."], table.Rows[^1]);
-        Assert.Equal("0.0", table.Rows.Single(row => row[0].EndsWith(", chosen", StringComparison.Ordinal))[2]);
+        Assert.Equal("0.0", table.Rows[fits.Fits.IndexOf(fits.Fits.MinBy(fit => fit.Aic)!)][2]);
 
         var plan = SamplePlan.WithDistances;
         var page = ReportRenderer.Render(
             plan with { Effort = plan.Effort! with { Pilot = plan.Effort.Pilot! with { Detection = fits } } }, SamplePlan.Context);
         Assert.Contains("Did not converge: No maximum &lt;was&gt; found.", page, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void A_smaller_AIC_at_a_bound_is_not_hidden()
+    {
+        var chosen = Lines.Chosen!;
+        var worse = chosen with { Model = DetectionModel.Strip, LogLikelihood = chosen.LogLikelihood - 3 };
+        Assert.Contains("has the smallest AIC of 2 models and", DetectionWords.Finding(Lines with { Fits = [chosen, worse] }), StringComparison.Ordinal);
+
+        var bound = chosen with { Model = DetectionModel.Strip, Status = FitStatus.OnBound, LogLikelihood = chosen.LogLikelihood + 3, EffectiveCv = null };
+        var fits = Lines with { Fits = [chosen, bound] };
+        Assert.Contains("has the smallest AIC of those of 2 models that did not stop at a bound and", DetectionWords.Finding(fits), StringComparison.Ordinal);
+        Assert.Equal(["6.0", "0.0"], DetectionWords.Table(fits).Rows.Select(row => row[2]));
     }
 
     [Fact]

@@ -76,8 +76,9 @@ public class AllocationOptionTests
     [Fact]
     public void Detection_by_stratum_gives_each_stratum_its_own_fit()
     {
+        // Squares of even figures fall off with distance.
         var distances = Pilot.Transects.SelectMany(transect => Enumerable.Range(0, transect.Count)
-            .Select(i => new PilotDetection(transect.Id, ((17 * i) + (transect.Effort * 7) + (transect.Id.Length * 11)) % 97, 1)));
+            .Select(i => new PilotDetection(transect.Id, Math.Pow(((17 * i) + (transect.Effort * 7) + (transect.Id.Length * 11)) % 97, 2) / 97, 1)));
         var pilot = Pilot with { Detections = [.. distances] };
         var design = EffortDesign.None with { TargetCv = 0.15, Detection = DetectionDesign.None with { Models = [DetectionModel.HalfNormal] } };
         var apart = EffortPlanning.For(design with { Detection = design.Detection with { ByStratum = true } }, pilot, Strata, 5)!;

@@ -87,6 +87,47 @@ public class EffortPlanningTests
         Assert.Contains(hopeless.Advice, advice => advice.Message.StartsWith("No effort reaches", StringComparison.Ordinal));
     }
 
+    /// <summary>Each point visited 4 times: b holds for that, so 100 visits are 25 points.</summary>
+    [Fact]
+    public void Visits_to_points_visited_again_are_not_passed_off_as_points()
+    {
+        var points = Whole with { IsPoints = true };
+        var pilot = new PilotTable(true, [.. new[] { 3, 9, 0, 12, 5, 7 }.Select((count, i) => new PilotTransect("", $"{i}", 4, count))], []);
+        var plan = EffortPlanning.For(Target, pilot, [points], Seed)!;
+        var advice = Assert.Single(plan.Advice, advice => advice.Message.Contains("4 times on average", StringComparison.Ordinal));
+        Assert.Contains(FormattableString.Invariant($"{plan.Required!.Planned} visits are about {Math.Ceiling(plan.Required.Planned / 4)} points"), advice.Message, StringComparison.Ordinal);
+
+        var once = pilot with { Transects = [.. pilot.Transects.Select(transect => transect with { Effort = 1 })] };
+        Assert.DoesNotContain(EffortPlanning.For(Target, once, [points], Seed)!.Advice, one => one.Message.Contains("on average", StringComparison.Ordinal));
+    }
+
+    /// <summary>One detection leaves nothing to tell a variance from: 0 degrees of freedom, not many.</summary>
+    [Fact]
+    public void A_single_detection_has_no_degrees_of_freedom()
+    {
+        var pilot = new PilotTable(
+            false, [new("", "1", 2, 1), new("", "2", 2, 0), new("", "3", 2, 0)], [new("1", 30, 1)]);
+        var plan = EffortPlanning.For(
+            Target with { Detection = DetectionDesign.None with { Models = [DetectionModel.HalfNormal] } }, pilot, [Whole], Seed)!;
+        var detection = plan.PilotCv!.Components.Single(component => component.Source == CvSource.Detection);
+        Assert.Equal(0, detection.DegreesOfFreedom);
+        Assert.Null(plan.PilotCv.IntervalFactor);
+    }
+
+    [Fact]
+    public void A_fit_passed_over_at_its_bound_is_told_in_one_sentence_with_what_it_means()
+    {
+        // 30 even distances that end at 69 m of 100, as nobody sees but as a note-taker may stop.
+        var pilot = new PilotTable(
+            false,
+            [.. Enumerable.Range(0, 6).Select(k => new PilotTransect("", $"{k}", 2, 5))],
+            [.. Enumerable.Range(0, 30).Select(i => new PilotDetection($"{i % 6}", 2.3 * (i + 1), 1))]);
+        var plan = EffortPlanning.For(Target, pilot, [Whole], Seed)!;
+        var fits = plan.Pilot!.Detection!;
+        Assert.Equal(FitStatus.OnBound, fits.Fits.MinBy(fit => fit.Aic)!.Status);
+        Assert.Contains(plan.Advice, advice => advice.Message.Contains("bound", StringComparison.Ordinal) && advice.Message.Contains("cut off at", StringComparison.Ordinal));
+    }
+
     [Fact]
     public void Strata_of_the_other_kind_are_left_out_and_named()
     {
