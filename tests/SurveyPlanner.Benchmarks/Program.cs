@@ -9,8 +9,14 @@ switch (args)
         DetectionFitStudy.Run(Console.Out);
         DetectionFitStudy.RunTerms(Console.Out);
         break;
+    case ["chosen-widths"]:
+        ChosenWidthStudy.Run(Console.Out);
+        break;
     case ["detection-parts"]:
         DetectionPartStudy.Run(Console.Out);
+        break;
+    case ["chosen-model-intervals"]:
+        ChosenModelIntervalStudy.Run(Console.Out);
         break;
     case ["pilot-intervals"]:
         PilotIntervalStudy.Run(Console.Out, 2000);
@@ -28,6 +34,6 @@ switch (args)
         BenchmarkSwitcher.FromAssembly(typeof(CoverageMemory).Assembly).Run(args);
         break;
     default:
-        Console.Error.WriteLine("Give the name of a study: detection-fits, detection-parts, pilot-intervals [PILOTS], interval-constructions, coverage-memory [KIND THREADS CELLS VERTICES]; or options of BenchmarkDotNet, such as --filter '*'.");
+        Console.Error.WriteLine("Give the name of a study: detection-fits, chosen-widths, detection-parts, chosen-model-intervals, pilot-intervals [PILOTS], interval-constructions, coverage-memory [KIND THREADS CELLS VERTICES]; or options of BenchmarkDotNet, such as --filter '*'.");
         break;
 }

@@ -41,7 +41,8 @@ internal static class DetectionPartStudy
         }
     }
 
-    private static double Real(DetectionFunction truth, bool isPoints, uint scenario)
+    /// <summary>n var(ln μ̂) of surveys that choose among the models.</summary>
+    public static double Real(DetectionFunction truth, bool isPoints, uint scenario)
     {
         var logs = Enumerable.Range(0, Surveys).AsParallel().AsOrdered()
             .Select(i => Math.Log(Fits(truth, isPoints, SurveyDistances, scenario, (uint)i).Chosen!.Function!.Effective(Truncation, isPoints)))
