@@ -30,16 +30,16 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
         }
 
         var advice = new List<Advice>();
-        var pooled = Source(figures.Detection, figures.IsPoints, "", advice);
         if (!design.ByStratum || figures.Strata[0].Stratum.Length == 0)
         {
-            return new DetectionBasis(pooled, [], [.. advice]);
+            return new DetectionBasis(Source(figures.Detection, figures.IsPoints, "", advice), [], [.. advice]);
         }
 
-        var own = surveyed.Select(stratum =>
-            figures.Strata.FirstOrDefault(one => one.Stratum == stratum.Name)?.Detection is { Chosen: not null } fits
-                ? Source(fits, figures.IsPoints, $" in stratum '{stratum.Name}'", advice)
-                : pooled);
+        // Strata that have nothing to fit share the pooled source.
+        var fits = surveyed.Select(stratum => figures.Strata.FirstOrDefault(one => one.Stratum == stratum.Name)?.Detection).ToList();
+        var pooled = fits.All(one => one?.Chosen is not null) ? null : Source(figures.Detection, figures.IsPoints, "", advice);
+        var own = surveyed.Select((stratum, i) =>
+            fits[i]?.Chosen is null ? pooled! : Source(fits[i], figures.IsPoints, $" in stratum '{stratum.Name}'", advice));
         return new DetectionBasis(null, [.. own], [.. advice]);
     }
 
@@ -88,7 +88,7 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
     {
         if (chosen.Status == FitStatus.OnBound)
         {
-            yield return new Advice($"The {Name(chosen.Model)} fit{where} stopped at a bound. {chosen.Explanation}");
+            yield return new Advice($"The {Name(chosen.Model)} fit{where} stopped at a bound, so its variance comes from simulated draws. {chosen.Explanation}");
         }
         else if (fits.Fits.FirstOrDefault(fit => fit.Aic < chosen.Aic) is { } passedOver)
         {

@@ -45,7 +45,7 @@ public sealed record DetectionFit(
     /// <summary>g at the truncation distance from which on a function is as good as a strip.</summary>
     private const double LeastOfFlat = 0.99;
 
-    internal const string FlatMeaning = "Detections do not fall off with distance: the fit is at its bound, and a strip describes them as well.";
+    internal const string FlatMeaning = "Detections do not fall off with distance; a strip describes them as well.";
 
     /// <summary>Akaike's information criterion, 2 k - 2 ln L.</summary>
     public double? Aic => (2 * Parameters.Length) - (2 * LogLikelihood);

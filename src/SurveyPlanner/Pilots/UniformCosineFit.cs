@@ -33,7 +33,7 @@ internal static class UniformCosineFit
             point => new UniformCosineDetection(w, [.. Coefficients(point)]),
             [.. Enumerable.Repeat(0.0, terms)],
             terms == 1 ? [-Math.Log(1 - Farthest)] : [-Math.Log(1 - Farthest), 1],
-            _ => "A coefficient is at its bound, beyond which the function would rise with distance or fall below 0.");
+            _ => "Beyond this the function would rise with distance or fall below 0.");
         return fit.Fit(data, LogLikelihood, terms == 1 ? [Start] : [Start, 0.5]);
 
         double LogLikelihood(double[] point)
