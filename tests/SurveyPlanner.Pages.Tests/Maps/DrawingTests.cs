@@ -2,10 +2,10 @@ using System.Globalization;
 using System.Text.RegularExpressions;
 using CsCheck;
 using SurveyPlanner.Coverage;
-using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Pages.Maps;
 using SurveyPlanner.Pages.Tests.Fixtures;
 using SurveyPlanner.Regions;
+using SurveyPlanner.TestShapes;
 
 namespace SurveyPlanner.Pages.Tests.Maps;
 
@@ -24,8 +24,8 @@ public partial class DrawingTests
 
     [Fact]
     public void What_is_cut_at_the_frame_lies_inside_it_and_keeps_its_length()
-        => Gen.Select(Gen.Double[-500, 1500], Gen.Double[-500, 1100], Gen.Double[-500, 1500], Gen.Double[-500, 1100]).Check(
-            2000,
+        => Gen.Select(Gen.Double[-500, 1500], Gen.Double[-500, 1100], Gen.Double[-500, 1500], Gen.Double[-500, 1100]).Hold(
+            2000, seed: 1,
             sample =>
             {
                 var (x0, y0, x1, y1) = sample;

@@ -1,8 +1,8 @@
 using System.Globalization;
 using CsCheck;
-using SurveyPlanner.Files.Tests;
 using SurveyPlanner.Pages.Words;
 using SurveyPlanner.Regions;
+using SurveyPlanner.TestShapes;
 
 namespace SurveyPlanner.Pages.Tests.Words;
 
@@ -36,8 +36,8 @@ public class FiguresTests
 
     [Fact]
     public void Three_significant_digits_are_never_off_by_more_than_half_of_the_last()
-        => Gen.Double[1e-6, 1e9].Check(
-            20_000,
+        => Gen.Double[1e-6, 1e9].Hold(
+            20_000, seed: 1,
             value =>
             {
                 var shown = double.Parse(Figures.Three(value).Replace("\u202f", "", StringComparison.Ordinal), System.Globalization.CultureInfo.InvariantCulture);
