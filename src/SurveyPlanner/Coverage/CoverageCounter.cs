@@ -48,26 +48,63 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         }
     }
 
-    /// <summary>The counts of several counters together.</summary>
-    public static CoverageCounts Sum(IReadOnlyList<CoverageCounter> counters, int replicates)
+    /// <summary>The counts of several counters together, on as many threads. The counters are used up by it.</summary>
+    public static CoverageCounts Sum(CoverageCounter[] counters, int replicates)
     {
-        var places = counters[0]._ends.Length - 1;
+        var ends = counters[0]._ends;
+        var places = ends.Length - 1;
         var counts = new CoverageCounts(replicates, new int[places], new int[places], new int[places]);
-        var sum = default(Ends);
-        for (var i = 0; i < places; i++)
-        {
-            foreach (var counter in counters)
-            {
-                ref readonly var ends = ref counter._ends[i];
-                sum.Draws += ends.Draws;
-                sum.Repeats += ends.Repeats;
-                sum.Again += ends.Again;
-            }
+        var blocks = counters.Length;
+        int Start(int block) => (int)((long)places * block / blocks);
 
-            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Draws + sum.Repeats, sum.Again);
+        // Each thread adds up a block of places; then it knows from what to go on in the next.
+        var before = new Ends[blocks + 1];
+        ForEach(blocks, block => before[block + 1] = AddUp(counters, Start(block), Start(block + 1)));
+        for (var block = 1; block < blocks; block++)
+        {
+            before[block] = before[block].Plus(before[block - 1]);
         }
 
+        ForEach(blocks, block => WriteCounts(ends, before[block], Start(block), Start(block + 1), counts));
         return counts;
+    }
+
+    private static void ForEach(int blocks, Action<int> work)
+    {
+        if (blocks == 1)
+        {
+            work(0);
+        }
+        else
+        {
+            Parallel.For(0, blocks, work);
+        }
+    }
+
+    /// <summary>Adds all counters to the first one, for some places. Returns the sum of those.</summary>
+    private static Ends AddUp(CoverageCounter[] counters, int start, int end)
+    {
+        var (total, ends) = (default(Ends), counters[0]._ends);
+        for (var i = start; i < end; i++)
+        {
+            for (var other = 1; other < counters.Length; other++)
+            {
+                ends[i] = ends[i].Plus(counters[other]._ends[i]);
+            }
+
+            total = total.Plus(ends[i]);
+        }
+
+        return total;
+    }
+
+    private static void WriteCounts(Ends[] ends, Ends sum, int start, int end, CoverageCounts counts)
+    {
+        for (var i = start; i < end; i++)
+        {
+            sum = sum.Plus(ends[i]);
+            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Draws + sum.Repeats, sum.Again);
+        }
     }
 
     private void Cover(in Strip strip)
@@ -125,5 +162,8 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         public int Draws;
         public int Repeats;
         public int Again;
+
+        public readonly Ends Plus(Ends other)
+            => new() { Draws = Draws + other.Draws, Repeats = Repeats + other.Repeats, Again = Again + other.Again };
     }
 }

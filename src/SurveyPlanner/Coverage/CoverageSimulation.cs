@@ -31,6 +31,9 @@ internal static class CoverageSimulation
     // Draws between two reports of progress: some microseconds each on ordinary regions.
     private const int DrawsPerReport = 16;
 
+    // Draws differ in what they meet, so that equal shares would leave threads waiting; each run costs a draw more.
+    private const int RunsPerWorker = 8;
+
     /// <param name="generator">The layout.</param>
     /// <param name="grid">The places to look at.</param>
     /// <param name="replicates">Number of draws, at least 1.</param>
@@ -51,13 +54,19 @@ internal static class CoverageSimulation
     {
         var offsets = new StratifiedOffsets(seed, stratum, replicates, generator.OffsetRanges.Length);
         var workers = Math.Clamp(threads, 1, replicates);
+        var runs = workers == 1 ? 1 : Math.Min(replicates, RunsPerWorker * workers);
         var counters = new CoverageCounter[workers];
+        var next = -1;
         void Report() => progress?.Add((double)DrawsPerReport / replicates);
         void Work(int worker)
         {
-            // Each worker takes a run of neighbouring draws.
-            var (first, end) = ((int)((long)replicates * worker / workers), (int)((long)replicates * (worker + 1) / workers));
-            counters[worker] = CountRun(generator, grid, offsets, first, end, Report, stop);
+            var counter = counters[worker] = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
+            var buffer = new PieceBuffer();
+            for (int run; (run = Interlocked.Increment(ref next)) < runs;)
+            {
+                var (first, end) = ((int)((long)replicates * run / runs), (int)((long)replicates * (run + 1) / runs));
+                CountRun(generator, counter, buffer, offsets, first, end, Report, stop);
+            }
         }
 
         if (workers == 1)
@@ -73,11 +82,17 @@ internal static class CoverageSimulation
         return CoverageCounter.Sum(counters, replicates);
     }
 
-    private static CoverageCounter CountRun(
-        LayoutGenerator generator, CellGrid grid, StratifiedOffsets offsets, int first, int end, Action report, CancellationToken stop)
+    /// <summary>Counts neighbouring draws, from the first to before the end.</summary>
+    private static void CountRun(
+        LayoutGenerator generator,
+        CoverageCounter counter,
+        PieceBuffer buffer,
+        StratifiedOffsets offsets,
+        int first,
+        int end,
+        Action report,
+        CancellationToken stop)
     {
-        var counter = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
-        var buffer = new PieceBuffer();
         var drawn = new double[generator.OffsetRanges.Length];
         void Draw(int draw, bool onlyRemember)
         {
@@ -98,7 +113,5 @@ internal static class CoverageSimulation
                 report();
             }
         }
-
-        return counter;
     }
 }
