@@ -50,7 +50,21 @@ internal readonly struct SlotTable
     public int FirstFrom(double[] values, int[] firsts, double least) => least <= Last ? Find(values, firsts, least) : _end;
 
     /// <summary>Index of the first value that is larger; the end where none is.</summary>
-    public int FirstBeyond(double[] values, int[] firsts, double most) => most < Last ? Find(values, firsts, Math.BitIncrement(most)) : _end;
+    public int FirstBeyond(double[] values, int[] firsts, double most)
+    {
+        if (!(most < Last))
+        {
+            return _end;
+        }
+
+        var i = Find(values, firsts, most);
+        while (values[i] == most)
+        {
+            i++;
+        }
+
+        return i;
+    }
 
     /// <summary>Index of the first value that is at least so large as a number that is not larger than the last.</summary>
     private int Find(double[] values, int[] firsts, double number)
