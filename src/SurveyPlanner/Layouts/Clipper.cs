@@ -29,18 +29,32 @@ internal static class Clipper
     /// <summary>The parts of any straight line inside the shape, in the direction from its start to its end.</summary>
     public static void ClipSegment(FrameShape shape, double fromX, double fromY, double toX, double toY, int transect, PieceBuffer output)
     {
-        var (dx, dy) = (toX - fromX, toY - fromY);
-        var length = Math.Sqrt((dx * dx) + (dy * dy));
-        if (length == 0)
+        var lines = output.Slanted;
+        lines.Clear();
+        lines.Add(leg: 0, fromX, fromY, toX, toY);
+        shape.Tree.FindCrossings(lines);
+        ClipLeg(shape, lines, 0, transect, output);
+    }
+
+    /// <summary>
+    /// The parts of the lines of one leg inside the shape, after their crossings have been found. Returns the number of the line after them.
+    /// </summary>
+    /// <param name="shape">The shape.</param>
+    /// <param name="lines">All lines.</param>
+    /// <param name="first">Number of the first line of the leg.</param>
+    /// <param name="transect">The transect that the pieces belong to.</param>
+    /// <param name="output">Takes the pieces.</param>
+    public static int ClipLeg(FrameShape shape, SlantedLines lines, int first, int transect, PieceBuffer output)
+    {
+        var line = first;
+        for (; line < lines.Count && lines.LegOf(line) == lines.LegOf(first); line++)
         {
-            return;
+            ref readonly var segment = ref lines.Lines[line];
+            lines.CrossingsOf(line, out var cuts, out var leaves);
+            EmitSegment(cuts, IsInsideAtStart(shape, segment, cuts, leaves), segment, transect, output);
         }
 
-        var segment = new Segment(fromX, fromY, dx / length, dy / length, length);
-        var count = shape.Tree.Crossings(segment, output);
-        output.SortCrossings(count);
-        var cuts = output.Crossings.AsSpan(0, count);
-        EmitSegment(cuts, IsInsideAtStart(shape, segment, cuts, output.Leaves), segment, transect, output);
+        return line;
     }
 
     /// <summary>The x between which a shape lies at the heights from low to high; low above high when it has no part there.</summary>

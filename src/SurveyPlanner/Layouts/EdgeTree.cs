@@ -25,9 +25,9 @@ internal sealed class EdgeTree
     // Ends of the edges, eight by eight: x of their lower ends, y of those, then the same of their upper ends. What is filled up crosses nothing.
     private readonly double[] _ends;
 
-    // From boxes of edges up to a few; and the numbers of all sixteens of those.
+    // From boxes of edges up to a few; and how many sixteens those are.
     private readonly BoxLevel[] _levels;
-    private readonly int[] _top;
+    private readonly int _top;
 
     /// <param name="shape">The shape; its edges as its rings run.</param>
     /// <param name="ringStarts">Number of the first edge of each ring, and the number of edges as last entry.</param>
@@ -51,26 +51,37 @@ internal sealed class EdgeTree
         }
 
         _levels = [.. levels];
-        _top = [.. Enumerable.Range(0, (boxes.Length + BoxesPerBox - 1) / BoxesPerBox)];
+        _top = (boxes.Length + BoxesPerBox - 1) / BoxesPerBox;
     }
 
-    /// <summary>Notes where a segment crosses edges, each once, in no order. Returns how many there are.</summary>
-    public int Crossings(in Segment segment, PieceBuffer output)
+    /// <summary>Finds where lines cross edges, each edge once.</summary>
+    public void FindCrossings(SlantedLines lines)
     {
-        // Level by level; boxes of one level are independent of each other, so that the processor can look at several at a time.
-        var probe = new Probe(segment, _shape);
-        var count = Open(_levels[^1], probe, _top, output.FoundBoxes);
-        for (var level = _levels.Length - 2; level >= 0; level--)
+        var probes = lines.Probes;
+        var found = lines.RoomForMore(lines.Count * _top);
+        for (var line = 0; line < lines.Count; line++)
         {
-            count = Open(_levels[level], probe, output.FoundBoxes.AsSpan(0, count), output.MoreBoxes(BoxesPerBox * count));
-            output.SwapBoxes();
+            probes[line] = new SegmentProbe(lines.Lines[line], _shape);
+            for (var box = 0; box < _top; box++)
+            {
+                found[(line * _top) + box] = (line, box);
+            }
         }
 
-        return Cross(output.FoundBoxes.AsSpan(0, count), segment, output);
+        lines.SwapBoxes();
+        var count = lines.Count * _top;
+        for (var level = _levels.Length - 1; level >= 0; level--)
+        {
+            count = Open(_levels[level], probes, lines.Found.AsSpan(0, count), lines.RoomForMore(BoxesPerBox * count));
+            lines.SwapBoxes();
+        }
+
+        Cross(lines.Found.AsSpan(0, count), lines);
+        lines.Sort();
     }
 
-    /// <summary>Finds which boxes inside the given ones the segment meets. Returns how many.</summary>
-    private static int Open(BoxLevel level, in Probe probe, ReadOnlySpan<int> boxes, Span<int> found)
+    /// <summary>Finds which boxes inside the given ones each line meets, in the same order. Returns how many.</summary>
+    private static int Open(BoxLevel level, SegmentProbe[] probes, ReadOnlySpan<(int Line, int Box)> boxes, Span<(int Line, int Box)> found)
     {
         const int atOnce = 64 / BoxesPerBox;
         var count = 0;
@@ -79,43 +90,52 @@ internal sealed class EdgeTree
             var met = 0UL;
             for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                met |= level.Met(boxes[i], probe) << (BoxesPerBox * (i - first));
+                met |= level.Met(boxes[i].Box, probes[boxes[i].Line]) << (BoxesPerBox * (i - first));
             }
 
             for (; met != 0; met &= met - 1)
             {
                 var bit = (uint)BitOperations.TrailingZeroCount(met);
-                found[count++] = (boxes[first + (int)(bit / BoxesPerBox)] * BoxesPerBox) + (int)(bit % BoxesPerBox);
+                var (line, box) = boxes[first + (int)(bit / BoxesPerBox)];
+                found[count++] = (line, (box * BoxesPerBox) + (int)(bit % BoxesPerBox));
             }
         }
 
         return count;
     }
 
-    private int Cross(ReadOnlySpan<int> boxes, in Segment segment, PieceBuffer output)
+    private void Cross(ReadOnlySpan<(int Line, int Box)> boxes, SlantedLines lines)
     {
         const int atOnce = 64 / EdgesPerBox;
-        var count = 0;
+        var begun = 0;
         for (var first = 0; first < boxes.Length; first += atOnce)
         {
             var met = 0UL;
             for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                met |= Straddles(boxes[i], segment) << (EdgesPerBox * (i - first));
+                met |= Straddles(boxes[i].Box, lines.Lines[boxes[i].Line]) << (EdgesPerBox * (i - first));
             }
 
             for (; met != 0; met &= met - 1)
             {
                 var bit = (uint)BitOperations.TrailingZeroCount(met);
-                ref readonly var edge = ref _edges[(boxes[first + (int)(bit / EdgesPerBox)] * EdgesPerBox) + (int)(bit % EdgesPerBox)];
-                if (segment.Crosses(edge, out var along, out var leaves))
+                var (line, box) = boxes[first + (int)(bit / EdgesPerBox)];
+                for (; begun <= line; begun++)
                 {
-                    output.SetCrossing(count++, along, leaves);
+                    lines.BeginCrossings(begun);
+                }
+
+                if (lines.Lines[line].Crosses(_edges[(box * EdgesPerBox) + (int)(bit % EdgesPerBox)], out var along, out var leaves))
+                {
+                    lines.AddCrossing(along, leaves);
                 }
             }
         }
 
-        return count;
+        for (; begun < lines.Count; begun++)
+        {
+            lines.BeginCrossings(begun);
+        }
     }
 
     /// <summary>Of the eight edges in a box, one bit for each whose ends lie on different sides of the segment's line.</summary>
@@ -171,52 +191,6 @@ internal sealed class EdgeTree
     }
 
     /// <summary>
-    /// A segment as boxes see it, in single precision, which is enough to tell what can be skipped. From the middle of the shape, metres.
-    /// </summary>
-    private readonly struct Probe
-    {
-        // Far above what single precision rounds off, in parts of the lengths it is reckoned from.
-        private const double Margin = 4e-6;
-
-        private readonly float _middleX;
-        private readonly float _middleY;
-        private readonly float _directionX;
-        private readonly float _directionY;
-        private readonly float _steepness;
-        private readonly float _flatness;
-        private readonly float _reachX;
-        private readonly float _reachY;
-        private readonly float _reachBeside;
-
-        public Probe(in Segment segment, FrameShape shape)
-        {
-            var (x, y) = (segment.MiddleX - ((shape.MinX + shape.MaxX) / 2), segment.MiddleY - ((shape.MinY + shape.MaxY) / 2));
-            var margin = Margin * ((shape.MaxX - shape.MinX) + (shape.MaxY - shape.MinY) + segment.Length + Math.Abs(x) + Math.Abs(y));
-            (_middleX, _middleY) = ((float)x, (float)y);
-            (_directionX, _directionY) = ((float)segment.DirectionX, (float)segment.DirectionY);
-            (_steepness, _flatness) = (Math.Abs(_directionY), Math.Abs(_directionX));
-            _reachX = (float)((Math.Abs(segment.DirectionX) * segment.Length / 2) + margin);
-            _reachY = (float)((Math.Abs(segment.DirectionY) * segment.Length / 2) + margin);
-            _reachBeside = (float)margin;
-        }
-
-        /// <summary>One bit for each of sixteen boxes that the segment meets.</summary>
-        public ulong Meets(Vector512<float> boxX, Vector512<float> boxY, Vector512<float> halfX, Vector512<float> halfY)
-        {
-            // A segment misses a box where a line along x, along y or along the segment parts them.
-            var fromX = boxX - Vector512.Create(_middleX);
-            var fromY = boxY - Vector512.Create(_middleY);
-            var beside = Vector512.MultiplyAddEstimate(fromY, Vector512.Create(_directionX), fromX * Vector512.Create(-_directionY));
-            var reach = Vector512.MultiplyAddEstimate(halfX, Vector512.Create(_steepness), Vector512.Create(_reachBeside));
-            reach = Vector512.MultiplyAddEstimate(halfY, Vector512.Create(_flatness), reach);
-            return (Vector512.LessThanOrEqual(Vector512.Abs(beside), reach)
-                & Vector512.LessThanOrEqual(Vector512.Abs(fromX), halfX + Vector512.Create(_reachX))
-                & Vector512.LessThanOrEqual(Vector512.Abs(fromY), halfY + Vector512.Create(_reachY)))
-                .ExtractMostSignificantBits();
-        }
-    }
-
-    /// <summary>
     /// Boxes by their middles, from the middle of the shape, and half sides, metres, sixteen by sixteen: x and y of middles, then halves along x and y.
     /// What is filled up meets nothing.
     /// </summary>
@@ -226,7 +200,6 @@ internal sealed class EdgeTree
 
         public BoxLevel(Box[] boxes, FrameShape shape)
         {
-            var (centreX, centreY) = ((shape.MinX + shape.MaxX) / 2, (shape.MinY + shape.MaxY) / 2);
             _boxes = new float[4 * RoundedUp(boxes.Length, BoxesPerBox)];
             Array.Fill(_boxes, float.NaN);
             for (var i = 0; i < boxes.Length; i++)
@@ -236,15 +209,15 @@ internal sealed class EdgeTree
                     _boxes,
                     i,
                     BoxesPerBox,
-                    (float)(((box.LowX + box.HighX) / 2) - centreX),
-                    (float)(((box.LowY + box.HighY) / 2) - centreY),
+                    (float)(((box.LowX + box.HighX) / 2) - shape.MiddleX),
+                    (float)(((box.LowY + box.HighY) / 2) - shape.MiddleY),
                     (float)((box.HighX - box.LowX) / 2),
                     (float)((box.HighY - box.LowY) / 2));
             }
         }
 
         /// <summary>Of the sixteen boxes in a box, one bit for each that the segment meets.</summary>
-        public ulong Met(int box, in Probe probe)
+        public ulong Met(int box, in SegmentProbe probe)
         {
             ref var first = ref _boxes[4 * BoxesPerBox * box];
             return probe.Meets(

@@ -34,6 +34,5 @@ internal sealed class EqualSpacedPath(HullSides hull, double spacingMetres) : Zi
         }
     }
 
-    public override void AddLeg(Turn from, Turn to, FrameShape clip, int transect, PieceBuffer output)
-        => Clipper.ClipSegment(clip, from.X, from.Y, to.X, to.Y, transect, output);
+    public override void AddLeg(Turn from, Turn to, int leg, SlantedLines output) => output.Add(leg, from.X, from.Y, to.X, to.Y);
 }

@@ -59,6 +59,12 @@ internal sealed class FrameShape
 
     public double MaxY { get; }
 
+    /// <summary>Middle of the bounding box.</summary>
+    public double MiddleX => (MinX + MaxX) / 2;
+
+    /// <summary>Middle of the bounding box.</summary>
+    public double MiddleY => (MinY + MaxY) / 2;
+
     public double AreaSquareMetres { get; }
 
     /// <summary>All edges, by number.</summary>

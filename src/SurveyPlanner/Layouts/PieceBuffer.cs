@@ -6,19 +6,14 @@ namespace SurveyPlanner.Layouts;
 /// </summary>
 internal sealed class PieceBuffer
 {
-    // So few crossings are put in order one by one, quicker than by the library.
-    private const int Few = 32;
-
     private Piece[] _pieces = new Piece[256];
 
-    private bool[] _leaves = new bool[64];
-    private int[] _moreBoxes = new int[256];
 
     /// <summary>Room for the crossings of one line; see <see cref="FrameShape.CrossingsAt"/>.</summary>
     public double[] Crossings = new double[64];
 
-    /// <summary>Room for the boxes of a tree that a slanted line meets.</summary>
-    public int[] FoundBoxes { get; private set; } = new int[256];
+    /// <summary>Room for slanted lines and their crossings.</summary>
+    public SlantedLines Slanted { get; } = new();
 
     /// <summary>Room for the turns of one zigzag.</summary>
     public List<Turn> Turns { get; } = [];
@@ -49,61 +44,6 @@ internal sealed class PieceBuffer
     }
 
     public void Clear() => Count = 0;
-
-    /// <summary>Room for so many boxes of the next level.</summary>
-    public Span<int> MoreBoxes(int count)
-    {
-        if (_moreBoxes.Length < count)
-        {
-            _moreBoxes = new int[2 * count];
-        }
-
-        return _moreBoxes;
-    }
-
-    /// <summary>The boxes of the next level are those found now.</summary>
-    public void SwapBoxes() => (FoundBoxes, _moreBoxes) = (_moreBoxes, FoundBoxes);
-
-    /// <summary>Whether each crossing of a slanted line goes from the inside to the outside.</summary>
-    public ReadOnlySpan<bool> Leaves => _leaves;
-
-    /// <summary>Notes one crossing of a slanted line: where on the line, and whether it leaves the inside there.</summary>
-    public void SetCrossing(int index, double along, bool leaves)
-    {
-        if (index >= Crossings.Length)
-        {
-            Array.Resize(ref Crossings, 2 * index);
-        }
-
-        if (index >= _leaves.Length)
-        {
-            Array.Resize(ref _leaves, 2 * index);
-        }
-
-        (Crossings[index], _leaves[index]) = (along, leaves);
-    }
-
-    /// <summary>Sorts the first crossings by their place on the line.</summary>
-    public void SortCrossings(int count)
-    {
-        if (count > Few)
-        {
-            Crossings.AsSpan(0, count).Sort(_leaves.AsSpan(0, count));
-            return;
-        }
-
-        for (var i = 1; i < count; i++)
-        {
-            var (along, leaves) = (Crossings[i], _leaves[i]);
-            var at = i;
-            for (; at > 0 && Crossings[at - 1] > along; at--)
-            {
-                (Crossings[at], _leaves[at]) = (Crossings[at - 1], _leaves[at - 1]);
-            }
-
-            (Crossings[at], _leaves[at]) = (along, leaves);
-        }
-    }
 
     public void Add(int transect, double fromX, double fromY, double toX, double toY)
     {

@@ -71,7 +71,7 @@ internal sealed class SwingPath : ZigzagPath
     /// <summary>Where the path turns next, up the axis, after a turn at height y on the given side.</summary>
     public double NextTurn(double y, bool fromLeft) => NextTurn(_up, y, fromLeft);
 
-    public override void AddLeg(Turn from, Turn to, FrameShape clip, int transect, PieceBuffer output)
+    public override void AddLeg(Turn from, Turn to, int leg, SlantedLines output)
     {
         var rising = from.Y < to.Y;
         var (band, sign) = rising ? (_up, 1) : (_down, -1);
@@ -82,7 +82,7 @@ internal sealed class SwingPath : ZigzagPath
         {
             var nextY = start + ((double)chord / chords * (end - start));
             var nextX = chord == chords ? to.X : x + ((from.IsLeft ? 1 : -1) * Sideways(band, y, nextY));
-            Clipper.ClipSegment(clip, x, sign * y, nextX, sign * nextY, transect, output);
+            output.Add(leg, x, sign * y, nextX, sign * nextY);
             (x, y) = (nextX, nextY);
         }
     }

@@ -53,15 +53,22 @@ internal sealed class Zigzag : LayoutGenerator
 
     public override void Realise(ReadOnlySpan<double> offsets, ref PhiloxStream random, PieceBuffer output)
     {
-        var (turns, transect) = (output.Turns, 0);
+        var (turns, lines, transect) = (output.Turns, output.Slanted, 0);
         for (var pass = 0; pass < Passes; pass++)
         {
             turns.Clear();
+            lines.Clear();
             _path.AddTurns(offsets[0], mirrored: pass == 1, turns);
-            for (var i = 1; i < turns.Count; i++)
+            for (var leg = 1; leg < turns.Count; leg++)
+            {
+                _path.AddLeg(turns[leg - 1], turns[leg], leg, lines);
+            }
+
+            Stratum.Clip.Tree.FindCrossings(lines);
+            for (var line = 0; line < lines.Count;)
             {
                 var before = output.Count;
-                _path.AddLeg(turns[i - 1], turns[i], Stratum.Clip, transect, output);
+                line = Clipper.ClipLeg(Stratum.Clip, lines, line, transect, output);
                 transect += output.KeepStretches(before, Design.MinLengthMetres) ? 1 : 0;
             }
         }

@@ -24,6 +24,6 @@ internal abstract class ZigzagPath
     /// <param name="turns">Takes the turns, in order of travel.</param>
     public abstract void AddTurns(double share, bool mirrored, List<Turn> turns);
 
-    /// <summary>Adds what the shape leaves of the leg between two turns that follow one another.</summary>
-    public abstract void AddLeg(Turn from, Turn to, FrameShape clip, int transect, PieceBuffer output);
+    /// <summary>Adds the lines of the leg between two turns that follow one another.</summary>
+    public abstract void AddLeg(Turn from, Turn to, int leg, SlantedLines output);
 }

@@ -9,29 +9,38 @@ namespace SurveyPlanner.Tests.Layouts;
 public class EdgeTreeTests
 {
     [Fact]
-    public void A_segment_finds_all_edges_that_it_crosses_and_each_once()
+    public void Lines_find_all_edges_that_they_cross_and_each_once()
     {
         var crossings = 0;
         foreach (var stratum in RandomShapes.Sample(100).Append(Islands(3000)))
         {
             var shape = new FrameShape(stratum.Shape, new TurnedFrame(0.4));
-            var output = new PieceBuffer();
-            foreach (var segment in Segments(shape, 300))
+            var lines = new SlantedLines();
+            foreach (var batch in Lines(shape, 300).Chunk(37))
             {
-                var found = shape.Tree.Crossings(segment, output);
-                output.SortCrossings(found);
-                var expected = new List<(double Along, bool Leaves)>();
-                foreach (ref readonly var edge in shape.Edges)
+                lines.Clear();
+                foreach (var (fromX, fromY, toX, toY) in batch)
                 {
-                    if (segment.Crosses(edge, out var along, out var leaves))
-                    {
-                        expected.Add((along, leaves));
-                    }
+                    lines.Add(leg: 0, fromX, fromY, toX, toY);
                 }
 
-                Assert.Equal(expected.Select(one => one.Along).Order(), output.Crossings[..found]);
-                Assert.Equal(expected.Count(one => one.Leaves), output.Leaves[..found].ToArray().Count(leaves => leaves));
-                crossings += found;
+                shape.Tree.FindCrossings(lines);
+                for (var line = 0; line < lines.Count; line++)
+                {
+                    var expected = new List<(double Along, bool Leaves)>();
+                    foreach (ref readonly var edge in shape.Edges)
+                    {
+                        if (lines.Lines[line].Crosses(edge, out var along, out var leaves))
+                        {
+                            expected.Add((along, leaves));
+                        }
+                    }
+
+                    lines.CrossingsOf(line, out var found, out var foundLeaves);
+                    Assert.Equal(expected.Select(one => one.Along).Order(), found.ToArray());
+                    Assert.Equal(expected.Count(one => one.Leaves), foundLeaves.ToArray().Count(leaves => leaves));
+                    crossings += found.Length;
+                }
             }
         }
 
@@ -47,7 +56,7 @@ public class EdgeTreeTests
     }
 
     /// <summary>Long and short ones, some through vertices, along x and y, from outside, and far away.</summary>
-    private static IEnumerable<Segment> Segments(FrameShape shape, int count)
+    private static IEnumerable<(double FromX, double FromY, double ToX, double ToY)> Lines(FrameShape shape, int count)
     {
         var random = new PhiloxStream(1, 99, 0, 0);
         var (width, height) = (shape.MaxX - shape.MinX, shape.MaxY - shape.MinY);
@@ -74,11 +83,7 @@ public class EdgeTreeTests
             }
 
             (toX, toY) = (n % 7 == 0 ? fromX : toX, n % 11 == 0 ? fromY : toY);
-            var length = Math.Sqrt(((toX - fromX) * (toX - fromX)) + ((toY - fromY) * (toY - fromY)));
-            if (length > 0)
-            {
-                yield return new Segment(fromX, fromY, (toX - fromX) / length, (toY - fromY) / length, length);
-            }
+            yield return (fromX, fromY, toX, toY);
         }
     }
 }
