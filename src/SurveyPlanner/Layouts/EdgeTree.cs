@@ -16,9 +16,6 @@ internal sealed class EdgeTree
     private const int EdgesPerBox = 8;
     private const int BoxesPerBox = 16;
 
-    // So many boxes are looked at one and all: a level more would not pay.
-    private const int MostAtTop = 8 * BoxesPerBox;
-
     private readonly FrameShape _shape;
     private readonly FrameShape.Edge[] _edges;
 
@@ -44,7 +41,7 @@ internal sealed class EdgeTree
 
         var boxes = Array.ConvertAll(_edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
         var levels = new List<BoxLevel>();
-        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > MostAtTop; inEach = BoxesPerBox)
+        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > BoxesPerBox; inEach = BoxesPerBox)
         {
             boxes = [.. boxes.Chunk(inEach).Select(Box.Round)];
             levels.Add(new BoxLevel(boxes, shape));
@@ -169,7 +166,10 @@ internal sealed class EdgeTree
             next += end - start;
         }
 
-        return ordered;
+        const int together = EdgesPerBox * BoxesPerBox;
+        var whole = ordered.Length / together * together;
+        var stretches = ordered[..whole].Chunk(together).OrderBy(stretch => stretch.Min(edge => edge.LowY) + stretch.Max(edge => edge.HighY));
+        return [.. stretches.SelectMany(stretch => stretch), .. ordered[whole..]];
     }
 
     /// <summary>The sixteen bits of a number with a gap after each.</summary>
