@@ -75,15 +75,14 @@ internal sealed class CellGrid
     /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
     public int FirstRowFrom(double y) => _rows.FirstFrom(RowY, _rowSlots, y);
 
+    /// <summary>Whether a row has places on either side of some x or between them. Most rows at a coast hold a place or two, which most ranges miss.</summary>
+    public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last && high >= _rowPlaces[row].First;
+
     /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end, not after it where there are none.</summary>
     public (int First, int End) Run(int row, double low, double high)
     {
         ref readonly var places = ref _rowPlaces[row];
-
-        // Most rows at a coast hold a place or two, which most ranges miss.
-        return high < places.First || low > places.Last
-            ? (0, 0)
-            : (places.FirstFrom(X, _placeSlots, low), places.FirstBeyond(X, _placeSlots, high));
+        return (places.FirstFrom(X, _placeSlots, low), places.FirstBeyond(X, _placeSlots, high));
     }
 }
 

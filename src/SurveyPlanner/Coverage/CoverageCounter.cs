@@ -16,6 +16,8 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     // One more than there are places: a run may end behind the last.
     private readonly Ends[] _ends = new Ends[grid.Count + 1];
 
+    private Stretch[] _stretches = new Stretch[256];
+    private int _stretchCount;
     private RowRuns _now = new(grid.RowY.Length);
     private RowRuns _before = new(grid.RowY.Length);
 
@@ -26,9 +28,19 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     {
         (_now, _before) = (_before, _now);
         _now.Clear();
+        _stretchCount = 0;
         foreach (ref readonly var piece in pieces)
         {
             Cover(new Strip(piece, halfWidthMetres));
+        }
+
+        foreach (ref readonly var stretch in _stretches.AsSpan(0, _stretchCount))
+        {
+            var (first, end) = grid.Run(stretch.Row, stretch.Low, stretch.High);
+            if (first < end)
+            {
+                _now.Add(stretch.Row, first, end);
+            }
         }
 
         if (onlyRemember)
@@ -113,12 +125,22 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         for (var row = grid.FirstRowFrom(strip.LowY); row < rowY.Length && rowY[row] <= strip.HighY; row++)
         {
             strip.RangeAt(rowY[row], out var low, out var high);
-            var (first, end) = grid.Run(row, low, high);
-            if (first < end)
+            if (grid.MayHold(row, low, high))
             {
-                _now.Add(row, first, end);
+                AddStretch(row, low, high);
             }
         }
+    }
+
+    private void AddStretch(int row, double low, double high)
+    {
+        if (_stretchCount == _stretches.Length)
+        {
+            Array.Resize(ref _stretches, 2 * _stretchCount);
+        }
+
+        ref var stretch = ref _stretches[_stretchCount++];
+        (stretch.Row, stretch.Low, stretch.High) = (row, low, high);
     }
 
     private void CountRow(int row)
@@ -158,6 +180,14 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 
     /// <summary>The larger of two indices, without a branch, which would be foretold wrongly every other time.</summary>
     private static int Larger(int a, int b) => a + ((b - a) & ~((b - a) >> 31));
+
+    /// <summary>From where to where a strip covers a row.</summary>
+    private struct Stretch
+    {
+        public int Row;
+        public double Low;
+        public double High;
+    }
 
     /// <summary>What changes from one place to the next; the three side by side, since they mostly change at the same places.</summary>
     private struct Ends

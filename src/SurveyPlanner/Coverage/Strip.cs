@@ -31,13 +31,12 @@ internal readonly ref struct Strip
         }
         else
         {
-            var length = piece.Length;
-            var (alongX, alongY) = ((piece.ToX - piece.FromX) / length, (piece.ToY - piece.FromY) / length);
-            (_shiftAlong, var half) = Stretch(alongX, alongY, length / 2);
+            var (dx, dy, length) = (piece.ToX - piece.FromX, piece.ToY - piece.FromY, piece.Length);
+            (_shiftAlong, var half) = Stretch(dx, dy, length * length / 2);
             (_lowAlong, _highAlong) = (_middleX - half, _middleX + half);
-            (_shiftAcross, half) = Stretch(-alongY, alongX, halfWidthMetres);
+            (_shiftAcross, half) = Stretch(-dy, dx, halfWidthMetres * length);
             (_lowAcross, _highAcross) = (_middleX - half, _middleX + half);
-            reach = (Math.Abs(alongY) * length / 2) + (Math.Abs(alongX) * halfWidthMetres);
+            reach = (Math.Abs(dy) / 2) + (Math.Abs(dx) * halfWidthMetres / length);
         }
 
         (LowY, HighY) = (_middleY - reach, _middleY + reach);
@@ -67,5 +66,8 @@ internal readonly ref struct Strip
 
     /// <summary>|x · slopeX + y · slopeY| is at most the limit: on a line of constant y a stretch of x, endless where x does not matter.</summary>
     private static (double ShiftPerMetre, double HalfLength) Stretch(double slopeX, double slopeY, double limit)
-        => slopeX == 0 ? (0, double.PositiveInfinity) : (-slopeY / slopeX, limit / Math.Abs(slopeX));
+    {
+        var inverse = 1 / slopeX;
+        return slopeX == 0 ? (0, double.PositiveInfinity) : (-slopeY * inverse, limit * Math.Abs(inverse));
+    }
 }

@@ -54,11 +54,12 @@ internal sealed class EdgeTree
     /// <summary>Finds where lines cross edges, each edge once.</summary>
     public void FindCrossings(SlantedLines lines)
     {
+        var segments = lines.Lines;
         var probes = lines.Probes;
         var found = lines.RoomForMore(lines.Count * _top);
         for (var line = 0; line < lines.Count; line++)
         {
-            probes[line] = new SegmentProbe(lines.Lines[line], _shape);
+            probes[line] = new SegmentProbe(segments[line], _shape);
             for (var box = 0; box < _top; box++)
             {
                 found[(line * _top) + box] = (line, box);
@@ -104,13 +105,14 @@ internal sealed class EdgeTree
     private void Cross(ReadOnlySpan<(int Line, int Box)> boxes, SlantedLines lines)
     {
         const int atOnce = 64 / EdgesPerBox;
+        var segments = lines.Lines;
         var begun = 0;
         for (var first = 0; first < boxes.Length; first += atOnce)
         {
             var met = 0UL;
             for (var i = first; i < Math.Min(first + atOnce, boxes.Length); i++)
             {
-                met |= Straddles(boxes[i].Box, lines.Lines[boxes[i].Line]) << (EdgesPerBox * (i - first));
+                met |= Straddles(boxes[i].Box, segments[boxes[i].Line]) << (EdgesPerBox * (i - first));
             }
 
             for (; met != 0; met &= met - 1)
@@ -122,7 +124,7 @@ internal sealed class EdgeTree
                     lines.BeginCrossings(begun);
                 }
 
-                if (lines.Lines[line].Crosses(_edges[(box * EdgesPerBox) + (int)(bit % EdgesPerBox)], out var along, out var leaves))
+                if (segments[line].Crosses(_edges[(box * EdgesPerBox) + (int)(bit % EdgesPerBox)], out var along, out var leaves))
                 {
                     lines.AddCrossing(along, leaves);
                 }
