@@ -17,10 +17,10 @@ internal sealed class EdgeTree
     private const int BoxesPerBox = 16;
 
     private readonly FrameShape _shape;
-    private readonly FrameShape.Edge[] _edges;
 
     // Ends of the edges, eight by eight: x of their lower ends, y of those, then the same of their upper ends. What is filled up crosses nothing.
     private readonly double[] _ends;
+    private readonly bool[] _insideLeft;
 
     // From boxes of edges up to a few; and how many sixteens those are.
     private readonly BoxLevel[] _levels;
@@ -31,15 +31,16 @@ internal sealed class EdgeTree
     public EdgeTree(FrameShape shape, ReadOnlySpan<int> ringStarts)
     {
         _shape = shape;
-        _edges = InOrder(shape, ringStarts);
-        _ends = new double[4 * RoundedUp(_edges.Length, EdgesPerBox)];
-        for (var i = 0; i < _edges.Length; i++)
+        var edges = InOrder(shape, ringStarts);
+        _insideLeft = Array.ConvertAll(edges, edge => edge.InsideLeft);
+        _ends = new double[4 * RoundedUp(edges.Length, EdgesPerBox)];
+        for (var i = 0; i < edges.Length; i++)
         {
-            ref readonly var edge = ref _edges[i];
+            ref readonly var edge = ref edges[i];
             Blocks.Set(_ends, i, EdgesPerBox, edge.LowX, edge.LowY, edge.HighX, edge.HighY);
         }
 
-        var boxes = Array.ConvertAll(_edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
+        var boxes = Array.ConvertAll(edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
         var levels = new List<BoxLevel>();
         for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > BoxesPerBox; inEach = BoxesPerBox)
         {
@@ -124,7 +125,7 @@ internal sealed class EdgeTree
                     lines.BeginCrossings(begun);
                 }
 
-                if (segments[line].Crosses(_edges[(box * EdgesPerBox) + (int)(bit % EdgesPerBox)], out var along, out var leaves))
+                if (segments[line].Crosses(EdgeAt(box, (int)(bit % EdgesPerBox)), out var along, out var leaves))
                 {
                     lines.AddCrossing(along, leaves);
                 }
@@ -135,6 +136,13 @@ internal sealed class EdgeTree
         {
             lines.BeginCrossings(begun);
         }
+    }
+
+    private FrameShape.Edge EdgeAt(int box, int number)
+    {
+        var ends = _ends.AsSpan((4 * EdgesPerBox * box) + number);
+        return new FrameShape.Edge(
+            ends[0], ends[EdgesPerBox], ends[2 * EdgesPerBox], ends[3 * EdgesPerBox], _insideLeft[(box * EdgesPerBox) + number]);
     }
 
     /// <summary>Of the eight edges in a box, one bit for each whose ends lie on different sides of the segment's line.</summary>
