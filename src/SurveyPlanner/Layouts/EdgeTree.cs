@@ -7,10 +7,6 @@ namespace SurveyPlanner.Layouts;
 /// The edges of a shape under a tree of bounding boxes: a slanted line looks only into the boxes that it passes through, at sixteen of them, or at
 /// eight edges, at once. Safe to share between threads.
 /// </summary>
-/// <remarks>
-/// Edges that follow one another lie near each other, so the rings' own order makes small boxes. Rings are put in order along a curve that fills
-/// the plane (Morton 1966), so that small islands next to each other share a box.
-/// </remarks>
 internal sealed class EdgeTree
 {
     private const int EdgesPerBox = 8;
@@ -22,34 +18,35 @@ internal sealed class EdgeTree
     private readonly double[] _ends;
     private readonly bool[] _insideLeft;
 
-    // From boxes of edges up to a few; and how many sixteens those are.
+    // From boxes of edges up to at most sixteen.
     private readonly BoxLevel[] _levels;
-    private readonly int _top;
 
     /// <param name="shape">The shape; its edges as its rings run.</param>
     /// <param name="ringStarts">Number of the first edge of each ring, and the number of edges as last entry.</param>
     public EdgeTree(FrameShape shape, ReadOnlySpan<int> ringStarts)
     {
         _shape = shape;
-        var edges = InOrder(shape, ringStarts);
-        _insideLeft = Array.ConvertAll(edges, edge => edge.InsideLeft);
-        _ends = new double[4 * RoundedUp(edges.Length, EdgesPerBox)];
-        for (var i = 0; i < edges.Length; i++)
+        var order = EdgeOrder.Of(shape, ringStarts, together: EdgesPerBox * BoxesPerBox);
+        _insideLeft = new bool[order.Length];
+        _ends = new double[4 * EdgesPerBox * Shares(order.Length, EdgesPerBox)];
+        var boxes = new Box[order.Length];
+        for (var i = 0; i < order.Length; i++)
         {
-            ref readonly var edge = ref edges[i];
+            ref readonly var edge = ref shape.Edges[order[i]];
+            _insideLeft[i] = edge.InsideLeft;
             Blocks.Set(_ends, i, EdgesPerBox, edge.LowX, edge.LowY, edge.HighX, edge.HighY);
+            boxes[i] = new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY);
         }
 
-        var boxes = Array.ConvertAll(edges, edge => new Box(Math.Min(edge.LowX, edge.HighX), Math.Max(edge.LowX, edge.HighX), edge.LowY, edge.HighY));
-        var levels = new List<BoxLevel>();
-        for (var inEach = EdgesPerBox; inEach == EdgesPerBox || boxes.Length > BoxesPerBox; inEach = BoxesPerBox)
+        boxes = Box.RoundEvery(EdgesPerBox, boxes);
+        var levels = new List<BoxLevel> { new(boxes, shape) };
+        while (boxes.Length > BoxesPerBox)
         {
-            boxes = [.. boxes.Chunk(inEach).Select(Box.Round)];
+            boxes = Box.RoundEvery(BoxesPerBox, boxes);
             levels.Add(new BoxLevel(boxes, shape));
         }
 
         _levels = [.. levels];
-        _top = (boxes.Length + BoxesPerBox - 1) / BoxesPerBox;
     }
 
     /// <summary>Finds where lines cross edges, each edge once.</summary>
@@ -57,18 +54,15 @@ internal sealed class EdgeTree
     {
         var segments = lines.Lines;
         var probes = lines.Probes;
-        var found = lines.RoomForMore(lines.Count * _top);
+        var all = lines.RoomForMore(lines.Count);
         for (var line = 0; line < lines.Count; line++)
         {
             probes[line] = new SegmentProbe(segments[line], _shape);
-            for (var box = 0; box < _top; box++)
-            {
-                found[(line * _top) + box] = (line, box);
-            }
+            all[line] = (line, 0);
         }
 
         lines.SwapBoxes();
-        var count = lines.Count * _top;
+        var count = lines.Count;
         for (var level = _levels.Length - 1; level >= 0; level--)
         {
             count = Open(_levels[level], probes, lines.Found.AsSpan(0, count), lines.RoomForMore(BoxesPerBox * count));
@@ -155,49 +149,26 @@ internal sealed class EdgeTree
             .ExtractMostSignificantBits();
     }
 
-    private static FrameShape.Edge[] InOrder(FrameShape shape, ReadOnlySpan<int> ringStarts)
-    {
-        var edges = shape.Edges;
-        var rings = new (uint Code, int Start, int End)[ringStarts.Length - 1];
-        var scale = ushort.MaxValue / Math.Max(Math.Max(shape.MaxX - shape.MinX, shape.MaxY - shape.MinY), double.Epsilon);
-        for (var ring = 0; ring < rings.Length; ring++)
-        {
-            ref readonly var edge = ref edges[ringStarts[ring]];
-            var (column, row) = ((ushort)((edge.LowX - shape.MinX) * scale), (ushort)((edge.LowY - shape.MinY) * scale));
-            rings[ring] = (Spread(column) | (Spread(row) << 1), ringStarts[ring], ringStarts[ring + 1]);
-        }
-
-        Array.Sort(rings);
-        var ordered = new FrameShape.Edge[edges.Length];
-        var next = 0;
-        foreach (var (_, start, end) in rings)
-        {
-            edges[start..end].CopyTo(ordered.AsSpan(next));
-            next += end - start;
-        }
-
-        const int together = EdgesPerBox * BoxesPerBox;
-        var whole = ordered.Length / together * together;
-        var stretches = ordered[..whole].Chunk(together).OrderBy(stretch => stretch.Min(edge => edge.LowY) + stretch.Max(edge => edge.HighY));
-        return [.. stretches.SelectMany(stretch => stretch), .. ordered[whole..]];
-    }
-
-    /// <summary>The sixteen bits of a number with a gap after each.</summary>
-    private static uint Spread(ushort number)
-    {
-        uint bits = number;
-        bits = (bits | (bits << 8)) & 0x00FF00FF;
-        bits = (bits | (bits << 4)) & 0x0F0F0F0F;
-        bits = (bits | (bits << 2)) & 0x33333333;
-        return (bits | (bits << 1)) & 0x55555555;
-    }
-
-    private static int RoundedUp(int count, int to) => (count + to - 1) / to * to;
+    /// <summary>How many shares of so many there are, the last perhaps smaller.</summary>
+    private static int Shares(int count, int inEach) => (count + inEach - 1) / inEach;
 
     private readonly record struct Box(double LowX, double HighX, double LowY, double HighY)
     {
-        public static Box Round(Box[] boxes)
-            => new(boxes.Min(box => box.LowX), boxes.Max(box => box.HighX), boxes.Min(box => box.LowY), boxes.Max(box => box.HighY));
+        /// <summary>The boxes round the first so many, round as many after them, and so on.</summary>
+        public static Box[] RoundEvery(int inEach, Box[] boxes)
+        {
+            var round = new Box[Shares(boxes.Length, inEach)];
+            for (var i = 0; i < boxes.Length; i++)
+            {
+                var (box, into) = (boxes[i], i / inEach);
+                round[into] = i % inEach == 0 ? box : round[into].With(box);
+            }
+
+            return round;
+        }
+
+        private Box With(Box other)
+            => new(Math.Min(LowX, other.LowX), Math.Max(HighX, other.HighX), Math.Min(LowY, other.LowY), Math.Max(HighY, other.HighY));
     }
 
     /// <summary>
@@ -210,7 +181,7 @@ internal sealed class EdgeTree
 
         public BoxLevel(Box[] boxes, FrameShape shape)
         {
-            _boxes = new float[4 * RoundedUp(boxes.Length, BoxesPerBox)];
+            _boxes = new float[4 * BoxesPerBox * Shares(boxes.Length, BoxesPerBox)];
             Array.Fill(_boxes, float.NaN);
             for (var i = 0; i < boxes.Length; i++)
             {
