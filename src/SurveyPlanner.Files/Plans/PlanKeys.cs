@@ -175,7 +175,7 @@ internal static class PlanKeys
         doc: "Number of cells over the whole region; without it so many that the smallest stratum has at least 500.");
 
     public static readonly PlanKey<long> Replicates = Add(
-        "coverage", "replicates", new WholeReader(2, 1_000_000), "1000", @default: (long)CoverageDesign.DefaultReplicates,
+        "coverage", "replicates", new WholeReader(2, CoverageDesign.MostReplicates), "1000", @default: (long)CoverageDesign.DefaultReplicates,
         doc: "Number of simulated draws of the layout.");
 
     // [precision]

@@ -54,6 +54,7 @@ internal static class CoverageWords
         CoverageFinding.UnevenAtEdge => "uneven at the edge",
         CoverageFinding.UnevenAlongAxis => "changes along the axis",
         CoverageFinding.UnevenInside => "uneven inside",
+        CoverageFinding.TooFewDraws => "too few draws to tell",
         _ => throw new ArgumentOutOfRangeException(nameof(finding), finding, null),
     };
 

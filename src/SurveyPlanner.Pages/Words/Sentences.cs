@@ -39,6 +39,11 @@ internal static class Sentences
             return sentence + ".";
         }
 
+        if (coverages.Any(coverage => coverage.Advice is { Finding: CoverageFinding.TooFewDraws } or { NeverCoveredKm2: null }))
+        {
+            return sentence + "; the simulated draws are too few to tell whether every place has a chance of being covered.";
+        }
+
         var (min, max) = (coverages.Min(c => c.Min), coverages.Max(c => c.Max));
         if (min > 0)
         {
@@ -95,6 +100,12 @@ internal static class Sentences
         var lowest = coverages.MinBy(coverage => coverage.Nominal > 0 ? coverage.Min / coverage.Nominal : double.MaxValue)!;
         var place = lowest.Cells.IsEmpty ? "" : $", at {Positions.Decimal(lowest.Cells.MinBy(cell => cell.Best)!.Position)} (latitude, longitude)";
         var where = (coverages.Count == 1 ? "" : ", in " + lowest.Stratum) + place;
+        if (coverages.Any(coverage => coverage.Advice?.Finding == CoverageFinding.TooFewDraws))
+        {
+            return "The simulated draws are too few to tell coverage cell by cell: most of what differs from cell to cell is chance."
+                + (never is null ? "" : $" {Figures.Percent(never.Share)} of the area was covered by none of them (hatched).");
+        }
+
         return $"{Figures.Percent(even)} of the area has a coverage probability within 10 % of nominal. "
             + $"It is lowest, {Figures.Three(lowest.Min)} where nominal is {Figures.Three(lowest.Nominal)}{where}. "
             + (never is null ? "No place is without coverage."
@@ -110,9 +121,9 @@ internal static class Sentences
             return null;
         }
 
-        var noise = simulated.Max(coverage => coverage.Cells.Average(cell => cell.StandardError) / coverage.Nominal);
-        return $"Simulated coverage has a standard error of about {Figures.Percent(noise)} of nominal in a cell: differences of that size between cells are noise, "
-            + "and the least and greatest figures lie too far out by some of it. More replicates in [coverage] bring it down.";
+        var noise = simulated.Max(coverage => coverage.StandardError / coverage.Nominal);
+        return $"Simulated coverage has a standard error of about {Figures.Percent(noise)} of nominal in a cell: differences of that size between cells are noise. "
+            + "It puts the least and greatest figures too far out, and makes the CV and the areas far from nominal too large. More replicates in [coverage] bring it down.";
     }
 
     private static string Effort(SurveyPlan plan)

@@ -14,11 +14,16 @@ public enum CoverageFinding
 
     /// <summary>Away from nominal inside too, in some other way.</summary>
     UnevenInside,
+
+    /// <summary>Not known: the simulated draws are too few to tell a cell of nominal coverage from one of half of it.</summary>
+    TooFewDraws,
 }
 
 /// <summary>What a stratum's coverage means for the survey.</summary>
 /// <param name="Finding">What it looks like.</param>
 /// <param name="UnevenShare">Share of the area whose coverage is more than a tenth away from nominal, beyond what simulation leaves uncertain.</param>
-/// <param name="NeverCoveredKm2">Area of the cells that can never be covered (simulated: that no draw covered), square kilometres.</param>
+/// <param name="NeverCoveredKm2">
+/// Area of the cells that can never be covered (simulated: that none of enough draws covered), square kilometres; null where the draws are too few to tell.
+/// </param>
 /// <param name="Sentence">All this and what to do about it, in plain words.</param>
-public sealed record CoverageAdvice(CoverageFinding Finding, double UnevenShare, double NeverCoveredKm2, string Sentence);
+public sealed record CoverageAdvice(CoverageFinding Finding, double UnevenShare, double? NeverCoveredKm2, string Sentence);

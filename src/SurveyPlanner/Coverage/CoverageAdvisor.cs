@@ -1,11 +1,10 @@
-using System.Globalization;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Coverage;
 
 /// <summary>
-/// Judges the coverage of a stratum. A place is uneven where its coverage is more than a tenth away from nominal, by more than twice its standard
-/// error where it is simulated. The rules: docs/methods/coverage.md.
+/// Judges the coverage of a stratum. A place is uneven where its coverage is more than a tenth away from nominal, by more than three standard
+/// errors where it is simulated. The rules: docs/methods/coverage.md. The words: <see cref="CoverageSentences"/>.
 /// </summary>
 internal static class CoverageAdvisor
 {
@@ -24,13 +23,14 @@ internal static class CoverageAdvisor
     /// <param name="along">Position of each cell's place along the axis (across the lines), metres.</param>
     public static CoverageAdvice Of(LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
-        double area = 0, never = 0, uneven = 0, inside = 0, unevenInside = 0;
+        var typicalError = coverage.StandardError;
+        double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0;
         for (var i = 0; i < distances.Length; i++)
         {
             var cell = coverage.Cells[i];
-            var isUneven = IsUneven(cell, coverage.Nominal);
+            var isUneven = IsUneven(cell, coverage.Nominal, typicalError);
             area += cell.AreaKm2;
-            never += cell.Best == 0 ? cell.AreaKm2 : 0;
+            undrawn += cell.Best == 0 ? cell.AreaKm2 : 0;
             uneven += isUneven ? cell.AreaKm2 : 0;
 
             if (distances[i] > EdgeReach(design))
@@ -40,7 +40,7 @@ internal static class CoverageAdvisor
             }
         }
 
-        var finding = CoverageFinding.Even;
+        var finding = EnoughDraws.TellCells(coverage) ? CoverageFinding.Even : CoverageFinding.TooFewDraws;
         if (uneven > SmallShare * area)
         {
             finding = unevenInside <= SmallShare * inside
@@ -48,8 +48,11 @@ internal static class CoverageAdvisor
                 : ChangesAlongAxis(design, coverage, distances, along) ? CoverageFinding.UnevenAlongAxis : CoverageFinding.UnevenInside;
         }
 
-        var sentence = Sentence(finding, design, uneven / area) + Never(coverage, never, area);
-        return new CoverageAdvice(finding, uneven / area, never, sentence);
+        var sentences = CoverageSentences.Of(finding, design, coverage, uneven / area)
+            + CoverageSentences.OfOverlap(design, coverage)
+            + CoverageSentences.OfUndrawn(finding, coverage, undrawn, area);
+        double? never = undrawn == 0 || EnoughDraws.TellZero(coverage) ? undrawn : null;
+        return new CoverageAdvice(finding, uneven / area, never, sentences);
     }
 
     /// <summary>
@@ -60,9 +63,10 @@ internal static class CoverageAdvisor
         ? design.HalfWidthMetres + (design.SegmentMetres ?? 0) + (Math.Sqrt(2) * (design.SideMetres ?? 0))
         : design.HalfWidthMetres;
 
-    private static bool IsUneven(in CoverageCell cell, double nominal)
+    // Where few draws cover a cell, its own standard error is as much a matter of chance as its coverage, and least where no draw does.
+    private static bool IsUneven(in CoverageCell cell, double nominal, double typicalError)
     {
-        var doubt = cell.Exact is null ? 2 * cell.StandardError : 0;
+        var doubt = cell.Exact is null ? EnoughDraws.StandardErrors * Math.Max(cell.StandardError, typicalError) : 0;
         return Math.Abs(cell.Best - nominal) - doubt > Band * nominal;
     }
 
@@ -93,46 +97,4 @@ internal static class CoverageAdvisor
         var uneven = areas.Where((area, i) => Math.Abs((sums[i] / area) - coverage.Nominal) > Band * coverage.Nominal).Sum();
         return uneven > SmallShare * areas.Sum();
     }
-
-    private static string Sentence(CoverageFinding finding, LayoutDesign design, double unevenShare)
-    {
-        var (even, uneven) = (Percent(1 - unevenShare), Percent(unevenShare));
-        return finding switch
-        {
-            CoverageFinding.Even => $"Coverage is even: {even} of the area is within a tenth of nominal.",
-            CoverageFinding.UnevenAtEdge when design.Edge == EdgeRule.Minus =>
-                $"Coverage is uneven at the edge only ({uneven} of the area is more than a tenth from nominal): consider plus sampling (edge = \"plus\"), or weight each detection by its coverage.",
-            CoverageFinding.UnevenAtEdge =>
-                $"Coverage is uneven at the edge only ({uneven} of the area is more than a tenth from nominal): weight each detection by its coverage.",
-            CoverageFinding.UnevenAlongAxis =>
-                $"Coverage changes along the axis ({uneven} of the area is more than a tenth from nominal): {EvenAlongAxis(design)} would even it out; otherwise weight each detection by its coverage.",
-            CoverageFinding.UnevenInside =>
-                $"Coverage is uneven inside the stratum too ({uneven} of the area is more than a tenth from nominal): parallel lines or a point grid would even it out; otherwise weight each detection by its coverage.",
-            _ => throw new InvalidOperationException($"unknown finding {finding}"),
-        };
-    }
-
-    private static string EvenAlongAxis(LayoutDesign design)
-        => design.Kind == LayoutKind.Zigzag && design.Turning != ZigzagTurning.AdjustedAngle
-            ? "an adjusted-angle zigzag (turning = \"adjusted-angle\") or parallel lines"
-            : "parallel lines";
-
-    private static string Never(StratumCoverage coverage, double neverKm2, double areaKm2)
-    {
-        if (neverKm2 == 0)
-        {
-            return "";
-        }
-
-        var how = coverage.MaxAbsZ is null
-            ? string.Create(CultureInfo.InvariantCulture, $"were covered by none of {coverage.Replicates} simulated draws")
-            : "can never be covered";
-        return string.Create(
-            CultureInfo.InvariantCulture,
-            $" Places of {neverKm2:0.####} km² in all ({Percent(neverKm2 / areaKm2)} of the area) {how}: the estimator cannot speak for them.");
-    }
-
-    private static string Percent(double share) => share is > 0 and < 0.001
-        ? "under 0.1 %"
-        : string.Create(CultureInfo.InvariantCulture, $"{100 * share:0.#} %");
 }

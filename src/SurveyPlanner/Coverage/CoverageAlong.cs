@@ -38,13 +38,16 @@ internal static class CoverageAlong
         return places;
     }
 
-    /// <summary>The weighted mean of each transect.</summary>
+    /// <summary>
+    /// The weighted mean of each transect. Unknown where the draws are too few to tell, and where none covered it: a transect that was drawn can be.
+    /// </summary>
     /// <param name="transects">The transects.</param>
     /// <param name="places">Their places.</param>
     /// <param name="coverage">Coverage of each place.</param>
     /// <param name="isExact">Whether that is exact.</param>
+    /// <param name="isTold">Whether the draws are enough to tell single places.</param>
     public static ImmutableArray<TransectCoverage> Means(
-        IReadOnlyList<Transect> transects, List<AlongPlace> places, double[] coverage, bool isExact)
+        IReadOnlyList<Transect> transects, List<AlongPlace> places, double[] coverage, bool isExact, bool isTold)
     {
         var (sums, weights) = (new double[transects.Count], new double[transects.Count]);
         for (var i = 0; i < places.Count; i++)
@@ -53,7 +56,7 @@ internal static class CoverageAlong
             weights[places[i].Transect] += places[i].Weight;
         }
 
-        return [.. transects.Select((transect, i) => new TransectCoverage(transect.Id, weights[i] > 0 ? sums[i] / weights[i] : null, isExact))];
+        return [.. transects.Select((transect, i) => new TransectCoverage(transect.Id, isTold && sums[i] > 0 ? sums[i] / weights[i] : null, isExact))];
     }
 
     private static void AddPlaces(

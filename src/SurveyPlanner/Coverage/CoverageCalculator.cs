@@ -40,8 +40,8 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
             summary.Max,
             summary.Cv,
             summary.SimulatedMean,
-            summary.MaxAbsZ);
-        return Judged(coverage with { Transects = Along(generator, layout, stratum) }, generator, grid);
+            exact is null ? null : ExactAgainstSimulated.MaxAbsZ(cells.AsSpan(), _replicates));
+        return Judged(coverage with { Transects = Along(generator, layout, coverage, stratum) }, generator, grid);
     }
 
     /// <summary>
@@ -68,7 +68,7 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
         return result;
     }
 
-    private ImmutableArray<TransectCoverage> Along(LayoutGenerator generator, Layout layout, uint stratum)
+    private ImmutableArray<TransectCoverage> Along(LayoutGenerator generator, Layout layout, StratumCoverage cells, uint stratum)
     {
         var places = CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.MostExactPlaces);
         var grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out var order);
@@ -88,7 +88,7 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
             inOrder[order[i]] = coverage[i];
         }
 
-        return CoverageAlong.Means(layout.Transects, places, inOrder, isExact);
+        return CoverageAlong.Means(layout.Transects, places, inOrder, isExact, EnoughDraws.TellCells(cells));
     }
 
     private StratumCoverage Judged(StratumCoverage coverage, LayoutGenerator generator, CellGrid grid)
@@ -108,7 +108,7 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
 
         return coverage with
         {
-            EdgeProfile = EdgeProfile.Of(coverage.Cells.AsSpan(), distances, classWidth),
+            EdgeProfile = EnoughDraws.TellCells(coverage) ? EdgeProfile.Of(coverage.Cells.AsSpan(), distances, classWidth) : [],
             Advice = CoverageAdvisor.Of(generator.Design, coverage, distances, along),
         };
     }
@@ -138,11 +138,11 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
         return cells.MoveToImmutable();
     }
 
-    private readonly record struct Summary(double Mean, double Min, double Max, double Cv, double SimulatedMean, double? MaxAbsZ)
+    private readonly record struct Summary(double Mean, double Min, double Max, double Cv, double SimulatedMean)
     {
         public static Summary Of(ImmutableArray<CoverageCell> cells)
         {
-            double area = 0, sum = 0, squares = 0, simulated = 0, min = double.PositiveInfinity, max = 0, maxZ = 0;
+            double area = 0, sum = 0, squares = 0, simulated = 0, min = double.PositiveInfinity, max = 0;
             foreach (ref readonly var cell in cells.AsSpan())
             {
                 area += cell.AreaKm2;
@@ -150,7 +150,6 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
                 simulated += cell.AreaKm2 * cell.Simulated;
                 min = Math.Min(min, cell.Best);
                 max = Math.Max(max, cell.Best);
-                maxZ = cell.Exact is { } exact ? Math.Max(maxZ, Math.Abs(cell.Simulated - exact) / cell.StandardError) : maxZ;
             }
 
             var mean = sum / area;
@@ -160,7 +159,7 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
             }
 
             var cv = mean == 0 ? 0 : Math.Sqrt(squares / area) / mean;
-            return new Summary(mean, min, max, cv, simulated / area, cells[0].Exact is null ? null : maxZ);
+            return new Summary(mean, min, max, cv, simulated / area);
         }
     }
 }

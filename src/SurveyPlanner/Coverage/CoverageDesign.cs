@@ -6,4 +6,7 @@ namespace SurveyPlanner.Coverage;
 public sealed record CoverageDesign(int? Cells = null, int Replicates = CoverageDesign.DefaultReplicates)
 {
     public const int DefaultReplicates = 1000;
+
+    /// <summary>More draws than this are not taken.</summary>
+    public const int MostReplicates = 1_000_000;
 }

@@ -13,11 +13,14 @@ namespace SurveyPlanner.Coverage;
 /// <param name="Replicates">Number of simulated draws.</param>
 /// <param name="Cells">The cells.</param>
 /// <param name="Mean">Area-weighted mean of the exact coverage, or of the simulated where no closed form exists.</param>
-/// <param name="Min">Smallest of it.</param>
+/// <param name="Min">Smallest of it. Where simulated, it lies too low by chance, and the largest too high.</param>
 /// <param name="Max">Largest of it.</param>
-/// <param name="Cv">Area-weighted coefficient of variation of it.</param>
+/// <param name="Cv">Area-weighted coefficient of variation of it. Where simulated, chance adds to it: see <see cref="StandardError"/>.</param>
 /// <param name="SimulatedMean">Area-weighted mean of the simulated coverage.</param>
-/// <param name="MaxAbsZ">Largest absolute difference between simulated and exact coverage in standard errors; null where no closed form exists.</param>
+/// <param name="MaxAbsZ">
+/// Largest absolute difference between simulated and exact coverage, in standard errors no smaller than the exact value lets expect; null where no
+/// closed form exists.
+/// </param>
 public sealed record StratumCoverage(
     string Stratum,
     double Nominal,
@@ -32,7 +35,7 @@ public sealed record StratumCoverage(
     double SimulatedMean,
     double? MaxAbsZ)
 {
-    /// <summary>Mean coverage against distance from the stratum's boundary, from the boundary inwards; classes without cells are left out.</summary>
+    /// <summary>Mean coverage against distance from the stratum's boundary, from the boundary inwards; classes without cells are left out. Empty where the draws are too few.</summary>
     public ImmutableArray<EdgeClass> EdgeProfile { get; init; } = [];
 
     /// <summary>What all this means for the survey; null only where coverage was not judged.</summary>
@@ -41,10 +44,33 @@ public sealed record StratumCoverage(
     /// <summary>Coverage along each transect of the layout drawn, in its order.</summary>
     public ImmutableArray<TransectCoverage> Transects { get; init; } = [];
 
-    /// <summary>Share of the area, 0 to 1, whose coverage is below a multiple of nominal.</summary>
+    /// <summary>Whether the coverage to show is from the closed form, and not simulated.</summary>
+    public bool IsExact => !Cells.IsEmpty && Cells[0].Exact is not null;
+
+    /// <summary>
+    /// Standard error of a cell's simulated coverage: the root of its mean square over the area. Where few draws cover a cell, that of the cell itself
+    /// says little; chance makes the simulated cells differ by about this much. 0 where there are no cells.
+    /// </summary>
+    public double StandardError
+    {
+        get
+        {
+            var (squares, area) = (0.0, 0.0);
+            foreach (var cell in Cells)
+            {
+                // Beside no draw at all stands what one unseen draw could hide. Over many cells none is unseen: those count that a draw did cover.
+                squares += cell.Simulated > 0 ? cell.AreaKm2 * cell.StandardError * cell.StandardError : 0;
+                area += cell.AreaKm2;
+            }
+
+            return area == 0 ? 0 : squares > 0 ? Math.Sqrt(squares / area) : 1.0 / Replicates;
+        }
+    }
+
+    /// <summary>Share of the area, 0 to 1, whose coverage is below a multiple of nominal; where simulated, chance adds to it.</summary>
     public double ShareBelow(double timesNominal) => Share(cell => cell.Best < timesNominal * Nominal);
 
-    /// <summary>Share of the area, 0 to 1, whose coverage is above a multiple of nominal.</summary>
+    /// <summary>Share of the area, 0 to 1, whose coverage is above a multiple of nominal; where simulated, chance adds to it.</summary>
     public double ShareAbove(double timesNominal) => Share(cell => cell.Best > timesNominal * Nominal);
 
     private double Share(Func<CoverageCell, bool> isCounted)

@@ -29,6 +29,36 @@ internal static class PlaneGeometry
     public static PlaneShape Unite(PlaneShape shape) => FromGeometry(Merged(shape));
 
     /// <summary>
+    /// Groups of parts that share borders made one, in the place of the first of each; all other parts keep their vertices digit for digit.
+    /// </summary>
+    /// <param name="shape">The shape.</param>
+    /// <param name="together">Indices of the parts of each group, ascending.</param>
+    public static PlaneShape Join(PlaneShape shape, ImmutableArray<ImmutableArray<int>> together)
+    {
+        if (together.IsEmpty)
+        {
+            return shape;
+        }
+
+        var groups = together.ToDictionary(group => group[0]);
+        var joined = together.SelectMany(group => group).ToHashSet();
+        var builder = new PlaneShapeBuilder();
+        for (var part = 0; part < shape.PartCount; part++)
+        {
+            if (groups.TryGetValue(part, out var group))
+            {
+                builder.Add(Joined(shape, group));
+            }
+            else if (!joined.Contains(part))
+            {
+                builder.AddPart(shape, part);
+            }
+        }
+
+        return builder.Build();
+    }
+
+    /// <summary>
     /// All places within a distance of the shape. Arcs are drawn just outside the true curve (by at most 0.13 % of the distance), never inside it.
     /// </summary>
     public static PlaneShape Grow(PlaneShape shape, double metres)
@@ -88,6 +118,21 @@ internal static class PlaneGeometry
         }
 
         return polygons;
+    }
+
+    private static PlaneShape Joined(PlaneShape shape, ImmutableArray<int> parts)
+    {
+        // Rounding moves an area by 1e-12 of it or so; more would mean that ground was lost or won.
+        const double areaTolerance = 1e-9;
+        var builder = new PlaneShapeBuilder();
+        foreach (var part in parts)
+        {
+            builder.AddPart(shape, part);
+        }
+
+        var apart = builder.Build();
+        var one = Unite(apart);
+        return Math.Abs(one.AreaSquareMetres - apart.AreaSquareMetres) <= areaTolerance * apart.AreaSquareMetres ? one : apart;
     }
 
     private static Geometry Merged(PlaneShape shape)

@@ -25,14 +25,20 @@ internal sealed class PlaneShapeBuilder
     {
         for (var part = 0; part < shape.PartCount; part++)
         {
-            StartPart();
-            for (var ring = shape.PartStarts[part]; ring < shape.PartStarts[part + 1]; ring++)
+            AddPart(shape, part);
+        }
+    }
+
+    /// <summary>One part of another shape.</summary>
+    public void AddPart(PlaneShape shape, int part)
+    {
+        StartPart();
+        for (var ring = shape.PartStarts[part]; ring < shape.PartStarts[part + 1]; ring++)
+        {
+            StartRing();
+            for (var i = shape.RingStarts[ring]; i < shape.RingStarts[ring + 1]; i++)
             {
-                StartRing();
-                for (var i = shape.RingStarts[ring]; i < shape.RingStarts[ring + 1]; i++)
-                {
-                    Add(shape.X[i], shape.Y[i]);
-                }
+                Add(shape.X[i], shape.Y[i]);
             }
         }
     }

@@ -45,7 +45,7 @@ public static class RegionBuilder
         notices.AddRange(boundary.Notices);
         notices.AddRange(exclusions.SelectMany(exclusion => exclusion.Notices));
 
-        var shapes = groups.Select(group => Merge(boundary, group, densifier, notices)).ToList();
+        var shapes = groups.Select(group => Merge(boundary, group, projection.Centre.Lon, densifier, notices)).ToList();
         RefuseOverlaps(boundary, groups, shapes);
         notices.AddRange(StratumGaps.Find(shapes, projection));
         var cut = ExclusionShape(exclusions, densifier, design.ExclusionBufferMetres);
@@ -97,7 +97,7 @@ public static class RegionBuilder
         var (narrowest, vertices, roots) = (double.PositiveInfinity, 0, 0.0);
         foreach (var feature in groups.SelectMany(group => group.Features))
         {
-            var shape = Shape([feature], coarse);
+            var shape = Shape(feature.Polygons, coarse);
             narrowest = Math.Min(narrowest, shape.AreaSquareMetres / Perimeter(shape));
             vertices += shape.VertexCount;
             roots += feature.Polygons.Sum(polygon => coarse.RootOfStray(polygon.Shell) + polygon.Holes.Sum(hole => coarse.RootOfStray(hole)));
@@ -120,10 +120,10 @@ public static class RegionBuilder
         return total;
     }
 
-    private static PlaneShape Shape(IEnumerable<BoundaryFeature> features, EdgeDensifier densifier)
+    private static PlaneShape Shape(IEnumerable<GeographicPolygon> polygons, EdgeDensifier densifier)
     {
         var builder = new PlaneShapeBuilder();
-        foreach (var polygon in features.SelectMany(feature => feature.Polygons))
+        foreach (var polygon in polygons)
         {
             builder.StartPart();
             densifier.AddRing(builder, polygon.Shell);
@@ -136,11 +136,21 @@ public static class RegionBuilder
         return builder.Build();
     }
 
-    /// <summary>The features of one stratum as one shape; where they overlap, the overlap counts once and is told.</summary>
-    private static PlaneShape Merge(Boundary boundary, StratumGroup group, EdgeDensifier densifier, ImmutableArray<Notice>.Builder notices)
+    /// <summary>
+    /// The features of one stratum as one shape. Polygons that share a border become one; where features overlap, the overlap counts once and is told.
+    /// </summary>
+    private static PlaneShape Merge(
+        Boundary boundary, StratumGroup group, double meridian, EdgeDensifier densifier, ImmutableArray<Notice>.Builder notices)
     {
-        var whole = Shape(group.Features, densifier);
-        var shapes = group.Features.Select(feature => Shape([feature], densifier)).ToList();
+        var (polygons, together) = SharedBorders.Find([.. group.Features.SelectMany(feature => feature.Polygons)], meridian);
+        var whole = Shape(polygons, densifier);
+        var (shapes, next) = (new List<PlaneShape>(), 0);
+        foreach (var count in group.Features.Select(feature => feature.Polygons.Length))
+        {
+            shapes.Add(Shape(polygons.Skip(next).Take(count), densifier));
+            next += count;
+        }
+
         var overlap = 0.0;
         for (var i = 0; i < shapes.Count; i++)
         {
@@ -152,7 +162,7 @@ public static class RegionBuilder
 
         if (overlap == 0)
         {
-            return whole;
+            return PlaneGeometry.Join(whole, together);
         }
 
         var merged = PlaneGeometry.Unite(whole);
@@ -217,7 +227,7 @@ public static class RegionBuilder
             return PlaneShape.Empty;
         }
 
-        var shape = Shape(exclusions.SelectMany(exclusion => exclusion.Features), densifier);
+        var shape = Shape(exclusions.SelectMany(exclusion => exclusion.Features).SelectMany(feature => feature.Polygons), densifier);
         return bufferMetres > 0 ? PlaneGeometry.Grow(shape, bufferMetres) : PlaneGeometry.Unite(shape);
     }
 

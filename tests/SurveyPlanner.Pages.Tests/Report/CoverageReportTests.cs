@@ -1,8 +1,10 @@
 using SurveyPlanner.Coverage;
 using SurveyPlanner.Pages.Charts;
+using SurveyPlanner.Pages.Maps;
 using SurveyPlanner.Pages.Report;
 using SurveyPlanner.Pages.Tests.Fixtures;
 using SurveyPlanner.Pages.Tests.Words;
+using SurveyPlanner.Pages.Words;
 
 namespace SurveyPlanner.Pages.Tests.Report;
 
@@ -42,6 +44,32 @@ public class CoverageReportTests
                 ("Without coverage", "5.00 km² in s4, s6: no estimate speaks for those places."),
             ],
             CoverageWords.Advice(judged));
+    }
+
+    /// <summary>Where the draws are too few no sentence of the report speaks of single places as if they were known.</summary>
+    [Fact]
+    public void Too_few_draws_are_said_to_be_so_wherever_coverage_is_told()
+    {
+        var plan = SamplePlan.Archipelago;
+        var coverage = plan.Strata[0].Coverage!;
+        var rare = coverage with
+        {
+            // No draw of 1,000 covered anything: one could have been missed, 0.001 where nominal is 0.002.
+            Nominal = 0.002,
+            Replicates = 1000,
+            Cells = [.. coverage.Cells.Select(cell => cell with { Exact = null, Simulated = 0, StandardError = 0.001 })],
+            Min = 0,
+            MaxAbsZ = null,
+            Advice = new CoverageAdvice(CoverageFinding.TooFewDraws, 0, null, "Too few draws."),
+        };
+        var few = plan with { Strata = [plan.Strata[0] with { Coverage = rare }] };
+
+        Assert.EndsWith("; the simulated draws are too few to tell whether every place has a chance of being covered.", Sentences.OfPlan(few), StringComparison.Ordinal);
+        Assert.Equal(
+            "The simulated draws are too few to tell coverage cell by cell: most of what differs from cell to cell is chance. 100\u00a0% of the area was covered by none of them (hatched).",
+            Sentences.OfCoverage([rare], CoverageClasses.Tally([rare])));
+        Assert.Contains("a standard error of about 50.0\u00a0% of nominal in a cell", Sentences.OfNoise([rare]), StringComparison.Ordinal);
+        Assert.Equal("too few draws to tell", CoverageTables.OfStrata([rare]).Rows[0][1]);
     }
 
     [Theory]

@@ -24,16 +24,22 @@ public class RegionBuilderTests
         Assert.Single(region.Strata);
     }
 
-    [Fact]
-    public void A_cap_round_the_pole_has_its_area()
+    [Theory]
+    [InlineData(1)]
+    [InlineData(-1)]
+    public void A_cap_round_a_pole_has_its_area_and_reaches_all_longitudes(int side)
     {
         // The ring runs once round the parallel of 75°; RFC 7946 would cut it, other sources do not.
-        var ring = Enumerable.Range(0, 361).Select(i => new LonLat(i - 180, 75)).ToImmutableArray();
+        var ring = Enumerable.Range(0, 361).Select(i => new LonLat(i - 180, side * 75)).ToImmutableArray();
         var region = Build(Feature(1, "cap", new GeographicPolygon(ring, [])));
         var ellipsoid = Ellipsoid.Wgs84;
         var share = (1 - (ellipsoid.Q(Math.Sin(75 * Math.PI / 180)) / ellipsoid.QPole)) / 2;
         Assert.Equal(1, region.AreaKm2 / (510065621.7240885 * share), 2e-6);
-        Assert.Equal(90, region.Projection.Centre.Lat);
+        Assert.Equal(90 * side, region.Projection.Centre.Lat);
+
+        // RFC 7946, 5.3 (from memory): the bounding box of a region that holds a pole ends at the pole and spans all longitudes.
+        Assert.Equal((-180, 180, 90), (region.Extent.West, region.Extent.East, side > 0 ? region.Extent.North : -region.Extent.South));
+        Assert.Equal(75, side > 0 ? region.Extent.South : -region.Extent.North, 1e-9);
     }
 
     [Fact]
