@@ -5,7 +5,7 @@ using SurveyPlanner.Layouts;
 namespace SurveyPlanner.Benchmarks;
 
 /// <summary>A whole simulation of 1,000 draws on one thread and on two; coast of 10,000 vertices.</summary>
-[ShortRunJob]
+[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 15)]
 public class CoverageThreadsBenchmarks
 {
     private LayoutGenerator _layout = null!;
@@ -14,7 +14,7 @@ public class CoverageThreadsBenchmarks
     [Params(10_000, 1_000_000)]
     public int Cells { get; set; }
 
-    [Params("Parallel", "Zigzag")]
+    [Params("Parallel", "Zigzag", "PointGrid")]
     public string Kind { get; set; } = "";
 
     [Params(1, 2)]

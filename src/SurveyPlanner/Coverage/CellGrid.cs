@@ -7,9 +7,9 @@ namespace SurveyPlanner.Coverage;
 internal sealed class CellGrid
 {
     private readonly SlotTable _rows;
-    private readonly int[] _rowSlots;
+    private readonly Slot[] _rowSlots;
     private readonly SlotTable[] _rowPlaces;
-    private readonly int[] _placeSlots;
+    private readonly Slot[] _placeSlots;
 
     /// <param name="rowY">y of each row, ascending.</param>
     /// <param name="rowStarts">Index of the first place of each row, and the number of places as last entry.</param>
@@ -21,13 +21,13 @@ internal sealed class CellGrid
         RowStarts = rowStarts;
         X = x;
         Cells = cells;
-        _rowSlots = new int[rowY.Length];
-        _rows = new SlotTable(rowY, 0, rowY.Length, _rowSlots);
-        _placeSlots = new int[x.Length];
+        _rowSlots = Slot.Of(rowY);
+        _rows = new SlotTable(_rowSlots, 0, rowY.Length);
+        _placeSlots = Slot.Of(x);
         _rowPlaces = new SlotTable[rowY.Length];
         for (var row = 0; row < rowY.Length; row++)
         {
-            _rowPlaces[row] = new SlotTable(x, rowStarts[row], rowStarts[row + 1], _placeSlots);
+            _rowPlaces[row] = new SlotTable(_placeSlots, rowStarts[row], rowStarts[row + 1]);
         }
     }
 
@@ -73,7 +73,7 @@ internal sealed class CellGrid
     }
 
     /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
-    public int FirstRowFrom(double y) => _rows.FirstFrom(RowY, _rowSlots, y);
+    public int FirstRowFrom(double y) => _rows.FirstFrom(_rowSlots, y);
 
     /// <summary>Whether a row has places on either side of some x or between them. Most rows at a coast hold a place or two, which most ranges miss.</summary>
     public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last && high >= _rowPlaces[row].First;
@@ -82,7 +82,7 @@ internal sealed class CellGrid
     public (int First, int End) Run(int row, double low, double high)
     {
         ref readonly var places = ref _rowPlaces[row];
-        return (places.FirstFrom(X, _placeSlots, low), places.FirstBeyond(X, _placeSlots, high));
+        return (places.FirstFrom(_placeSlots, low), places.FirstBeyond(_placeSlots, high));
     }
 }
 

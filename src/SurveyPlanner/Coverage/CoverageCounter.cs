@@ -13,6 +13,9 @@ namespace SurveyPlanner.Coverage;
 /// </remarks>
 internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 {
+    // So few places are added up sooner than other threads have begun.
+    private const int WorthSharing = 1 << 16;
+
     // One more than there are places: a run may end behind the last.
     private readonly Ends[] _ends = new Ends[grid.Count + 1];
 
@@ -66,7 +69,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         var ends = counters[0]._ends;
         var places = ends.Length - 1;
         var counts = new CoverageCounts(replicates, new int[places], new int[places], new int[places]);
-        var blocks = counters.Length;
+        var blocks = places < WorthSharing ? 1 : counters.Length;
         int Start(int block) => (int)((long)places * block / blocks);
 
         // Each thread adds up a block of places; then it knows from what to go on in the next.

@@ -31,8 +31,7 @@ internal static class CoverageSimulation
     // Draws between two reports of progress: some microseconds each on ordinary regions.
     private const int DrawsPerReport = 16;
 
-    // Draws differ in what they meet, so that equal shares would leave threads waiting; each run costs a draw more.
-    private const int RunsPerWorker = 8;
+    private const int ShortestRun = 16;
 
     /// <param name="generator">The layout.</param>
     /// <param name="grid">The places to look at.</param>
@@ -54,7 +53,7 @@ internal static class CoverageSimulation
     {
         var offsets = new StratifiedOffsets(seed, stratum, replicates, generator.OffsetRanges.Length);
         var workers = Math.Clamp(threads, 1, replicates);
-        var runs = workers == 1 ? 1 : Math.Min(replicates, RunsPerWorker * workers);
+        var runs = RunsOfDraws(replicates, workers);
         var counters = new CoverageCounter[workers];
         var next = -1;
         void Report() => progress?.Add((double)DrawsPerReport / replicates);
@@ -62,10 +61,9 @@ internal static class CoverageSimulation
         {
             var counter = counters[worker] = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
             var buffer = new PieceBuffer();
-            for (int run; (run = Interlocked.Increment(ref next)) < runs;)
+            for (int run; (run = Interlocked.Increment(ref next)) < runs.Count;)
             {
-                var (first, end) = ((int)((long)replicates * run / runs), (int)((long)replicates * (run + 1) / runs));
-                CountRun(generator, counter, buffer, offsets, first, end, Report, stop);
+                CountRun(generator, counter, buffer, offsets, runs[run].First, runs[run].End, Report, stop);
             }
         }
 
@@ -80,6 +78,23 @@ internal static class CoverageSimulation
 
         progress?.Finish();
         return CoverageCounter.Sum(counters, replicates);
+    }
+
+    /// <summary>
+    /// Draws shared out in runs, the first long and the last short: draws differ in what they meet, so that equal shares would leave threads waiting.
+    /// Each run costs a draw more.
+    /// </summary>
+    private static List<(int First, int End)> RunsOfDraws(int draws, int workers)
+    {
+        var runs = new List<(int First, int End)>();
+        for (var first = 0; first < draws;)
+        {
+            var length = workers == 1 ? draws : Math.Max((draws - first) / (2 * workers), ShortestRun);
+            runs.Add((first, Math.Min(first + length, draws)));
+            first = runs[^1].End;
+        }
+
+        return runs;
     }
 
     /// <summary>Counts neighbouring draws, from the first to before the end.</summary>

@@ -11,11 +11,10 @@ internal readonly struct SlotTable
     private readonly double _slotsPerUnit;
     private readonly double _lastSlot;
 
-    /// <param name="values">The list.</param>
+    /// <param name="slots">The list; takes, in the same stretch, the index of the first value of each slot or a later one.</param>
     /// <param name="start">Index of the first value of the stretch.</param>
     /// <param name="end">Index after its last.</param>
-    /// <param name="firsts">As long as the list: takes, in the same stretch, the index of the first value of each slot or a later one.</param>
-    public SlotTable(double[] values, int start, int end, int[] firsts)
+    public SlotTable(Slot[] slots, int start, int end)
     {
         (_start, _end) = (start, end);
         if (start == end)
@@ -25,18 +24,18 @@ internal readonly struct SlotTable
             return;
         }
 
-        (First, Last) = (values[start], values[end - 1]);
+        (First, Last) = (slots[start].Value, slots[end - 1].Value);
         _slotsPerUnit = Last > First ? (end - start) / (Last - First) : 0;
         _lastSlot = end - start - 1;
         var i = start;
         for (var slot = start; slot < end; slot++)
         {
-            while (SlotOf(values[i]) < slot)
+            while (SlotOf(slots[i].Value) < slot)
             {
                 i++;
             }
 
-            firsts[slot] = i;
+            slots[slot].First = i;
         }
     }
 
@@ -47,18 +46,18 @@ internal readonly struct SlotTable
     public double Last { get; }
 
     /// <summary>Index of the first value that is at least so large; the end where none is.</summary>
-    public int FirstFrom(double[] values, int[] firsts, double least) => least <= Last ? Find(values, firsts, least) : _end;
+    public int FirstFrom(Slot[] slots, double least) => least <= Last ? Find(slots, least) : _end;
 
     /// <summary>Index of the first value that is larger; the end where none is.</summary>
-    public int FirstBeyond(double[] values, int[] firsts, double most)
+    public int FirstBeyond(Slot[] slots, double most)
     {
         if (!(most < Last))
         {
             return _end;
         }
 
-        var i = Find(values, firsts, most);
-        while (values[i] == most)
+        var i = Find(slots, most);
+        while (slots[i].Value == most)
         {
             i++;
         }
@@ -67,23 +66,23 @@ internal readonly struct SlotTable
     }
 
     /// <summary>Index of the first value that is at least so large as a number that is not larger than the last.</summary>
-    private int Find(double[] values, int[] firsts, double number)
+    private int Find(Slot[] slots, double number)
     {
         var slot = SlotOf(number);
-        var i = firsts[slot];
+        var i = slots[slot].First;
 
         // Mostly one to go or none, which no branch would foretell.
-        i += values[i] < number ? 1 : 0;
-        return values[i] < number ? Halve(values, i, slot + 1 < _end ? firsts[slot + 1] : _end, number) : i;
+        i += slots[i].Value < number ? 1 : 0;
+        return slots[i].Value < number ? Halve(slots, i, slot + 1 < _end ? slots[slot + 1].First : _end, number) : i;
     }
 
     /// <summary>The same, known to lie behind <paramref name="low"/> and at most at <paramref name="high"/>.</summary>
-    private static int Halve(double[] values, int low, int high, double number)
+    private static int Halve(Slot[] slots, int low, int high, double number)
     {
         while (high - low > 1)
         {
             var middle = (low + high) / 2;
-            (low, high) = values[middle] < number ? (middle, high) : (low, middle);
+            (low, high) = slots[middle].Value < number ? (middle, high) : (low, middle);
         }
 
         return high;
@@ -92,4 +91,13 @@ internal readonly struct SlotTable
     // Held between the first slot and the last while still a fraction, so that the plain conversion will do.
     private int SlotOf(double value)
         => _start + double.ConvertToIntegerNative<int>(double.MaxNative(double.MinNative((value - First) * _slotsPerUnit, _lastSlot), 0));
+}
+
+/// <summary>A value of a list and, for the slot of the same number, the index of its first value: side by side, since they are looked up together.</summary>
+internal struct Slot
+{
+    public double Value;
+    public int First;
+
+    public static Slot[] Of(double[] values) => Array.ConvertAll(values, value => new Slot { Value = value });
 }

@@ -17,11 +17,12 @@ internal sealed class EqualSpacedPath(HullSides hull, double spacingMetres) : Zi
     {
         var first = turns.Count;
         var start = _sides.MinY + ((share - 1) * Period);
+        var (left, right) = (0, 0);
         for (var turn = 0; ; turn++)
         {
             var y = start + (turn * spacingMetres);
             var isLeft = (turn % 2 == 0) != mirrored;
-            turns.Add(new Turn(isLeft ? _sides.Left(y) : _sides.Right(y), y, isLeft));
+            turns.Add(new Turn(isLeft ? _sides.Left(y, ref left) : _sides.Right(y, ref right), y, isLeft));
             if (y > _sides.MaxY)
             {
                 break;

@@ -35,10 +35,24 @@ internal sealed class HullSides
     public double MeanWidth => Sections().Sum(section => section.AreaSquareMetres) / (MaxY - MinY);
 
     /// <summary>x of the left side; beyond the ends that of the end.</summary>
-    public double Left(double y) => At(_left, Within(y));
+    public double Left(double y)
+    {
+        var from = 0;
+        return Left(y, ref from);
+    }
+
+    /// <summary>The same, for heights that ascend from call to call: looked for from a vertex on, at first 0, which moves along.</summary>
+    public double Left(double y, ref int from) => At(_left, Within(y), ref from);
 
     /// <summary>x of the right side; beyond the ends that of the end.</summary>
-    public double Right(double y) => At(_right, Within(y));
+    public double Right(double y)
+    {
+        var from = 0;
+        return Right(y, ref from);
+    }
+
+    /// <summary>See <see cref="Left(double, ref int)"/>.</summary>
+    public double Right(double y, ref int from) => At(_right, Within(y), ref from);
 
     /// <summary>
     /// The same, but a side ends where it becomes flatter than a leg of a zigzag that turns at such steps along the axis, and goes on straight along
@@ -97,7 +111,7 @@ internal sealed class HullSides
         return chain[first..(last + 1)];
     }
 
-    private static double At((double X, double Y)[] chain, double y)
+    private static double At((double X, double Y)[] chain, double y, ref int from)
     {
         if (y <= chain[0].Y)
         {
@@ -109,15 +123,13 @@ internal sealed class HullSides
             return chain[^1].X;
         }
 
-        var (low, high) = (0, chain.Length - 1);
-        while (high - low > 1)
+        while (chain[from + 1].Y <= y)
         {
-            var middle = (low + high) / 2;
-            (low, high) = chain[middle].Y <= y ? (middle, high) : (low, middle);
+            from++;
         }
 
-        var (from, to) = (chain[low], chain[high]);
-        return from.X + ((y - from.Y) * (to.X - from.X) / (to.Y - from.Y));
+        var (low, high) = (chain[from], chain[from + 1]);
+        return low.X + ((y - low.Y) * (high.X - low.X) / (high.Y - low.Y));
     }
 
     private static int IndexOf((double X, double Y)[] hull, Func<(double X, double Y), (double X, double Y), bool> better)
