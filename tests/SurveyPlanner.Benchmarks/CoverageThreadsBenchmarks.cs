@@ -4,15 +4,18 @@ using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Benchmarks;
 
-/// <summary>A whole simulation of 1,000 draws on one thread and on two; coast of 10,000 vertices.</summary>
+/// <summary>A whole simulation on one thread and on two; coast of 10,000 vertices.</summary>
 [SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 15)]
 public class CoverageThreadsBenchmarks
 {
     private LayoutGenerator _layout = null!;
     private CellGrid _grid = null!;
 
-    [Params(10_000, 1_000_000)]
-    public int Cells { get; set; }
+    /// <summary>Cells of the grid and draws of the simulation.</summary>
+    [ParamsSource(nameof(Sizes))]
+    public Size Problem { get; set; } = null!;
+
+    public static IEnumerable<Size> Sizes => [new(10_000, 1000), new(10_000, 10_000), new(1_000_000, 1000)];
 
     [Params("Parallel", "Zigzag", "PointGrid")]
     public string Kind { get; set; } = "";
@@ -24,9 +27,14 @@ public class CoverageThreadsBenchmarks
     public void Setup()
     {
         _layout = CoverageScene.Layout(CoverageScene.Island(10_000), Enum.Parse<LayoutKind>(Kind));
-        _grid = CoverageScene.Cells(_layout, Cells);
+        _grid = CoverageScene.Cells(_layout, Problem.Cells);
     }
 
     [Benchmark]
-    public object Simulation() => CoverageSimulation.Run(_layout, _grid, 1000, CoverageScene.Seed, 0, Threads, CancellationToken.None);
+    public object Simulation() => CoverageSimulation.Run(_layout, _grid, Problem.Draws, CoverageScene.Seed, 0, Threads, CancellationToken.None);
+
+    public sealed record Size(int Cells, int Draws)
+    {
+        public override string ToString() => string.Create(System.Globalization.CultureInfo.InvariantCulture, $"{Cells:#,0} cells, {Draws:#,0} draws");
+    }
 }
