@@ -56,7 +56,7 @@ internal static class CoverageSimulation
         var runs = RunsOfDraws(replicates, workers);
         var counters = new CoverageCounter[workers];
         var next = -1;
-        void Report() => progress?.Add((double)DrawsPerReport / replicates);
+        void Report(int draws) => progress?.Add((double)draws / replicates);
         void Work(int worker)
         {
             var counter = counters[worker] = new CoverageCounter(grid, generator.Stratum.HalfWidthMetres);
@@ -105,7 +105,7 @@ internal static class CoverageSimulation
         StratifiedOffsets offsets,
         int first,
         int end,
-        Action report,
+        Action<int> report,
         CancellationToken stop)
     {
         var drawn = new double[generator.OffsetRanges.Length];
@@ -123,9 +123,10 @@ internal static class CoverageSimulation
         {
             stop.ThrowIfCancellationRequested();
             Draw(draw, onlyRemember: false);
-            if ((draw - first) % DrawsPerReport == DrawsPerReport - 1)
+            var done = draw - first + 1;
+            if (done % DrawsPerReport == 0 || draw == end - 1)
             {
-                report();
+                report(done % DrawsPerReport == 0 ? DrawsPerReport : done % DrawsPerReport);
             }
         }
     }

@@ -27,12 +27,12 @@ internal sealed class Loops : TrackGrid
 
     protected override (double Left, double Right, double Below, double Above) Reach => (0, SideMetres, 0, SideMetres);
 
-    protected override void AddTrack(double x, double y, int transect, FrameShape? clip, ref PhiloxStream random, PieceBuffer output)
+    protected override void AddTrack(double x, double y, int leg, ref PhiloxStream random, SlantedLines output)
     {
         var (right, top) = (x + SideMetres, y + SideMetres);
-        AddSide(x, y, right, y, transect, clip, output);
-        AddSide(right, y, right, top, transect, clip, output);
-        AddSide(right, top, x, top, transect, clip, output);
-        AddSide(x, top, x, y, transect, clip, output);
+        output.Add(leg, x, y, right, y);
+        output.Add(leg, right, y, right, top);
+        output.Add(leg, right, top, x, top);
+        output.Add(leg, x, top, x, y);
     }
 }

@@ -31,9 +31,9 @@ internal sealed class Segments : TrackGrid
     protected override (double Left, double Right, double Below, double Above) Reach
         => HasRandomBearings ? (_length, _length, _length, _length) : (0, _length, 0, 0);
 
-    protected override void AddTrack(double x, double y, int transect, FrameShape? clip, ref PhiloxStream random, PieceBuffer output)
+    protected override void AddTrack(double x, double y, int leg, ref PhiloxStream random, SlantedLines output)
     {
         var (sin, cos) = HasRandomBearings ? Math.SinCos(2 * Math.PI * random.NextDouble()) : (0, 1);
-        AddSide(x, y, x + (_length * cos), y + (_length * sin), transect, clip, output);
+        output.Add(leg, x, y, x + (_length * cos), y + (_length * sin));
     }
 }

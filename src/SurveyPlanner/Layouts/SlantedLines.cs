@@ -54,6 +54,19 @@ internal sealed class SlantedLines
 
     public int LegOf(int line) => _legs[line];
 
+    /// <summary>Adds the lines of one leg whole. Returns the number of the line after them.</summary>
+    public int KeepLeg(int first, int transect, PieceBuffer output)
+    {
+        var line = first;
+        for (; line < Count && _legs[line] == _legs[first]; line++)
+        {
+            var (from, (toX, toY)) = (_lines[line], _lines[line].At(_lines[line].Length));
+            output.Add(transect, from.StartX, from.StartY, toX, toY);
+        }
+
+        return line;
+    }
+
     /// <summary>Where on a line it crosses the boundary, ascending, and whether it leaves the inside there.</summary>
     public void CrossingsOf(int line, out Span<double> along, out Span<bool> leaves)
     {

@@ -59,36 +59,47 @@ internal abstract class TrackGrid : LayoutGenerator
 
             var (first, last) = Nodes(offsets[0], low - clip.MinX - reach.Right, high - clip.MinX + reach.Left);
             var (before, leftwards) = (transect, rowsWithTracks % 2 == 1);
+            output.Slanted.Clear();
             for (var i = first; i <= last; i++)
             {
                 var column = leftwards ? first + last - i : i;
-                AddNode(clip.MinX + ((column + offsets[0]) * SpacingMetres), y, ref transect, ref random, output);
+                var x = clip.MinX + ((column + offsets[0]) * SpacingMetres);
+                if (!IsKeptWhole || clip.Contains(x, y))
+                {
+                    AddTrack(x, y, leg: i, ref random, output.Slanted);
+                }
             }
 
+            transect = CutRow(clip, transect, output);
             rowsWithTracks += transect > before ? 1 : 0;
         }
     }
 
-    /// <summary>Adds the track that starts at a node.</summary>
+    /// <summary>Adds the sides of the track that starts at a node.</summary>
     /// <param name="x">The node.</param>
     /// <param name="y">The node.</param>
-    /// <param name="transect">Number of the track.</param>
-    /// <param name="clip">The shape to cut it at; null to leave it whole.</param>
+    /// <param name="leg">Number of the track in its row.</param>
     /// <param name="random">For whatever is random about it.</param>
-    /// <param name="output">Takes the pieces.</param>
-    protected abstract void AddTrack(double x, double y, int transect, FrameShape? clip, ref PhiloxStream random, PieceBuffer output);
+    /// <param name="output">Takes the sides, in the order they are walked.</param>
+    protected abstract void AddTrack(double x, double y, int leg, ref PhiloxStream random, SlantedLines output);
 
-    /// <summary>Adds what a shape leaves of one side of a track.</summary>
-    protected static void AddSide(double fromX, double fromY, double toX, double toY, int transect, FrameShape? clip, PieceBuffer output)
+    /// <summary>Adds what is left of the tracks of a row. Returns the number of the next transect.</summary>
+    private int CutRow(FrameShape clip, int transect, PieceBuffer output)
     {
-        if (clip is null)
+        var lines = output.Slanted;
+        if (!IsKeptWhole)
         {
-            output.Add(transect, fromX, fromY, toX, toY);
+            clip.Tree.FindCrossings(lines);
         }
-        else
+
+        for (var line = 0; line < lines.Count;)
         {
-            Clipper.ClipSegment(clip, fromX, fromY, toX, toY, transect, output);
+            var before = output.Count;
+            line = IsKeptWhole ? lines.KeepLeg(line, transect, output) : Clipper.ClipLeg(clip, lines, line, transect, output);
+            transect += output.KeepStretches(before, Design.MinLengthMetres) ? 1 : 0;
         }
+
+        return transect;
     }
 
     protected static double SpacingFor(StratumFrame stratum, LayoutDesign design, double trackMetres, Func<double, LayoutGenerator> at)
@@ -103,19 +114,6 @@ internal abstract class TrackGrid : LayoutGenerator
             Sizing.TotalLength length => SpacingSearch.ForLength(stratum, at, length.Metres, Math.Sqrt(area * trackMetres / length.Metres)),
             _ => throw new InvalidOperationException("size_from = \"precision\" is turned into a length before a layout is made"),
         };
-    }
-
-    private void AddNode(double x, double y, ref int transect, ref PhiloxStream random, PieceBuffer output)
-    {
-        var clip = Stratum.Clip;
-        if (IsKeptWhole && !clip.Contains(x, y))
-        {
-            return;
-        }
-
-        var before = output.Count;
-        AddTrack(x, y, transect, IsKeptWhole ? null : clip, ref random, output);
-        transect += output.KeepStretches(before, Design.MinLengthMetres) ? 1 : 0;
     }
 
     /// <summary>First and last node between two distances from the corner of the bounding box.</summary>
