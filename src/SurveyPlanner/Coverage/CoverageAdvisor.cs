@@ -24,7 +24,7 @@ internal static class CoverageAdvisor
     public static CoverageAdvice Of(LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
         var typicalError = coverage.StandardError;
-        double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0;
+        double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0, unevenTimes = 0;
         for (var i = 0; i < distances.Length; i++)
         {
             var cell = coverage.Cells[i];
@@ -37,6 +37,7 @@ internal static class CoverageAdvisor
             {
                 inside += cell.AreaKm2;
                 unevenInside += isUneven ? cell.AreaKm2 : 0;
+                unevenTimes += IsUneven(cell with { Exact = null, Simulated = cell.ExpectedTimes }, coverage.Nominal, typicalError) ? cell.AreaKm2 : 0;
             }
         }
 
@@ -49,6 +50,7 @@ internal static class CoverageAdvisor
         }
 
         var sentences = CoverageSentences.Of(finding, design, coverage, uneven / area)
+            + CoverageSentences.OfEvenTimes(finding, unevenTimes <= SmallShare * inside)
             + CoverageSentences.OfOverlap(design, coverage)
             + CoverageSentences.OfUndrawn(finding, coverage, undrawn, area);
         double? never = undrawn == 0 || EnoughDraws.TellZero(coverage) ? undrawn : null;

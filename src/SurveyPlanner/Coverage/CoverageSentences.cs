@@ -24,13 +24,19 @@ internal static class CoverageSentences
             CoverageFinding.Even =>
                 $"Coverage is even as far as {Count(coverage.Replicates)} simulated draws tell: {Percent(1 - unevenShare)} of the area is within a tenth of nominal, or no farther from that than chance explains ({Percent(EnoughDraws.StandardErrors * coverage.StandardError / coverage.Nominal)} of nominal).",
             CoverageFinding.UnevenAtEdge => $"Coverage is uneven at the edge only {uneven}: {(EvensEdge(design) is { } how ? $"consider {how}, or " : "")}{weight}.",
-            CoverageFinding.UnevenAlongAxis => $"Coverage changes along the axis {uneven}: {Otherwise(EvensInside(design))}{weight}.",
-            CoverageFinding.UnevenInside => $"Coverage is uneven inside the stratum too {uneven}: {Otherwise(EvensInside(design))}{weight}.",
+            CoverageFinding.UnevenAlongAxis => $"Coverage changes along the axis {uneven}: {Otherwise(EvensInside(design, finding))}{weight}.",
+            CoverageFinding.UnevenInside => $"Coverage is uneven inside the stratum too {uneven}: {Otherwise(EvensInside(design, finding))}{weight}.",
             CoverageFinding.TooFewDraws =>
                 $"{Count(coverage.Replicates)} simulated draws are too few to tell the coverage of single cells and {(design.IsPoints ? "points" : "transects")}, only its mean over the stratum: {Needed(coverage)}.",
             _ => throw new InvalidOperationException($"unknown finding {finding}"),
         };
     }
+
+    /// <summary>That places are covered equally often where they are not equally likely to be covered at all: strips overlap there. Else nothing.</summary>
+    public static string OfEvenTimes(CoverageFinding finding, bool timesAreEven)
+        => timesAreEven && (finding is CoverageFinding.UnevenInside or CoverageFinding.UnevenAlongAxis)
+            ? " Strips overlap there, and the expected number of times that a place is covered is even: whoever counts each strip's sightings by themselves needs no weights."
+            : "";
 
     /// <summary>That places are covered several times over, where they are; else nothing.</summary>
     public static string OfOverlap(LayoutDesign design, StratumCoverage coverage)
@@ -95,7 +101,7 @@ internal static class CoverageSentences
     }
 
     /// <summary>What makes a design uneven away from the boundary, the other way round; null where nothing in it should.</summary>
-    private static string? EvensInside(LayoutDesign design)
+    private static string? EvensInside(LayoutDesign design, CoverageFinding finding)
     {
         var ways = new List<string>();
         if (design.MinLengthMetres > 0)
@@ -108,7 +114,8 @@ internal static class CoverageSentences
             ways.Add("cutting what crosses the boundary (crossing = \"clip\")");
         }
 
-        if (design.Kind == LayoutKind.Zigzag && design.Turning != ZigzagTurning.AdjustedAngle)
+        // Its angle evens out what changes along the axis, not what strips share where legs meet.
+        if (design.Kind == LayoutKind.Zigzag && design.Turning != ZigzagTurning.AdjustedAngle && finding == CoverageFinding.UnevenAlongAxis)
         {
             ways.Add("an adjusted-angle zigzag (turning = \"adjusted-angle\")");
         }

@@ -67,6 +67,21 @@ public class CoverageAdviceTests
         Assert.Contains("turning = \"adjusted-angle\"", advice.Sentence, StringComparison.Ordinal);
     }
 
+    /// <summary>
+    /// Steep legs between parallel sides: near a turn, up to w H / c = 5.5 km from it, both legs' strips cover the same places. No other turning is
+    /// advised, for in a rectangle all are the same; each strip by itself covers evenly.
+    /// </summary>
+    [Fact]
+    public void Legs_that_meet_share_places_but_cover_them_equally_often()
+    {
+        var steep = Zigzag with { Sizing = new Sizing.Spacing(6_000), HalfWidthMetres = 300 };
+        var advice = Judge.Of(PlaneStrata.Rectangle(100_000, 110_000), steep, 1500, 4000).Advice!;
+
+        Assert.Equal(CoverageFinding.UnevenInside, advice.Finding);
+        Assert.DoesNotContain("adjusted-angle", advice.Sentence, StringComparison.Ordinal);
+        Assert.Contains("the expected number of times that a place is covered is even", advice.Sentence, StringComparison.Ordinal);
+    }
+
     [Theory]
     [InlineData(5, CoverageFinding.Even)]
     [InlineData(6, CoverageFinding.UnevenAtEdge)]
