@@ -72,22 +72,35 @@ public class PlanCommandTests
         }
     }
 
-    /// <summary>The executable itself, where comma is the decimal sign and the day begins elsewhere.</summary>
+    /// <summary>
+    /// The executable itself, where comma is the decimal sign and the day begins elsewhere, and on processors without the widest vectors or with
+    /// hardly any. (On a processor without them those runs are the same; .NET documents the switches.)
+    /// </summary>
     [Fact]
-    public async Task Locale_and_time_zone_change_nothing()
+    public async Task Locale_time_zone_and_processor_change_nothing()
     {
         using var work = new Workspace();
         work.CopySamples();
         var plan = work.At("sample-regions/marine-mammals-shelf/plan.toml");
-        foreach (var (folder, locale, zone) in new[] { ("a", "C", "UTC"), ("b", "de_DE.UTF-8", "Asia/Tokyo") })
+        (string Folder, (string Name, string Value)[] Variables)[] runs =
+        [
+            ("a", [("LC_ALL", "C"), ("TZ", "UTC")]),
+            ("b", [("LC_ALL", "de_DE.UTF-8"), ("TZ", "Asia/Tokyo")]),
+            ("c", [("DOTNET_EnableAVX512", "0"), ("DOTNET_EnableAVX512F", "0")]),
+            ("d", [("DOTNET_EnableAVX", "0")]),
+        ];
+        foreach (var (folder, variables) in runs)
         {
             var start = new System.Diagnostics.ProcessStartInfo("dotnet", [typeof(Application).Assembly.Location, "plan", plan, "--out", work.At(folder)])
             {
                 RedirectStandardOutput = true,
                 RedirectStandardError = true,
             };
-            start.Environment["LC_ALL"] = locale;
-            start.Environment["TZ"] = zone;
+            foreach (var (name, value) in variables)
+            {
+                start.Environment[name] = value;
+            }
+
             using var process = System.Diagnostics.Process.Start(start)!;
             var error = process.StandardError.ReadToEndAsync(TestContext.Current.CancellationToken);
             await process.StandardOutput.ReadToEndAsync(TestContext.Current.CancellationToken);
@@ -95,9 +108,12 @@ public class PlanCommandTests
             Assert.True(process.ExitCode == 0, await error);
         }
 
-        foreach (var file in Files.Except(["record.json"]))
+        foreach (var (folder, _) in runs[1..])
         {
-            Assert.Equal(File.ReadAllBytes(Path.Combine(work.At("a"), file)), File.ReadAllBytes(Path.Combine(work.At("b"), file)));
+            foreach (var file in Files.Except(["record.json"]))
+            {
+                Assert.Equal(File.ReadAllBytes(Path.Combine(work.At("a"), file)), File.ReadAllBytes(Path.Combine(work.At(folder), file)));
+            }
         }
     }
 
