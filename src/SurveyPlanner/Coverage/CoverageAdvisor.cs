@@ -23,21 +23,26 @@ internal static class CoverageAdvisor
     /// <param name="along">Position of each cell's place along the axis (across the lines), metres.</param>
     public static CoverageAdvice Of(LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
-        var typicalError = coverage.StandardError;
+        var (typicalError, reach) = (coverage.StandardError, EdgeReach(design));
         double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0, unevenTimes = 0;
         for (var i = 0; i < distances.Length; i++)
         {
             var cell = coverage.Cells[i];
-            var isUneven = IsUneven(cell, coverage.Nominal, typicalError);
+
+            // Where few draws cover a cell, its own standard error is as much a matter of chance as its coverage, and least where no draw does.
+            var doubt = cell.Exact is null ? EnoughDraws.StandardErrors * Math.Max(cell.StandardError, typicalError) : 0;
+            var isUneven = IsUneven(cell.Best, coverage.Nominal, doubt);
             area += cell.AreaKm2;
             undrawn += cell.Best == 0 ? cell.AreaKm2 : 0;
             uneven += isUneven ? cell.AreaKm2 : 0;
 
-            if (distances[i] > EdgeReach(design))
+            if (distances[i] > reach)
             {
                 inside += cell.AreaKm2;
                 unevenInside += isUneven ? cell.AreaKm2 : 0;
-                unevenTimes += IsUneven(cell with { Exact = null, Simulated = cell.ExpectedTimes }, coverage.Nominal, typicalError) ? cell.AreaKm2 : 0;
+
+                // No doubt granted: to be called even, it must be seen to be.
+                unevenTimes += IsUneven(cell.ExpectedTimes, coverage.Nominal, doubt: 0) ? cell.AreaKm2 : 0;
             }
         }
 
@@ -50,7 +55,7 @@ internal static class CoverageAdvisor
         }
 
         var sentences = CoverageSentences.Of(finding, design, coverage, uneven / area)
-            + CoverageSentences.OfEvenTimes(finding, unevenTimes <= SmallShare * inside)
+            + CoverageSentences.OfEvenTimes(finding, design, unevenTimes <= SmallShare * inside)
             + CoverageSentences.OfOverlap(design, coverage)
             + CoverageSentences.OfUndrawn(finding, coverage, undrawn, area);
         double? never = undrawn == 0 || EnoughDraws.TellZero(coverage) ? undrawn : null;
@@ -65,12 +70,7 @@ internal static class CoverageAdvisor
         ? design.HalfWidthMetres + (design.SegmentMetres ?? 0) + (Math.Sqrt(2) * (design.SideMetres ?? 0))
         : design.HalfWidthMetres;
 
-    // Where few draws cover a cell, its own standard error is as much a matter of chance as its coverage, and least where no draw does.
-    private static bool IsUneven(in CoverageCell cell, double nominal, double typicalError)
-    {
-        var doubt = cell.Exact is null ? EnoughDraws.StandardErrors * Math.Max(cell.StandardError, typicalError) : 0;
-        return Math.Abs(cell.Best - nominal) - doubt > Band * nominal;
-    }
+    private static bool IsUneven(double coverage, double nominal, double doubt) => Math.Abs(coverage - nominal) - doubt > Band * nominal;
 
     /// <summary>
     /// Whether, away from the boundary, the mean over all that lies at one height of the axis departs from nominal by more than a tenth, on more than
@@ -85,10 +85,11 @@ internal static class CoverageAdvisor
             (low, high) = (Math.Min(low, y), Math.Max(high, y));
         }
 
+        var reach = EdgeReach(design);
         var (areas, sums) = (new double[AxisClasses], new double[AxisClasses]);
         for (var i = 0; i < distances.Length; i++)
         {
-            if (distances[i] > EdgeReach(design))
+            if (distances[i] > reach)
             {
                 var index = Math.Min((int)((along[i] - low) / Math.Max(high - low, double.Epsilon) * AxisClasses), AxisClasses - 1);
                 areas[index] += coverage.Cells[i].AreaKm2;

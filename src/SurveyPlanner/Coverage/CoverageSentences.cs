@@ -32,10 +32,10 @@ internal static class CoverageSentences
         };
     }
 
-    /// <summary>That places are covered equally often where they are not equally likely to be covered at all: strips overlap there. Else nothing.</summary>
-    public static string OfEvenTimes(CoverageFinding finding, bool timesAreEven)
+    /// <summary>That places are covered equally often where they are not equally likely to be covered at all, as where legs meet; else nothing.</summary>
+    public static string OfEvenTimes(CoverageFinding finding, LayoutDesign design, bool timesAreEven)
         => timesAreEven && (finding is CoverageFinding.UnevenInside or CoverageFinding.UnevenAlongAxis)
-            ? " Strips overlap there, and the expected number of times that a place is covered is even: whoever counts each strip's sightings by themselves needs no weights."
+            ? $" {Swept(design)} overlap there, and the expected number of times that a place is covered is even: whoever counts each {(design.IsPoints ? "point" : "strip")}'s sightings by themselves needs no weights."
             : "";
 
     /// <summary>That places are covered several times over, where they are; else nothing.</summary>
@@ -49,7 +49,7 @@ internal static class CoverageSentences
         }
 
         return times <= OverlapTold * draws ? ""
-            : $" {(design.IsPoints ? "Disks" : "Strips")} overlap: a place that is covered is covered {ThreeDigits(times / draws)} times on average, and an animal there may be counted as often.";
+            : $" {Swept(design)} overlap: a place that is covered is covered {ThreeDigits(times / draws)} times on average, and an animal there may be counted as often.";
     }
 
     /// <summary>What is known of places that no draw covered, or none can; nothing where there are none.</summary>
@@ -129,6 +129,8 @@ internal static class CoverageSentences
     }
 
     private static string Otherwise(string? evensOut) => evensOut is null ? "" : $"{evensOut} would even it out; otherwise ";
+
+    private static string Swept(LayoutDesign design) => design.IsPoints ? "Disks" : "Strips";
 
     private static string Percent(double share) => share is > 0 and < 0.001
         ? "under 0.1 %"

@@ -8,7 +8,6 @@ internal sealed class PieceBuffer
 {
     private Piece[] _pieces = new Piece[256];
 
-
     /// <summary>Room for the crossings of one line; see <see cref="FrameShape.CrossingsAt"/>.</summary>
     public double[] Crossings = new double[64];
 

@@ -15,17 +15,16 @@ internal sealed class SlantedLines
     private double[] _along = new double[64];
     private bool[] _leaves = new bool[64];
     private int _crossings;
+    private (int Line, int Box)[] _more = new (int, int)[256];
 
     public int Count { get; private set; }
 
     public ReadOnlySpan<Segment> Lines => _lines.AsSpan(0, Count);
 
-    /// <summary>Room for an <see cref="EdgeTree"/> that looks for crossings: boxes that lines meet, and those of the next level.</summary>
+    /// <summary>Room for an <see cref="EdgeTree"/> that looks for crossings: boxes that lines meet.</summary>
     public (int Line, int Box)[] Found { get; private set; } = new (int, int)[256];
 
-    /// <summary>See <see cref="Found"/>.</summary>
-    public (int Line, int Box)[] More { get; private set; } = new (int, int)[256];
-
+    /// <summary>Room for how the boxes see each line.</summary>
     public SegmentProbe[] Probes { get; private set; } = new SegmentProbe[64];
 
     public void Clear() => (Count, _crossings) = (0, 0);
@@ -60,8 +59,9 @@ internal sealed class SlantedLines
         var line = first;
         for (; line < Count && _legs[line] == _legs[first]; line++)
         {
-            var (from, (toX, toY)) = (_lines[line], _lines[line].At(_lines[line].Length));
-            output.Add(transect, from.StartX, from.StartY, toX, toY);
+            var whole = _lines[line];
+            var (toX, toY) = whole.At(whole.Length);
+            output.Add(transect, whole.StartX, whole.StartY, toX, toY);
         }
 
         return line;
@@ -78,16 +78,16 @@ internal sealed class SlantedLines
     /// <summary>Room for so many boxes of the next level.</summary>
     public Span<(int Line, int Box)> RoomForMore(int count)
     {
-        if (More.Length < count)
+        if (_more.Length < count)
         {
-            More = new (int, int)[2 * count];
+            _more = new (int, int)[2 * count];
         }
 
-        return More;
+        return _more;
     }
 
     /// <summary>The boxes of the next level are those found now.</summary>
-    public void SwapBoxes() => (Found, More) = (More, Found);
+    public void SwapBoxes() => (Found, _more) = (_more, Found);
 
     /// <summary>From here on crossings are those of a line; lines ascending, none left out.</summary>
     public void BeginCrossings(int line) => _crossingStarts[line] = _crossings;
