@@ -21,14 +21,8 @@ internal sealed class CellGrid
         RowStarts = rowStarts;
         X = x;
         Cells = cells;
-        _rowSlots = Slot.Of(rowY);
-        _rows = new SlotTable(_rowSlots, 0, rowY.Length);
-        _placeSlots = Slot.Of(x);
-        _rowPlaces = new SlotTable[rowY.Length];
-        for (var row = 0; row < rowY.Length; row++)
-        {
-            _rowPlaces[row] = new SlotTable(_placeSlots, rowStarts[row], rowStarts[row + 1]);
-        }
+        _rows = SlotTable.Of(rowY, [0, rowY.Length], 0, out _rowSlots)[0];
+        _rowPlaces = SlotTable.Of(x, rowStarts, cells?.SizeMetres ?? 0, out _placeSlots);
     }
 
     /// <summary>The cells that the places stand for, with the same index; null where they stand for none.</summary>
@@ -73,16 +67,16 @@ internal sealed class CellGrid
     }
 
     /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
-    public int FirstRowFrom(double y) => _rows.FirstFrom(_rowSlots, y);
+    public int FirstRowFrom(double y) => _rows.FirstFrom(_rowSlots, RowY, y);
 
     /// <summary>Whether a row has places on either side of some x or between them. Most rows at a coast hold a place or two, which most ranges miss.</summary>
-    public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last && high >= _rowPlaces[row].First;
+    public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last & high >= _rowPlaces[row].First;
 
     /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end, not after it where there are none.</summary>
     public (int First, int End) Run(int row, double low, double high)
     {
         ref readonly var places = ref _rowPlaces[row];
-        return (places.FirstFrom(_placeSlots, low), places.FirstBeyond(_placeSlots, high));
+        return (places.FirstFrom(_placeSlots, X, low), places.FirstBeyond(_placeSlots, X, high));
     }
 }
 

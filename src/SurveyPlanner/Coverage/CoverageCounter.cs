@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Coverage;
@@ -34,7 +35,14 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         _stretchCount = 0;
         foreach (ref readonly var piece in pieces)
         {
-            Cover(new Strip(piece, halfWidthMetres));
+            if (piece.IsPoint)
+            {
+                Cover(new DiskStrip(piece, halfWidthMetres));
+            }
+            else
+            {
+                Cover(new RectangleStrip(piece, halfWidthMetres));
+            }
         }
 
         foreach (ref readonly var stretch in _stretches.AsSpan(0, _stretchCount))
@@ -122,28 +130,30 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         }
     }
 
-    private void Cover(in Strip strip)
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private void Cover<TStrip>(in TStrip strip)
+        where TStrip : struct, IStrip
     {
         var rowY = grid.RowY;
-        for (var row = grid.FirstRowFrom(strip.LowY); row < rowY.Length && rowY[row] <= strip.HighY; row++)
+        var (row, highY, count) = (grid.FirstRowFrom(strip.LowY), strip.HighY, _stretchCount);
+        while (row < rowY.Length && rowY[row] <= highY)
         {
-            strip.RangeAt(rowY[row], out var low, out var high);
-            if (grid.MayHold(row, low, high))
+            // As far as there is room.
+            var stretches = _stretches;
+            for (; row < rowY.Length && rowY[row] <= highY && count < stretches.Length; row++)
             {
-                AddStretch(row, low, high);
+                strip.RangeAt(rowY[row], out var low, out var high);
+                stretches[count] = new Stretch { Row = row, Low = low, High = high };
+                count += grid.MayHold(row, low, high) ? 1 : 0;
+            }
+
+            if (count == stretches.Length)
+            {
+                Array.Resize(ref _stretches, 2 * count);
             }
         }
-    }
 
-    private void AddStretch(int row, double low, double high)
-    {
-        if (_stretchCount == _stretches.Length)
-        {
-            Array.Resize(ref _stretches, 2 * _stretchCount);
-        }
-
-        ref var stretch = ref _stretches[_stretchCount++];
-        (stretch.Row, stretch.Low, stretch.High) = (row, low, high);
+        _stretchCount = count;
     }
 
     private void CountRow(int row)

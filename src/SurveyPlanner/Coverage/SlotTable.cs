@@ -1,103 +1,119 @@
 namespace SurveyPlanner.Coverage;
 
 /// <summary>
-/// Finds a place in an ascending stretch of a list in a step or two where it is spread fairly evenly: the way from first to last value is cut into
-/// as many equal slots as there are values, and for each slot it is noted which value is its first. Where values crowd, it halves.
+/// Finds a place in an ascending stretch of a list at one look: the way from its first value to its last is cut into equal slots, and each slot keeps
+/// its first value and the index of that. Slots with several values halve them.
 /// </summary>
 internal readonly struct SlotTable
 {
-    private readonly int _start;
-    private readonly int _end;
-    private readonly double _slotsPerUnit;
+    private readonly int _firstSlot;
     private readonly double _lastSlot;
+    private readonly double _slotsPerUnit;
 
-    /// <param name="slots">The list; takes, in the same stretch, the index of the first value of each slot or a later one.</param>
-    /// <param name="start">Index of the first value of the stretch.</param>
-    /// <param name="end">Index after its last.</param>
-    public SlotTable(Slot[] slots, int start, int end)
+    private SlotTable(ReadOnlySpan<double> values, int firstSlot, int slots)
     {
-        (_start, _end) = (start, end);
-        if (start == end)
-        {
-            // Nothing is at least or at most what it would have to be.
-            (First, Last) = (double.PositiveInfinity, double.NegativeInfinity);
-            return;
-        }
-
-        (First, Last) = (slots[start].Value, slots[end - 1].Value);
-        _slotsPerUnit = Last > First ? (end - start) / (Last - First) : 0;
-        _lastSlot = end - start - 1;
-        var i = start;
-        for (var slot = start; slot < end; slot++)
-        {
-            while (SlotOf(slots[i].Value) < slot)
-            {
-                i++;
-            }
-
-            slots[slot].First = i;
-        }
+        // Nothing is at most the last value where there is none.
+        (First, Last) = values.IsEmpty ? (0, double.NegativeInfinity) : (values[0], values[^1]);
+        (_firstSlot, _lastSlot) = (firstSlot, slots - 1);
+        _slotsPerUnit = Last > First ? slots / (Last - First) : 0;
     }
 
-    /// <summary>The first value; infinite where there is none.</summary>
+    /// <summary>The first value; 0 where there is none.</summary>
     public double First { get; }
 
     /// <summary>The last value; minus infinity where there is none.</summary>
     public double Last { get; }
 
-    /// <summary>Index of the first value that is at least so large; the end where none is.</summary>
-    public int FirstFrom(Slot[] slots, double least) => least <= Last ? Find(slots, least) : _end;
-
-    /// <summary>Index of the first value that is larger; the end where none is.</summary>
-    public int FirstBeyond(Slot[] slots, double most)
+    /// <summary>A table for each stretch of a list.</summary>
+    /// <param name="values">The list.</param>
+    /// <param name="starts">Index of the first value of each stretch, and the number of values as last entry.</param>
+    /// <param name="step">What values are mostly apart, as wide as a slot shall be; 0 where that is not known.</param>
+    /// <param name="slots">Takes the slots of all tables.</param>
+    public static SlotTable[] Of(double[] values, ReadOnlySpan<int> starts, double step, out Slot[] slots)
     {
-        if (!(most < Last))
+        var tables = new SlotTable[starts.Length - 1];
+        var total = 0;
+        for (var i = 0; i < tables.Length; i++)
         {
-            return _end;
+            var stretch = values.AsSpan(starts[i]..starts[i + 1]);
+            var count = SlotsFor(stretch, step);
+            tables[i] = new SlotTable(stretch, total, count);
+            total += count;
         }
 
-        var i = Find(slots, most);
-        while (slots[i].Value == most)
+        slots = new Slot[total];
+        for (var i = 0; i < tables.Length; i++)
         {
-            i++;
+            tables[i].Fill(values, starts[i], starts[i + 1], slots.AsSpan(0, i + 1 == tables.Length ? total : tables[i + 1]._firstSlot));
         }
 
-        return i;
+        return tables;
     }
 
-    /// <summary>Index of the first value that is at least so large as a number that is not larger than the last.</summary>
-    private int Find(Slot[] slots, double number)
+    /// <summary>Index of the first value that is at least so large; that after the last where none is.</summary>
+    public int FirstFrom(Slot[] slots, double[] values, double least)
     {
-        var slot = SlotOf(number);
-        var i = slots[slot].First;
-
-        // Mostly one to go or none, which no branch would foretell.
-        i += slots[i].Value < number ? 1 : 0;
-        return slots[i].Value < number ? Halve(slots, i, slot + 1 < _end ? slots[slot + 1].First : _end, number) : i;
+        ref readonly var slot = ref slots[SlotOf(least)];
+        var i = slot.First + (slot.Value < least ? 1 : 0);
+        return slot.More > 0 && slot.Value < least ? FirstFrom(values, i, i + slot.More, least) : i;
     }
 
-    /// <summary>The same, known to lie behind <paramref name="low"/> and at most at <paramref name="high"/>.</summary>
-    private static int Halve(Slot[] slots, int low, int high, double number)
+    /// <summary>Index of the first value that is larger; that after the last where none is.</summary>
+    public int FirstBeyond(Slot[] slots, double[] values, double most)
     {
-        while (high - low > 1)
+        ref readonly var slot = ref slots[SlotOf(most)];
+        var i = slot.First + (slot.Value <= most ? 1 : 0);
+        return slot.More > 0 && slot.Value <= most ? FirstFrom(values, i, i + slot.More, Math.BitIncrement(most)) : i;
+    }
+
+    private static int FirstFrom(double[] values, int low, int high, double least)
+    {
+        while (low < high)
         {
             var middle = (low + high) / 2;
-            (low, high) = slots[middle].Value < number ? (middle, high) : (low, middle);
+            (low, high) = values[middle] < least ? (middle + 1, high) : (low, middle);
         }
 
-        return high;
+        return low;
+    }
+
+    /// <summary>As many slots as values, or more where values leave gaps; but not for the sake of wide ones.</summary>
+    private static int SlotsFor(ReadOnlySpan<double> values, double step)
+        => step > 0 && values.Length > 1
+            ? (int)Math.Clamp(Math.Ceiling((values[^1] - values[0]) / step) + 1, values.Length, 4.0 * values.Length)
+            : Math.Max(1, values.Length);
+
+    private void Fill(double[] values, int start, int end, Span<Slot> slots)
+    {
+        var i = start;
+        for (var slot = _firstSlot; slot < slots.Length; slot++)
+        {
+            while (i < end && SlotOf(values[i]) < slot)
+            {
+                i++;
+            }
+
+            // A slot without values has none below what is looked for in it.
+            ref var current = ref slots[slot];
+            (current.First, current.Value) = (i, i < end ? values[i] : double.PositiveInfinity);
+            while (i + current.More + 1 < end && SlotOf(values[i + current.More + 1]) == slot)
+            {
+                current.More++;
+            }
+        }
     }
 
     // Held between the first slot and the last while still a fraction, so that the plain conversion will do.
     private int SlotOf(double value)
-        => _start + double.ConvertToIntegerNative<int>(double.MaxNative(double.MinNative((value - First) * _slotsPerUnit, _lastSlot), 0));
+        => _firstSlot + double.ConvertToIntegerNative<int>(double.MaxNative(double.MinNative((value - First) * _slotsPerUnit, _lastSlot), 0));
 }
 
-/// <summary>A value of a list and, for the slot of the same number, the index of its first value: side by side, since they are looked up together.</summary>
+/// <summary>
+/// A slot of a <see cref="SlotTable"/>: its first value and the index of it (or of the next value, where it has none), and how many more it has.
+/// </summary>
 internal struct Slot
 {
     public double Value;
     public int First;
-
-    public static Slot[] Of(double[] values) => Array.ConvertAll(values, value => new Slot { Value = value });
+    public int More;
 }

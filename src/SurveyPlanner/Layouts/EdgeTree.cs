@@ -18,6 +18,9 @@ internal sealed class EdgeTree
     private readonly double[] _ends;
     private readonly bool[] _insideLeft;
 
+    // Mean side of the boxes of edges.
+    private readonly double _boxMetres;
+
     // From boxes of edges up to at most sixteen.
     private readonly BoxLevel[] _levels;
 
@@ -39,6 +42,7 @@ internal sealed class EdgeTree
         }
 
         boxes = Box.RoundEvery(EdgesPerBox, boxes);
+        _boxMetres = boxes.Average(box => (box.HighX - box.LowX + box.HighY - box.LowY) / 2);
         var levels = new List<BoxLevel> { new(boxes, shape) };
         while (boxes.Length > BoxesPerBox)
         {
@@ -52,24 +56,17 @@ internal sealed class EdgeTree
     /// <summary>Finds where lines cross edges, each edge once.</summary>
     public void FindCrossings(SlantedLines lines)
     {
-        var segments = lines.Lines;
-        var probes = lines.Probes;
-        var all = lines.RoomForMore(lines.Count);
-        for (var line = 0; line < lines.Count; line++)
+        if (!lines.Boxes.StillHold(this, lines.Lines))
         {
-            probes[line] = new SegmentProbe(segments[line], _shape);
-            all[line] = (line, 0);
+            lines.Boxes.Begin(this, lines.Lines, _shape, _boxMetres);
+            for (var level = _levels.Length - 1; level >= 0; level--)
+            {
+                lines.Boxes.NextLevel(BoxesPerBox, out var boxes, out var found);
+                lines.Boxes.EndLevel(Open(_levels[level], lines.Boxes.Probes, boxes, found));
+            }
         }
 
-        lines.SwapBoxes();
-        var count = lines.Count;
-        for (var level = _levels.Length - 1; level >= 0; level--)
-        {
-            count = Open(_levels[level], probes, lines.Found.AsSpan(0, count), lines.RoomForMore(BoxesPerBox * count));
-            lines.SwapBoxes();
-        }
-
-        Cross(lines.Found.AsSpan(0, count), lines);
+        Cross(lines.Boxes.Met, lines);
         lines.Sort();
     }
 

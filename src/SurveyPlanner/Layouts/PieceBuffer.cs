@@ -102,6 +102,8 @@ internal sealed class PieceBuffer
 /// <param name="ToY">End.</param>
 internal readonly record struct Piece(int Transect, double FromX, double FromY, double ToX, double ToY)
 {
+    public bool IsPoint => FromX == ToX && FromY == ToY;
+
     public double Length => FromY == ToY
         ? Math.Abs(ToX - FromX)
         : Math.Sqrt(((ToX - FromX) * (ToX - FromX)) + ((ToY - FromY) * (ToY - FromY)));

@@ -20,16 +20,19 @@ internal readonly struct SegmentProbe
     private readonly float _reachY;
     private readonly float _reachBeside;
 
-    public SegmentProbe(in Segment segment, FrameShape shape)
+    /// <param name="segment">The segment.</param>
+    /// <param name="shape">The shape whose boxes it looks at.</param>
+    /// <param name="marginMetres">How far along x or y the segment may be off.</param>
+    public SegmentProbe(in Segment segment, FrameShape shape, double marginMetres)
     {
         var (x, y) = (segment.MiddleX - shape.MiddleX, segment.MiddleY - shape.MiddleY);
-        var margin = Margin * ((shape.MaxX - shape.MinX) + (shape.MaxY - shape.MinY) + segment.Length + Math.Abs(x) + Math.Abs(y));
+        var margin = marginMetres + (Margin * ((shape.MaxX - shape.MinX) + (shape.MaxY - shape.MinY) + segment.Length + Math.Abs(x) + Math.Abs(y)));
         (_middleX, _middleY) = ((float)x, (float)y);
         (_directionX, _directionY) = ((float)segment.DirectionX, (float)segment.DirectionY);
         (_steepness, _flatness) = (Math.Abs(_directionY), Math.Abs(_directionX));
         _reachX = (float)((Math.Abs(segment.DirectionX) * segment.Length / 2) + margin);
         _reachY = (float)((Math.Abs(segment.DirectionY) * segment.Length / 2) + margin);
-        _reachBeside = (float)margin;
+        _reachBeside = (float)(margin * (Math.Abs(segment.DirectionX) + Math.Abs(segment.DirectionY)));
     }
 
     /// <summary>One bit for each of sixteen boxes, given by their middles and half sides, that the segment meets.</summary>

@@ -15,17 +15,13 @@ internal sealed class SlantedLines
     private double[] _along = new double[64];
     private bool[] _leaves = new bool[64];
     private int _crossings;
-    private (int Line, int Box)[] _more = new (int, int)[256];
 
     public int Count { get; private set; }
 
     public ReadOnlySpan<Segment> Lines => _lines.AsSpan(0, Count);
 
-    /// <summary>Room for an <see cref="EdgeTree"/> that looks for crossings: boxes that lines meet.</summary>
-    public (int Line, int Box)[] Found { get; private set; } = new (int, int)[256];
-
-    /// <summary>Room for how the boxes see each line.</summary>
-    public SegmentProbe[] Probes { get; private set; } = new SegmentProbe[64];
+    /// <summary>The boxes of an <see cref="EdgeTree"/> that the lines meet, and may go on to meet in the next draw.</summary>
+    public BoxesMet Boxes { get; } = new();
 
     public void Clear() => (Count, _crossings) = (0, 0);
 
@@ -44,7 +40,6 @@ internal sealed class SlantedLines
             Array.Resize(ref _lines, 2 * Count);
             Array.Resize(ref _legs, 2 * Count);
             Array.Resize(ref _crossingStarts, (2 * Count) + 1);
-            Probes = new SegmentProbe[2 * Count];
         }
 
         _legs[Count] = leg;
@@ -74,20 +69,6 @@ internal sealed class SlantedLines
         along = _along.AsSpan(start, end - start);
         leaves = _leaves.AsSpan(start, end - start);
     }
-
-    /// <summary>Room for so many boxes of the next level.</summary>
-    public Span<(int Line, int Box)> RoomForMore(int count)
-    {
-        if (_more.Length < count)
-        {
-            _more = new (int, int)[2 * count];
-        }
-
-        return _more;
-    }
-
-    /// <summary>The boxes of the next level are those found now.</summary>
-    public void SwapBoxes() => (Found, _more) = (_more, Found);
 
     /// <summary>From here on crossings are those of a line; lines ascending, none left out.</summary>
     public void BeginCrossings(int line) => _crossingStarts[line] = _crossings;
