@@ -18,7 +18,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     private const int WorthSharing = 1 << 16;
 
     // One more than there are places: a run may end behind the last.
-    private readonly Ends[] _ends = new Ends[grid.Count + 1];
+    private readonly Ends[] _ends = Rent(grid.Count + 1);
 
     private Stretch[] _stretches = new Stretch[256];
     private int _stretchCount;
@@ -75,7 +75,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     public static CoverageCounts Sum(CoverageCounter[] counters, int replicates)
     {
         var ends = counters[0]._ends;
-        var places = ends.Length - 1;
+        var places = counters[0].Places;
         var counts = new CoverageCounts(replicates, new int[places], new int[places], new int[places]);
         var blocks = places < WorthSharing ? 1 : counters.Length;
         int Start(int block) => (int)((long)places * block / blocks);
@@ -89,7 +89,21 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         }
 
         ForEach(blocks, block => WriteCounts(ends, before[block], Start(block), Start(block + 1), counts));
+        foreach (var counter in counters)
+        {
+            System.Buffers.ArrayPool<Ends>.Shared.Return(counter._ends);
+        }
+
         return counts;
+    }
+
+    private int Places => grid.Count;
+
+    private static Ends[] Rent(int count)
+    {
+        var ends = System.Buffers.ArrayPool<Ends>.Shared.Rent(count);
+        ends.AsSpan(0, count).Clear();
+        return ends;
     }
 
     private static void ForEach(int blocks, Action<int> work)
