@@ -14,7 +14,8 @@ namespace SurveyPlanner.Benchmarks;
 /// One simulated draw (mean of a run of 1,000) on a coast of 10,000 vertices with 10,000 cells, one thread; and the same work done by general
 /// overlay: all lines clipped as one, buffered with flat ends, every cell's place asked for in the prepared result.
 /// </summary>
-[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 15)]
+[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 40)]
+[MinColumn, MedianColumn]
 public class CoverageSimulationBenchmarks
 {
     private const int Vertices = 10_000;

@@ -5,7 +5,8 @@ using SurveyPlanner.Layouts;
 namespace SurveyPlanner.Benchmarks;
 
 /// <summary>A whole simulation on one thread and on two; coast of 10,000 vertices.</summary>
-[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 15)]
+[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 40)]
+[MinColumn, MedianColumn]
 public class CoverageThreadsBenchmarks
 {
     private LayoutGenerator _layout = null!;

@@ -21,7 +21,7 @@ internal sealed class CellGrid
         RowStarts = rowStarts;
         X = x;
         Cells = cells;
-        _rows = SlotTable.Of(rowY, [0, rowY.Length], 0, out _rowSlots)[0];
+        _rows = SlotTable.Of(rowY, [0, rowY.Length], (cells?.SizeMetres ?? 0) / 16, out _rowSlots)[0];
         _rowPlaces = SlotTable.Of(x, rowStarts, cells?.SizeMetres ?? 0, out _placeSlots);
     }
 
@@ -66,8 +66,9 @@ internal sealed class CellGrid
         return new CellGrid([.. rowY], [.. rowStarts], Array.ConvertAll(sorted, entry => entry.X), cells: null);
     }
 
-    /// <summary>Index of the first row at or above y; the number of rows where none is.</summary>
-    public int FirstRowFrom(double y) => _rows.FirstFrom(_rowSlots, RowY, y);
+    /// <summary>The rows from one y to another: first index and end, the same where there are none.</summary>
+    public (int First, int End) RowsWithin(double lowY, double highY)
+        => (_rows.FirstFrom(_rowSlots, RowY, lowY), _rows.FirstBeyond(_rowSlots, RowY, highY));
 
     /// <summary>Whether a row has places on either side of some x or between them. Most rows at a coast hold a place or two, which most ranges miss.</summary>
     public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last & high >= _rowPlaces[row].First;

@@ -1,4 +1,3 @@
-using System.Runtime.CompilerServices;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Coverage;
@@ -20,8 +19,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     // One more than there are places: a run may end behind the last.
     private readonly Ends[] _ends = Rent(grid.Count + 1);
 
-    private Stretch[] _stretches = new Stretch[256];
-    private int _stretchCount;
+    private readonly StripRows _strips = new(grid, halfWidthMetres);
     private RowRuns _now = new(grid.RowY.Length);
     private RowRuns _before = new(grid.RowY.Length);
 
@@ -32,20 +30,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     {
         (_now, _before) = (_before, _now);
         _now.Clear();
-        _stretchCount = 0;
-        foreach (ref readonly var piece in pieces)
-        {
-            if (piece.IsPoint)
-            {
-                Cover(new DiskStrip(piece, halfWidthMetres));
-            }
-            else
-            {
-                Cover(new RectangleStrip(piece, halfWidthMetres));
-            }
-        }
-
-        foreach (ref readonly var stretch in _stretches.AsSpan(0, _stretchCount))
+        foreach (ref readonly var stretch in _strips.Of(pieces))
         {
             var (first, end) = grid.Run(stretch.Row, stretch.Low, stretch.High);
             if (first < end)
@@ -144,32 +129,6 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         }
     }
 
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private void Cover<TStrip>(in TStrip strip)
-        where TStrip : struct, IStrip
-    {
-        var rowY = grid.RowY;
-        var (row, highY, count) = (grid.FirstRowFrom(strip.LowY), strip.HighY, _stretchCount);
-        while (row < rowY.Length && rowY[row] <= highY)
-        {
-            // As far as there is room.
-            var stretches = _stretches;
-            for (; row < rowY.Length && rowY[row] <= highY && count < stretches.Length; row++)
-            {
-                strip.RangeAt(rowY[row], out var low, out var high);
-                stretches[count] = new Stretch { Row = row, Low = low, High = high };
-                count += grid.MayHold(row, low, high) ? 1 : 0;
-            }
-
-            if (count == stretches.Length)
-            {
-                Array.Resize(ref _stretches, 2 * count);
-            }
-        }
-
-        _stretchCount = count;
-    }
-
     private void CountRow(int row)
     {
         ref readonly var now = ref _now[row];
@@ -207,14 +166,6 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 
     /// <summary>The larger of two indices, without a branch, which would be foretold wrongly every other time.</summary>
     private static int Larger(int a, int b) => a + ((b - a) & ~((b - a) >> 31));
-
-    /// <summary>From where to where a strip covers a row.</summary>
-    private struct Stretch
-    {
-        public int Row;
-        public double Low;
-        public double High;
-    }
 
     /// <summary>What changes from one place to the next; the three side by side, since they mostly change at the same places.</summary>
     private struct Ends

@@ -24,27 +24,68 @@ public class EdgeTreeTests
                     lines.Add(leg: 0, fromX, fromY, toX, toY);
                 }
 
-                shape.Tree.FindCrossings(lines);
-                for (var line = 0; line < lines.Count; line++)
-                {
-                    var expected = new List<(double Along, bool Leaves)>();
-                    foreach (ref readonly var edge in shape.Edges)
-                    {
-                        if (lines.Lines[line].Crosses(edge, out var along, out var leaves))
-                        {
-                            expected.Add((along, leaves));
-                        }
-                    }
-
-                    lines.CrossingsOf(line, out var found, out var foundLeaves);
-                    Assert.Equal(expected.Select(one => one.Along).Order(), found.ToArray());
-                    Assert.Equal(expected.Count(one => one.Leaves), foundLeaves.ToArray().Count(leaves => leaves));
-                    crossings += found.Length;
-                }
+                crossings += Find(shape, lines);
             }
         }
 
         Assert.True(crossings > 10_000);
+    }
+
+    /// <summary>
+    /// As draw follows draw: small moves, to and fro, with a jump, a line less, one more, or another shape now and then. What was found for the draws
+    /// before must not be what is found now.
+    /// </summary>
+    [Fact]
+    public void Lines_that_move_find_their_new_crossings()
+    {
+        var random = new PhiloxStream(3, 99, 0, 0);
+        var shapes = new[] { Islands(3000), RandomShapes.Sample(1).Single() }.Select(stratum => new FrameShape(stratum.Shape, new TurnedFrame(0.4))).ToArray();
+        var lines = new SlantedLines();
+        var (shape, crossings) = (shapes[0], 0);
+        var (shiftX, shiftY, count) = (0.0, 0.0, 20);
+        for (var draw = 0; draw < 2000; draw++)
+        {
+            shape = draw % 97 == 0 ? shapes[draw % 2] : shape;
+            var width = shape.MaxX - shape.MinX;
+            var step = width * (draw % 50 == 0 ? 0.3 : draw % 400 < 200 ? 1e-4 : 1e-3);
+            (shiftX, shiftY) = (draw % 50 == 0 ? 0 : shiftX + (step * (random.NextDouble() - 0.3)), shiftY + (step * (random.NextDouble() - 0.5)));
+            count = draw % 31 == 0 ? 15 + (draw % 11) : count;
+            lines.Clear();
+            for (var line = 0; line < count; line++)
+            {
+                var y = shape.MinY + ((line + 0.5) / 20 * (shape.MaxY - shape.MinY)) + shiftY;
+                lines.Add(leg: 0, shape.MinX + shiftX, y, shape.MaxX + shiftX, y + (step * 20) + (width / 20));
+            }
+
+            crossings += Find(shape, lines);
+        }
+
+        Assert.True(crossings > 100_000);
+    }
+
+    /// <summary>Looks for the crossings of lines and holds them against those with every edge. Returns how many there are.</summary>
+    private static int Find(FrameShape shape, SlantedLines lines)
+    {
+        var crossings = 0;
+        shape.Tree.FindCrossings(lines);
+        for (var line = 0; line < lines.Count; line++)
+        {
+            var expected = new List<(double Along, bool Leaves)>();
+            foreach (ref readonly var edge in shape.Edges)
+            {
+                if (lines.Lines[line].Crosses(edge, out var along, out var leaves))
+                {
+                    expected.Add((along, leaves));
+                }
+            }
+
+            lines.CrossingsOf(line, out var found, out var foundLeaves);
+            Assert.Equal(expected.Select(one => one.Along).Order(), found.ToArray());
+            Assert.Equal(expected.Count(one => one.Leaves), foundLeaves.ToArray().Count(leaves => leaves));
+            crossings += found.Length;
+        }
+
+        return crossings;
     }
 
     /// <summary>Squares of 10 m on a grid of 100 m, in a shuffled order.</summary>
