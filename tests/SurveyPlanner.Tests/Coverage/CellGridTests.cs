@@ -52,8 +52,9 @@ public class CellGridTests
                 Assert.Equal(within.Select(i => grid.RowStarts[row] + i), first < end ? Enumerable.Range(first, end - first) : []);
 
                 var y = shape.MinY - 100 + (random.NextDouble() * (shape.MaxY - shape.MinY + 200));
-                Assert.Equal(grid.RowY.Count(rowY => rowY < y), grid.FirstRowFrom(y));
-                Assert.Equal(row, grid.FirstRowFrom(grid.RowY[row]));
+                var highY = y + (random.NextDouble() * 2_000);
+                Assert.Equal((grid.RowY.Count(rowY => rowY < y), grid.RowY.Count(rowY => rowY <= highY)), grid.RowsWithin(y, highY));
+                Assert.Equal((row, row + 1), grid.RowsWithin(grid.RowY[row], grid.RowY[row]));
             }
         }
     }
