@@ -4,7 +4,10 @@ using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Benchmarks;
 
-/// <summary>A whole simulation on one thread and on two; coast of 10,000 vertices.</summary>
+/// <summary>
+/// A whole simulation on one thread and on two; and two simulations on one thread each, at once, which share nothing: what the machine gives two
+/// threads at best, virtual cores being shared with whom one does not see. Coast of 10,000 vertices.
+/// </summary>
 [SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 40)]
 [MinColumn, MedianColumn]
 public class CoverageThreadsBenchmarks
@@ -21,9 +24,6 @@ public class CoverageThreadsBenchmarks
     [Params("Parallel", "Zigzag", "PointGrid")]
     public string Kind { get; set; } = "";
 
-    [Params(1, 2)]
-    public int Threads { get; set; }
-
     [GlobalSetup]
     public void Setup()
     {
@@ -31,8 +31,17 @@ public class CoverageThreadsBenchmarks
         _grid = CoverageScene.Cells(_layout, Problem.Cells);
     }
 
+    [Benchmark(Baseline = true)]
+    public object One_thread() => Simulate(1);
+
     [Benchmark]
-    public object Simulation() => CoverageSimulation.Run(_layout, _grid, Problem.Draws, CoverageScene.Seed, 0, Threads, CancellationToken.None);
+    public object Two_threads() => Simulate(2);
+
+    [Benchmark]
+    public void Two_simulations_at_once() => Parallel.Invoke(() => Simulate(1), () => Simulate(1));
+
+    private CoverageCounts Simulate(int threads)
+        => CoverageSimulation.Run(_layout, _grid, Problem.Draws, CoverageScene.Seed, 0, threads, CancellationToken.None);
 
     public sealed record Size(int Cells, int Draws)
     {

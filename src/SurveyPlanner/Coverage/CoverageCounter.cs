@@ -1,3 +1,4 @@
+using System.Buffers;
 using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Coverage;
@@ -61,13 +62,17 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     {
         var ends = counters[0]._ends;
         var places = counters[0].Places;
-        var counts = new CoverageCounts(replicates, new int[places], new int[places], new int[places]);
+        var counts = new CoverageCounts(replicates, Unfilled(places), Unfilled(places), Unfilled(places));
         var blocks = places < WorthSharing ? 1 : counters.Length;
         int Start(int block) => (int)((long)places * block / blocks);
 
         // Each thread adds up a block of places; then it knows from what to go on in the next.
         var before = new Ends[blocks + 1];
-        ForEach(blocks, block => before[block + 1] = AddUp(counters, Start(block), Start(block + 1)));
+        if (counters.Length > 1)
+        {
+            ForEach(blocks, block => before[block + 1] = AddUp(counters, Start(block), Start(block + 1)));
+        }
+
         for (var block = 1; block < blocks; block++)
         {
             before[block] = before[block].Plus(before[block - 1]);
@@ -76,7 +81,8 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
         ForEach(blocks, block => WriteCounts(ends, before[block], Start(block), Start(block + 1), counts));
         foreach (var counter in counters)
         {
-            System.Buffers.ArrayPool<Ends>.Shared.Return(counter._ends);
+            // The next stratum's simulation takes it again.
+            ArrayPool<Ends>.Shared.Return(counter._ends);
         }
 
         return counts;
@@ -86,10 +92,12 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 
     private static Ends[] Rent(int count)
     {
-        var ends = System.Buffers.ArrayPool<Ends>.Shared.Rent(count);
+        var ends = ArrayPool<Ends>.Shared.Rent(count);
         ends.AsSpan(0, count).Clear();
         return ends;
     }
+
+    private static int[] Unfilled(int length) => GC.AllocateUninitializedArray<int>(length);
 
     private static void ForEach(int blocks, Action<int> work)
     {
