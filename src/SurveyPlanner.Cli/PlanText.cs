@@ -1,6 +1,5 @@
 using System.Globalization;
 using SurveyPlanner.Files.Records;
-using SurveyPlanner.Layouts;
 
 namespace SurveyPlanner.Cli;
 
@@ -86,7 +85,7 @@ internal static class PlanText
             table.Add(
                 stratum.Name,
                 TextTable.Figure(stratum.AreaKm2),
-                LayoutKindNames.Of(layout.Design.Kind),
+                ChoiceWord.Of(layout.Design.Kind),
                 TextTable.Bearing(layout.BearingDegrees, 180),
                 TextTable.Figure(layout.SpacingMetres / 1000),
                 TextTable.Number(layout.Transects.Length),

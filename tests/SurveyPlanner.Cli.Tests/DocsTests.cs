@@ -1,4 +1,3 @@
-using System.Text.Json;
 using SurveyPlanner.Layouts;
 using SurveyPlanner.Pages;
 
@@ -46,7 +45,7 @@ public class DocsTests
     {
         var terms = File.ReadLines(Path.Combine(ReferenceData.Root, "docs", "glossary.md"))
             .Where(line => line.StartsWith("| ", StringComparison.Ordinal)).Select(line => line.Split('|')[1].Trim()).ToArray();
-        var kinds = Enum.GetValues<LayoutKind>().Select(kind => JsonNamingPolicy.KebabCaseLower.ConvertName(kind.ToString()).Replace('-', ' '));
+        var kinds = Enum.GetValues<LayoutKind>().Select(kind => ChoiceWord.Of(kind).Replace('-', ' '));
         Assert.All(
             kinds.Concat(["placement", "crossing", "reserve", "crossed", "spacing", "radius", "allocation", "assurance"]),
             word => Assert.Contains(terms, term => term.StartsWith(word, StringComparison.Ordinal)));

@@ -2,7 +2,6 @@ using System.CommandLine;
 using SurveyPlanner.Files.Boundaries;
 using SurveyPlanner.Files.Folders;
 using SurveyPlanner.Files.Plans;
-using SurveyPlanner.Regions;
 
 namespace SurveyPlanner.Cli.Commands;
 
@@ -44,11 +43,11 @@ internal static class NewCommand
 
             var (system, name) = (parsed.GetValue(crs), parsed.GetValue(layer));
             var read = BoundaryReader.Read(path, new BoundaryOptions { Crs = system, Layer = name });
-            var region = RegionBuilder.Build(read, new RegionDesign(), []);
+            var facts = StarterFacts.Of(Path.GetFileNameWithoutExtension(path), read);
             var relative = Path.GetRelativePath(Path.GetDirectoryName(Path.GetFullPath(planPath))!, Path.GetFullPath(path)).Replace('\\', '/');
-            var text = StarterPlan.For(relative, StarterFacts.Of(Path.GetFileNameWithoutExtension(path), read));
+            var text = StarterPlan.For(relative, facts);
             OneFile.Write(planPath, WithKey(WithKey(text, "layer", name), "crs", system));
-            CommandFrame.Tell(terminal, region.Notices, parsed.GetValue(options.Quiet));
+            CommandFrame.Tell(terminal, facts.Notices, parsed.GetValue(options.Quiet));
             terminal.Out.WriteLine($"Wrote {planPath}. Read it, then: survey-planner check {planPath}");
             return ExitCodes.Done;
         });

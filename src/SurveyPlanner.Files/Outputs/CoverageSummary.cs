@@ -23,7 +23,7 @@ internal static class CoverageSummary
         {
             json.Object("advice", () =>
             {
-                json.WriteString("finding", Words.Kebab(advice.Finding));
+                json.WriteString("finding", ChoiceWord.Of(advice.Finding));
                 json.Number("uneven_area_share", advice.UnevenShare);
                 json.Number("never_covered_km2", advice.NeverCoveredKm2);
                 json.Text("sentence", advice.Sentence);

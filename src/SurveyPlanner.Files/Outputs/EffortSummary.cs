@@ -18,12 +18,12 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
         json.Number(_pilot.RateKey, plan.EncounterRate);
         if (plan.Strata.Length > 1)
         {
-            json.WriteString("planned_allocation", Words.Kebab(planned));
+            json.WriteString("planned_allocation", ChoiceWord.Of(planned));
         }
 
         if (plan.Estimator is { } estimator)
         {
-            json.WriteString("variance_estimator", Words.Kebab(estimator));
+            json.WriteString("variance_estimator", ChoiceWord.Of(estimator));
             json.Text("variance_estimator_reason", plan.EstimatorReason);
         }
 
@@ -76,7 +76,7 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
     private void WriteB()
     {
         json.Number("value", plan.B.Value);
-        json.WriteString("origin", Words.Kebab(plan.B.Origin));
+        json.WriteString("origin", ChoiceWord.Of(plan.B.Origin));
         json.Number("encounter_rate_part", plan.B.EncounterRatePart);
         json.Number("detection_part", plan.B.DetectionPart);
         json.Number("cluster_size_part", plan.B.ClusterSizePart);
@@ -117,7 +117,7 @@ internal sealed class EffortSummary(Utf8JsonWriter json, EffortPlan plan)
     private void WriteAllocation(AllocationOption option)
     {
         json.WriteStartObject();
-        json.WriteString("allocation", Words.Kebab(option.Allocation));
+        json.WriteString("allocation", ChoiceWord.Of(option.Allocation));
         json.Number(EffortKey + "_required", option.RequiredEffort);
         json.Number("cost", option.Cost);
         WritePrecision(option.Precision);

@@ -57,7 +57,7 @@ internal sealed class PilotSummary(Utf8JsonWriter json, EffortPlan plan)
         json.Array("components", decomposition.Components, component =>
         {
             json.WriteStartObject();
-            json.WriteString("source", Words.Kebab(component.Source));
+            json.WriteString("source", ChoiceWord.Of(component.Source));
             json.Number("cv", component.Cv);
             json.Number("degrees_of_freedom", component.DegreesOfFreedom);
             json.Number("share", component.Share);
@@ -88,7 +88,7 @@ internal sealed class PilotSummary(Utf8JsonWriter json, EffortPlan plan)
         {
             if (fits.Chosen is { } chosen)
             {
-                json.WriteString("chosen", Words.Kebab(chosen.Model));
+                json.WriteString("chosen", ChoiceWord.Of(chosen.Model));
             }
 
             json.Array("fits", fits.Fits, WriteFit);
@@ -107,8 +107,8 @@ internal sealed class PilotSummary(Utf8JsonWriter json, EffortPlan plan)
     private void WriteFit(DetectionFit fit)
     {
         json.WriteStartObject();
-        json.WriteString("model", Words.Kebab(fit.Model));
-        json.WriteString("status", Words.Kebab(fit.Status));
+        json.WriteString("model", ChoiceWord.Of(fit.Model));
+        json.WriteString("status", ChoiceWord.Of(fit.Status));
         json.Text("explanation", fit.Explanation);
         json.WriteNumber("detections", fit.Detections);
         json.Array("parameters", fit.Parameters, parameter =>

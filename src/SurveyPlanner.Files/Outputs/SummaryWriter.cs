@@ -161,7 +161,7 @@ public static class SummaryWriter
 
     private static void WriteLayout(Utf8JsonWriter json, Layout layout)
     {
-        json.WriteString("kind", LayoutKindNames.Of(layout.Design.Kind));
+        json.WriteString("kind", ChoiceWord.Of(layout.Design.Kind));
         json.Figure("bearing_deg", Figures.Bearing(layout.BearingDegrees, fullTurn: 180));
         json.Figure("spacing_m", Figures.Metres(layout.SpacingMetres));
         json.Figure("half_width_m", Figures.Metres(layout.Design.HalfWidthMetres));

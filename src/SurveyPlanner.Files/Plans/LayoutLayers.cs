@@ -94,6 +94,6 @@ internal sealed class LayoutLayers(List<Problem> problems)
         var remedy = key.Group == KeyGroup.Reach
             ? $"write {PlanKeys.ReachOf(kind).Name} instead"
             : "take it out, or write it under the stratum it is for";
-        return $"belongs to {key.Kinds!.Words}, and the kind here is {PlanWord.Of(kind)}: {remedy}";
+        return $"belongs to {key.Kinds!.Words}, and the kind here is {ChoiceWord.Of(kind)}: {remedy}";
     }
 }

@@ -98,5 +98,5 @@ internal sealed record KindFilter(string Words, Func<LayoutKind, bool> Holds)
 
     /// <summary>The kinds named.</summary>
     public static KindFilter Only(params LayoutKind[] kinds)
-        => new(WordList.And(kinds.Select(kind => PlanWord.Of(kind))), kinds.Contains);
+        => new(WordList.And(kinds.Select(kind => ChoiceWord.Of(kind))), kinds.Contains);
 }

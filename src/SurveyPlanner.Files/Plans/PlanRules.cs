@@ -73,7 +73,7 @@ internal static class PlanRules
         if (pilot.Value(PlanKeys.EncounterRate) is { } rate && layout.Value(PlanKeys.Kind) is { } kind && rate.PerVisit != kind.IsPoints())
         {
             var right = kind.IsPoints() ? "\"1.5 /visit\"" : PlanKeys.EncounterRate.Example;
-            yield return pilot.ProblemAt(PlanKeys.EncounterRate, $"does not suit the layout, which is {PlanWord.Of(kind)}: write encounter_rate = {right}");
+            yield return pilot.ProblemAt(PlanKeys.EncounterRate, $"does not suit the layout, which is {ChoiceWord.Of(kind)}: write encounter_rate = {right}");
         }
     }
 
@@ -82,7 +82,7 @@ internal static class PlanRules
         var fitted = (detection.Value(PlanKeys.Models) ?? []).Where(model => model != DetectionModel.Strip).ToArray();
         if (fitted.Length > 0 && !pilot.Has(PlanKeys.Detections))
         {
-            yield return detection.ProblemAt(PlanKeys.Models, $"there are no distances to fit {PlanWord.Of(fitted[0])} to: add detections = {PlanKeys.Detections.Example} under [pilot], or take the key out");
+            yield return detection.ProblemAt(PlanKeys.Models, $"there are no distances to fit {ChoiceWord.Of(fitted[0])} to: add detections = {PlanKeys.Detections.Example} under [pilot], or take the key out");
         }
 
         if (detection.Has(PlanKeys.DetectionDf) && !detection.Has(PlanKeys.DetectionCv))
@@ -111,7 +111,7 @@ internal static class PlanRules
     {
         if ((key == PlanKeys.EffectiveRadius) != kind.IsPoints())
         {
-            yield return detection.ProblemAt(key, $"does not suit the layout, which is {PlanWord.Of(kind)}: write {(kind.IsPoints() ? PlanKeys.EffectiveRadius : PlanKeys.EffectiveHalfWidth).Name}");
+            yield return detection.ProblemAt(key, $"does not suit the layout, which is {ChoiceWord.Of(kind)}: write {(kind.IsPoints() ? PlanKeys.EffectiveRadius : PlanKeys.EffectiveHalfWidth).Name}");
         }
 
         var limit = detection.Value(PlanKeys.Truncation) ?? layout.Value(PlanKeys.ReachOf(kind));

@@ -22,6 +22,9 @@ public sealed record StarterFacts(
     double LinesAcrossKm,
     ImmutableArray<StratumFieldCandidate> StratumFields)
 {
+    /// <summary>What there is to tell of how the boundary was read as a region.</summary>
+    public ImmutableArray<Notice> Notices { get; init; } = [];
+
     /// <summary>More parts than this are features of a map, not strata of a survey.</summary>
     private const int MostStrata = 50;
 
@@ -54,7 +57,10 @@ public sealed record StarterFacts(
             region.LongAxisKm,
             region.ShortAxisKm,
             layout.ExpectedCount * layout.SpacingMetres / 1000,
-            Candidates(boundary));
+            Candidates(boundary))
+        {
+            Notices = trial.Region.Notices,
+        };
     }
 
     /// <summary>Attributes that every feature has and that tell at least two groups of them apart: names before numbers, the fewest groups first.</summary>

@@ -54,7 +54,7 @@ public static class StarterPlan
             # exclusion_buffer = "500 m"           # and how far to keep away from them
 
             [layout]
-            kind = "parallel"                      # {string.Join(" · ", Enum.GetValues<LayoutKind>().Select(PlanWord.Of))}
+            kind = "parallel"                      # {string.Join(" · ", Enum.GetValues<LayoutKind>().Select(ChoiceWord.Of))}
             bearing = "short-axis"                 # or "long-axis", or degrees from true north: 45; best across what makes numbers change
             spacing = {Padded(LengthText(spacingMetres))} # about {lines} lines in the region as a whole; or lines = 20, or total_length = "400 km"
             half_width = {Padded(LengthText(halfWidthMetres), 25)} # how far out from the line animals are counted: put in your own; points have a radius instead

@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Text.Json;
 using SurveyPlanner.Files.Units;
 
 namespace SurveyPlanner.Files.Plans;
@@ -93,7 +92,7 @@ internal sealed class ChoiceReader<T> : ValueReader<T>
 {
     private static readonly ImmutableArray<T> Members = [.. Enum.GetValues<T>()];
 
-    public override string Takes => WordList.Or(Members.Select(member => Quoted.Text(PlanWord.Of(member))));
+    public override string Takes => WordList.Or(Members.Select(member => Quoted.Text(ChoiceWord.Of(member))));
 
     public override bool IsText => true;
 
@@ -106,23 +105,15 @@ internal sealed class ChoiceReader<T> : ValueReader<T>
 
         foreach (var member in Members)
         {
-            if (PlanWord.Of(member) == text.Value)
+            if (ChoiceWord.Of(member) == text.Value)
             {
                 return Parsed.Ok(member);
             }
         }
 
-        var words = Members.Select(member => PlanWord.Of(member)).ToArray();
+        var words = Members.Select(member => ChoiceWord.Of(member)).ToArray();
         return Parsed.Bad<T>($"{Quoted.Short(text.Value)} is none of {WordList.And(words)}{Spelling.Hint(text.Value, words)}");
     }
 
-    public override string Write(T value) => Quoted.Text(PlanWord.Of(value));
-}
-
-/// <summary>The plan file's word for a member of an enumeration: <c>PointGrid</c> is <c>point-grid</c>.</summary>
-internal static class PlanWord
-{
-    public static string Of<T>(T member)
-        where T : struct, Enum
-        => JsonNamingPolicy.KebabCaseLower.ConvertName(member.ToString());
+    public override string Write(T value) => Quoted.Text(ChoiceWord.Of(value));
 }

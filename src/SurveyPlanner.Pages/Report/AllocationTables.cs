@@ -19,7 +19,7 @@ internal static class AllocationTables
             [
                 .. effort.Allocations.Select(option => (string[])
                 [
-                    Sentences.Word(option.Allocation),
+                    ChoiceWord.Of(option.Allocation),
                     EffortWords.Number(option.RequiredEffort, effort),
                     EffortWords.Number(option.Effort, effort),
                     Figures.Three(option.Precision.ExpectedDetections),
@@ -33,7 +33,7 @@ internal static class AllocationTables
     /// <summary>Who gets what under each.</summary>
     public static Table OfStrata(EffortPlan effort) => new(
         $"Effort of each stratum in whole transects, {EffortWords.Unit(effort)}" + (effort.IsPoints ? "" : " (lines)"),
-        [new("Stratum", false), .. effort.Allocations.Select(option => new Column(Sentences.Word(option.Allocation)))],
+        [new("Stratum", false), .. effort.Allocations.Select(option => new Column(ChoiceWord.Of(option.Allocation)))],
         [
             .. effort.Allocations[0].Strata.Select((stratum, i) => (string[])
             [

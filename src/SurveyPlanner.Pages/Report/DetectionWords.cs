@@ -20,7 +20,7 @@ internal static class DetectionWords
         var cv = chosen.EffectiveCv is { } known ? $", with a coefficient of variation of {Figures.Percent(known)}{(fits.IsPoints ? " of its square" : "")}" : ", its variance unknown";
         var smallest = fits.Fits.Any(fit => fit.Aic < chosen.Aic) ? $" has the smallest AIC of those of {fits.Fits.Length} models that did not stop at a bound and" : $" has the smallest AIC of {fits.Fits.Length} models and";
         var among = fits.Fits.Length > 1 ? smallest : "";
-        return $"The {Name(chosen.Model)} model{among} gives an effective {(fits.IsPoints ? "radius" : "half-width")} of {Figures.Distance(chosen.EffectiveMetres ?? 0)}"
+        return $"The {ChoiceWord.Of(chosen.Model)} model{among} gives an effective {(fits.IsPoints ? "radius" : "half-width")} of {Figures.Distance(chosen.EffectiveMetres ?? 0)}"
             + $"{cv}, from {Figures.Counted(chosen.Detections, "distance", "distances")} up to {Figures.Distance(fits.TruncationMetres)}.";
     }
 
@@ -33,7 +33,7 @@ internal static class DetectionWords
         [
             .. fits.Fits.Select(fit => (string[])
             [
-                Name(fit.Model) + (ReferenceEquals(fit, fits.Chosen) ? ", chosen" : ""),
+                ChoiceWord.Of(fit.Model) + (ReferenceEquals(fit, fits.Chosen) ? ", chosen" : ""),
                 Decimal(fit.Aic),
                 Decimal(fit.Aic - fits.Fits.Min(one => one.Aic)),
                 Figures.Three(fit.EffectiveMetres),
@@ -66,14 +66,13 @@ internal static class DetectionWords
                 Math.Max(bars.Max(bar => bar.Height), points.Max(point => point.Y))))
         {
             Bars = bars,
-            Lines = [new Line(Name(chosen.Model), points)],
+            Lines = [new Line(ChoiceWord.Of(chosen.Model), points)],
             Levels = chosen.EffectiveMetres is { } metres
                 ? [new Level(metres, $"effective {(fits.IsPoints ? "radius" : "half-width")} {Figures.Distance(metres)}", IsUpright: true)]
                 : [],
         };
     }
 
-    private static string Name(DetectionModel model) => Sentences.Word(model);
 
     // Differences between AICs count, so all of them have the same decimals, whatever their size.
     private static string Decimal(double? aic) => aic is { } value && double.IsFinite(value) ? Figures.Fixed(value, 1) : Figures.None;

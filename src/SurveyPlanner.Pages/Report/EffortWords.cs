@@ -109,7 +109,7 @@ internal static class EffortWords
     {
         if (effort.Allocations.All(option => option.Strata.SequenceEqual(effort.Allocations[0].Strata)))
         {
-            return $"Effort is shared by {Sentences.Word(chosen)} allocation; in whole transects, and with the least number of them in each stratum, all three ways come to the same.";
+            return $"Effort is shared by {ChoiceWord.Of(chosen)} allocation; in whole transects, and with the least number of them in each stratum, all three ways come to the same.";
         }
 
         var planned = effort.Allocations.Single(option => option.Allocation == chosen);
@@ -118,8 +118,8 @@ internal static class EffortWords
             : (effort.Allocations.MinBy(option => option.Cost)!, "cost");
         var (of, to) = planned.Cost is null ? (planned.RequiredEffort, least.RequiredEffort) : (planned.Cost.Value, least.Cost!.Value);
         return least.Allocation == chosen || to >= of
-            ? $"Effort is shared by {Sentences.Word(chosen)} allocation, and of the three ways it reaches the target with the least {word}."
-            : $"Effort is shared by {Sentences.Word(chosen)} allocation; {Sentences.Word(least.Allocation)} allocation would reach the target with {Figures.Percent(1 - (to / of))} less {word}.";
+            ? $"Effort is shared by {ChoiceWord.Of(chosen)} allocation, and of the three ways it reaches the target with the least {word}."
+            : $"Effort is shared by {ChoiceWord.Of(chosen)} allocation; {ChoiceWord.Of(least.Allocation)} allocation would reach the target with {Figures.Percent(1 - (to / of))} less {word}.";
     }
 
     /// <summary>Kilometres of line or points, with the unit.</summary>

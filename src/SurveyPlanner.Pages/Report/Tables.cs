@@ -24,7 +24,7 @@ internal static class Tables
         Figures.Bearing(layout.BearingDegrees),
         Figures.Three(layout.SpacingMetres),
         Figures.Three(layout.Design.HalfWidthMetres),
-        Sentences.Word(layout.Design.Edge),
+        ChoiceWord.Of(layout.Design.Edge),
         Figures.Count(layout.Transects.Length),
         layout.Design.IsPoints ? Figures.None : Figures.Three(layout.TotalLengthMetres / 1000),
     ];

@@ -12,19 +12,12 @@ internal static class Sentences
     // More strata than this are a list, not a sentence: the tables have them.
     private const int MostStrata = 4;
 
-    /// <summary>The plan file's word for a layout kind and its like: lower case with hyphens.</summary>
-    public static string Word(Enum value)
-    {
-        var name = value.ToString();
-        return string.Concat(name.Select((c, i) => i > 0 && char.IsUpper(c) ? "-" + char.ToLowerInvariant(c) : char.ToLowerInvariant(c).ToString()));
-    }
-
     /// <summary>A layout kind with what tells it from others of its kind: <c>zigzag, equal-spaced</c>.</summary>
     public static string Kind(LayoutDesign design) => design.Kind switch
     {
-        LayoutKind.Zigzag => $"{Word(design.Kind)}, {Word(design.Turning)}",
-        LayoutKind.PointGrid => $"{Word(design.Kind)}, {Word(design.Grid)}",
-        _ => Word(design.Kind),
+        LayoutKind.Zigzag => $"{ChoiceWord.Of(design.Kind)}, {ChoiceWord.Of(design.Turning)}",
+        LayoutKind.PointGrid => $"{ChoiceWord.Of(design.Kind)}, {ChoiceWord.Of(design.Grid)}",
+        _ => ChoiceWord.Of(design.Kind),
     };
 
     public static string Seed(SurveyPlan plan) => "seed " + plan.Design.Seed.ToString(CultureInfo.InvariantCulture);

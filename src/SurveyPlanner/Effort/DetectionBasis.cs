@@ -74,7 +74,7 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
         if (chosen.RelativeVariance is { } alone)
         {
             advice.Add(new Advice(
-                FormattableString.Invariant($"Detection{where} adds {part:0.00} to b; by the {Name(chosen.Model)} fit alone it would be {alone:0.00}, but which of {fits.Fits.Length} models the distances choose varies too. ")
+                FormattableString.Invariant($"Detection{where} adds {part:0.00} to b; by the {ChoiceWord.Of(chosen.Model)} fit alone it would be {alone:0.00}, but which of {fits.Fits.Length} models the distances choose varies too. ")
                     + "If the survey will be analysed with one model fixed beforehand, name that alone in the plan (detection.models).",
                 "Simulated draws"));
         }
@@ -88,12 +88,12 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
     {
         if (chosen.Status == FitStatus.OnBound)
         {
-            yield return new Advice($"The {Name(chosen.Model)} fit{where} stopped at a bound, so its variance comes from simulated draws. {chosen.Explanation}");
+            yield return new Advice($"The {ChoiceWord.Of(chosen.Model)} fit{where} stopped at a bound, so its variance comes from simulated draws. {chosen.Explanation}");
         }
         else if (fits.Fits.FirstOrDefault(fit => fit.Aic < chosen.Aic) is { } passedOver)
         {
             yield return new Advice(
-                $"The {Name(passedOver.Model)} fit{where} has a smaller AIC but stopped at a bound, so the {Name(chosen.Model)} fit is used. {passedOver.Explanation}");
+                $"The {ChoiceWord.Of(passedOver.Model)} fit{where} has a smaller AIC but stopped at a bound, so the {ChoiceWord.Of(chosen.Model)} fit is used. {passedOver.Explanation}");
         }
     }
 
@@ -105,13 +105,4 @@ internal sealed record DetectionBasis(DetectionSource? Pooled, ImmutableArray<De
             "Arithmetic of half-normal theory"));
         return new DetectionSource(theory, []);
     }
-
-    private static string Name(DetectionModel model) => model switch
-    {
-        DetectionModel.Strip => "strip",
-        DetectionModel.HalfNormal => "half-normal",
-        DetectionModel.HazardRate => "hazard-rate",
-        DetectionModel.UniformCosine => "uniform-cosine",
-        _ => throw new ArgumentOutOfRangeException(nameof(model)),
-    };
 }

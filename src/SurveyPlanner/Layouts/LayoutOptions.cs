@@ -32,11 +32,11 @@ internal static class LayoutOptions
 
     private static IEnumerable<Problem> Problems(Option option, LayoutDesign design)
     {
-        var (belongs, isGiven, kind) = (option.Kinds.Contains(design.Kind), option.IsGiven(design), LayoutKindNames.Of(design.Kind));
+        var (belongs, isGiven, kind) = (option.Kinds.Contains(design.Kind), option.IsGiven(design), ChoiceWord.Of(design.Kind));
         if (isGiven && !belongs)
         {
             yield return new Problem(
-                $"belongs to {string.Join(", ", option.Kinds.Select(LayoutKindNames.Of))}, and the kind here is {kind}; take it out", Key: $"layout.{option.Key}");
+                $"belongs to {string.Join(", ", option.Kinds.Select(ChoiceWord.Of))}, and the kind here is {kind}; take it out", Key: $"layout.{option.Key}");
         }
 
         if (belongs && option.IsRequired && !isGiven)
@@ -60,7 +60,7 @@ internal static class LayoutOptions
         if (design.MinLengthMetres > (design.SegmentMetres ?? 4 * design.SideMetres ?? double.PositiveInfinity))
         {
             yield return new Problem(
-                string.Create(CultureInfo.InvariantCulture, $"is longer than a whole one of the {LayoutKindNames.Of(design.Kind)}, so nothing would be left; choose a smaller one"),
+                string.Create(CultureInfo.InvariantCulture, $"is longer than a whole one of the {ChoiceWord.Of(design.Kind)}, so nothing would be left; choose a smaller one"),
                 Key: "layout.min_length");
         }
     }

@@ -20,7 +20,10 @@ public class ArchitectureTests
     }.ToImmutableDictionary();
 
     /// <summary>Values of the root that any folder may use.</summary>
-    private static readonly string[] RootValues = ["SurveyPlanner.Problem", "SurveyPlanner.InputException", "SurveyPlanner.Notice", "SurveyPlanner.NoticeKind"];
+    private static readonly string[] RootValues =
+    [
+        "SurveyPlanner.Problem", "SurveyPlanner.InputException", "SurveyPlanner.Notice", "SurveyPlanner.NoticeKind", "SurveyPlanner.ChoiceWord",
+    ];
 
     private static readonly System.Reflection.Assembly Core = typeof(PlanSurvey).Assembly;
 
