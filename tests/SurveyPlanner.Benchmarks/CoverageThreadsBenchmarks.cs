@@ -8,7 +8,7 @@ namespace SurveyPlanner.Benchmarks;
 /// A whole simulation on one thread and on two; and two simulations on one thread each, at once, which share nothing: what the machine gives two
 /// threads at best, virtual cores being shared with whom one does not see. Coast of 10,000 vertices.
 /// </summary>
-[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 40)]
+[SimpleJob(launchCount: 1, warmupCount: 5, iterationCount: 20)]
 [MinColumn, MedianColumn]
 public class CoverageThreadsBenchmarks
 {

@@ -66,6 +66,13 @@ internal sealed class CellGrid
         return new CellGrid([.. rowY], [.. rowStarts], Array.ConvertAll(sorted, entry => entry.X), cells: null);
     }
 
+    /// <summary>The row of a place; the number of rows for the number of places.</summary>
+    public int RowOf(int place)
+    {
+        var row = Array.BinarySearch(RowStarts, place);
+        return row >= 0 ? row : ~row - 1;
+    }
+
     /// <summary>The rows from one y to another: first index and end, the same where there are none.</summary>
     public (int First, int End) RowsWithin(double lowY, double highY)
         => (_rows.FirstFrom(_rowSlots, RowY, lowY), _rows.FirstBeyond(_rowSlots, RowY, highY));

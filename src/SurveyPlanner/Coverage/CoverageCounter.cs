@@ -17,8 +17,8 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     // So few places are added up sooner than other threads have begun.
     private const int WorthSharing = 1 << 16;
 
-    // One more than there are places: a run may end behind the last.
-    private readonly Ends[] _ends = Rent(grid.Count + 1);
+    // Row after row, each with one more than it has places: a run may end behind the last. So every row adds up for itself.
+    private readonly Ends[] _ends = Rent(grid.Count + grid.RowY.Length);
 
     private readonly StripRows _strips = new(grid, halfWidthMetres);
     private RowRuns _now = new(grid.RowY.Length);
@@ -36,7 +36,7 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
             var (first, end) = grid.Run(stretch.Row, stretch.Low, stretch.High);
             if (first < end)
             {
-                _now.Add(stretch.Row, first, end);
+                _now.Add(stretch.Row, first + stretch.Row, end + stretch.Row);
             }
         }
 
@@ -60,35 +60,29 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
     /// <summary>The counts of several counters together, on as many threads. The counters are used up by it.</summary>
     public static CoverageCounts Sum(CoverageCounter[] counters, int replicates)
     {
-        var ends = counters[0]._ends;
-        var places = counters[0].Places;
-        var counts = new CoverageCounts(replicates, Unfilled(places), Unfilled(places), Unfilled(places));
-        var blocks = places < WorthSharing ? 1 : counters.Length;
-        int Start(int block) => (int)((long)places * block / blocks);
-
-        // Each thread adds up a block of places; then it knows from what to go on in the next.
-        var before = new Ends[blocks + 1];
-        if (counters.Length > 1)
+        var grid = counters[0].Grid;
+        var counts = new CoverageCounts(replicates, Unfilled(grid.Count), Unfilled(grid.Count), Unfilled(grid.Count));
+        var ends = Array.ConvertAll(counters, counter => counter._ends);
+        if (counters.Length == 1 || grid.Count < WorthSharing)
         {
-            ForEach(blocks, block => before[block + 1] = AddUp(counters, Start(block), Start(block + 1)));
+            AddUp(ends, grid, 0, grid.RowY.Length, counts);
+        }
+        else
+        {
+            int RowAt(int block) => grid.RowOf((int)((long)grid.Count * block / counters.Length));
+            Parallel.For(0, counters.Length, block => AddUp(ends, grid, RowAt(block), RowAt(block + 1), counts));
         }
 
-        for (var block = 1; block < blocks; block++)
-        {
-            before[block] = before[block].Plus(before[block - 1]);
-        }
-
-        ForEach(blocks, block => WriteCounts(ends, before[block], Start(block), Start(block + 1), counts));
-        foreach (var counter in counters)
+        foreach (var one in ends)
         {
             // The next stratum's simulation takes it again.
-            ArrayPool<Ends>.Shared.Return(counter._ends);
+            ArrayPool<Ends>.Shared.Return(one);
         }
 
         return counts;
     }
 
-    private int Places => grid.Count;
+    private CellGrid Grid => grid;
 
     private static Ends[] Rent(int count)
     {
@@ -99,41 +93,21 @@ internal sealed class CoverageCounter(CellGrid grid, double halfWidthMetres)
 
     private static int[] Unfilled(int length) => GC.AllocateUninitializedArray<int>(length);
 
-    private static void ForEach(int blocks, Action<int> work)
+    /// <summary>Adds up some rows of all counters.</summary>
+    private static void AddUp(Ends[][] counters, CellGrid grid, int firstRow, int endRow, CoverageCounts counts)
     {
-        if (blocks == 1)
+        for (var row = firstRow; row < endRow; row++)
         {
-            work(0);
-        }
-        else
-        {
-            Parallel.For(0, blocks, work);
-        }
-    }
-
-    /// <summary>Adds all counters to the first one, for some places. Returns the sum of those.</summary>
-    private static Ends AddUp(CoverageCounter[] counters, int start, int end)
-    {
-        var (total, ends) = (default(Ends), counters[0]._ends);
-        for (var i = start; i < end; i++)
-        {
-            for (var other = 1; other < counters.Length; other++)
+            var sum = default(Ends);
+            for (var place = grid.RowStarts[row]; place < grid.RowStarts[row + 1]; place++)
             {
-                ends[i] = ends[i].Plus(counters[other]._ends[i]);
+                foreach (var ends in counters)
+                {
+                    sum = sum.Plus(ends[place + row]);
+                }
+
+                (counts.Draws[place], counts.Times[place], counts.Again[place]) = (sum.Draws, sum.Draws + sum.Repeats, sum.Again);
             }
-
-            total = total.Plus(ends[i]);
-        }
-
-        return total;
-    }
-
-    private static void WriteCounts(Ends[] ends, Ends sum, int start, int end, CoverageCounts counts)
-    {
-        for (var i = start; i < end; i++)
-        {
-            sum = sum.Plus(ends[i]);
-            (counts.Draws[i], counts.Times[i], counts.Again[i]) = (sum.Draws, sum.Draws + sum.Repeats, sum.Again);
         }
     }
 
