@@ -1,11 +1,15 @@
 using System.Text.Json;
+using System.Text.RegularExpressions;
 using SurveyPlanner.Files.Outputs;
 
 namespace SurveyPlanner.Cli;
 
 /// <summary>Why a command did not do what it was asked: the exit code and the sentences to show.</summary>
-internal sealed record Failure(int ExitCode, IReadOnlyList<Problem> Problems)
+internal sealed partial record Failure(int ExitCode, IReadOnlyList<Problem> Problems)
 {
+    // Of problems alike so many are shown; --json has all.
+    private const int MostAlike = 5;
+
     public static Failure CommandLine(string message) => new(ExitCodes.CommandLine, [new Problem(message)]);
 
     /// <summary>What an exception means to the user.</summary>
@@ -28,13 +32,25 @@ internal sealed record Failure(int ExitCode, IReadOnlyList<Problem> Problems)
             terminal.Out.WriteLine(JsonDocumentText.Of(writer => failure.Write(writer)));
         }
 
-        foreach (var problem in failure.Problems)
+        foreach (var alike in failure.Problems.GroupBy(problem => (problem.File, problem.Key, Shape: Shape().Replace(problem.Message, ""))))
         {
-            terminal.Fail(Plain(problem.ToString()));
+            foreach (var problem in alike.Take(MostAlike))
+            {
+                terminal.Fail(Plain(problem.ToString()));
+            }
+
+            if (alike.Count() - MostAlike is > 0 and var more)
+            {
+                terminal.Fail(Plain(new Problem($"and {more} more like these", alike.Key.File, Key: alike.Key.Key).ToString()));
+            }
         }
 
         return failure.ExitCode;
     }
+
+    /// <summary>What tells apart problems that are wrong for one reason: what is quoted, and numbers.</summary>
+    [GeneratedRegex("""'[^']*'|"[^"]*"|[0-9.,]+""")]
+    private static partial Regex Shape();
 
     private void Write(Utf8JsonWriter json)
     {

@@ -20,14 +20,16 @@ public sealed record SurveyPlan(
     ImmutableArray<Notice> Notices)
 {
     /// <summary>
-    /// The precision that the layout as drawn delivers: kilometres of line, or points, of the strata that are surveyed the way the pilot was.
-    /// Null where there is no effort plan.
+    /// The precision that the layout as drawn delivers: kilometres of line, or points, of the strata that are surveyed the way the pilot was, as they
+    /// fell on each. Null where there is no effort plan, or where a stratum drew nothing.
     /// </summary>
-    public EffortPrecision? Delivered => Effort?.CvAt(DrawnEffort(Effort.IsPoints));
+    public EffortPrecision? Delivered => Effort?.PrecisionOf([.. Effort.Model.Strata.Select(stratum => DrawnEffort(stratum.Name))]);
 
-    private double DrawnEffort(bool points) => Strata
-        .Where(stratum => stratum.Layout.Design.IsPoints == points)
-        .Sum(stratum => points ? stratum.Layout.Transects.Length : stratum.Layout.TotalLengthMetres / 1000);
+    private double DrawnEffort(string stratum)
+    {
+        var layout = Strata.Single(one => one.Stratum.Name == stratum).Layout;
+        return layout.Design.IsPoints ? layout.Transects.Length : layout.TotalLengthMetres / 1000;
+    }
 }
 
 /// <summary>The plan of one stratum; coverage is null where only the layout was asked for.</summary>

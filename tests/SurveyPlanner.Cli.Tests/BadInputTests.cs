@@ -54,6 +54,21 @@ public class BadInputTests
     }
 
     [Fact]
+    public void Rows_that_are_wrong_alike_are_told_five_times_and_counted()
+    {
+        using var work = new Workspace();
+        File.WriteAllText(work.At("region.geojson"), Square);
+        File.WriteAllText(work.At("pilot.csv"), "transect,length_km,count\nT0,1,3\n" + string.Concat(Enumerable.Range(1, 40).Select(i => $"T{i},-{i},3\n")));
+        var plan = work.Plan("region.geojson", Lines, "[pilot]\ntransects = \"pilot.csv\"");
+        var run = ProgramRun.Of("effort", plan, "--json");
+
+        Assert.Equal(6, run.Error.TrimEnd().Split('\n').Length);
+        Assert.EndsWith("pilot.csv: length_km: and 35 more like these", run.Error.TrimEnd(), StringComparison.Ordinal);
+        using var document = JsonDocument.Parse(run.Out);
+        Assert.Equal(40, document.RootElement.GetProperty("error").GetProperty("problems").GetArrayLength());
+    }
+
+    [Fact]
     public void Strips_that_overlap_are_allowed_with_a_warning_and_counted_right()
     {
         using var work = new Workspace();

@@ -19,7 +19,7 @@ internal static class TrendCommand
         var command = new Command(
             "trend",
             """
-            Power to detect a yearly change over the years, at the precision that the plan delivers.
+            Power to detect a yearly change over the years, at the precision that the plan aims at (target_cv), or else delivers.
 
             Example:
               survey-planner trend survey.toml --change -0.05 --surveys 10

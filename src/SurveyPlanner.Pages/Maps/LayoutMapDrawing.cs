@@ -8,11 +8,10 @@ namespace SurveyPlanner.Pages.Maps;
 /// <param name="Sheet">Frame, graticule and strip.</param>
 /// <param name="Strata">The strata and what was cut out of them.</param>
 /// <param name="Transects">The transects; null for a map of the region alone.</param>
-/// <param name="IsPoints">Whether every transect is a point.</param>
 /// <param name="Title">Title of the picture.</param>
 /// <param name="Description">What it says, for those who do not see it.</param>
 public sealed record LayoutMapDrawing(
-    MapSheet Sheet, StrataDrawing Strata, TransectsDrawing? Transects, bool IsPoints, string Title, string Description)
+    MapSheet Sheet, StrataDrawing Strata, TransectsDrawing? Transects, string Title, string Description)
 {
     /// <summary>The region alone, as <c>check</c> shows it.</summary>
     public static LayoutMapDrawing Of(Region region, string title, bool nauticalMiles)
@@ -21,7 +20,7 @@ public sealed record LayoutMapDrawing(
         var placer = new LabelPlacer(frame.Width, frame.Height);
         var strata = StrataDrawing.Of(region, frame, placer);
         return new LayoutMapDrawing(
-            MapSheet.For(region, frame, placer, nauticalMiles), strata, null, false, title, Sentences.OfRegion(region));
+            MapSheet.For(region, frame, placer, nauticalMiles), strata, null, title, Sentences.OfRegion(region));
     }
 
     /// <summary>The region with the layouts drawn.</summary>
@@ -37,6 +36,6 @@ public sealed record LayoutMapDrawing(
         var sheet = MapSheet.For(region, frame, placer, nauticalMiles, drawLine, Sentences.Seed(plan));
         var transects = TransectsDrawing.Of(layouts, frame, placer);
         return new LayoutMapDrawing(
-            sheet, strata, transects, layouts.All(layout => layout.Design.IsPoints), "Transects of " + plan.Design.Name, Sentences.OfMap(plan));
+            sheet, strata, transects, "Transects of " + plan.Design.Name, Sentences.OfMap(plan));
     }
 }

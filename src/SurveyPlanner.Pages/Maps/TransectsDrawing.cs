@@ -4,13 +4,15 @@ using SurveyPlanner.Pages.Words;
 namespace SurveyPlanner.Pages.Maps;
 
 /// <summary>The transects of a survey on a drawing.</summary>
-/// <param name="Lines">Path and tooltip of each.</param>
+/// <param name="Lines">Path and tooltip of each that is a line.</param>
+/// <param name="Points">The same of each that is a point.</param>
 /// <param name="Rings">Circles of the detection radius round points, where they are large enough to see.</param>
 /// <param name="Chevrons">Where and which way (degrees clockwise from rightwards) lines are travelled.</param>
 /// <param name="Ids">Ids that found room.</param>
 /// <param name="IdsLeftOut">Number of transects of which no id found room.</param>
 public sealed record TransectsDrawing(
     IReadOnlyList<(string Path, string Title)> Lines,
+    IReadOnlyList<(string Path, string Title)> Points,
     string Rings,
     IReadOnlyList<(Pixel Place, double Turn)> Chevrons,
     IReadOnlyList<Label> Ids,
@@ -21,8 +23,6 @@ public sealed record TransectsDrawing(
     // Shorter pieces have no room for the mark, which is 10 pixels long.
     private const double LeastForChevron = 18;
     private const double LeastRingRadius = 4;
-
-    public string AllPaths => string.Concat(Lines.Select(line => line.Path));
 
     internal static TransectsDrawing Of(IEnumerable<Layout> layouts, MapFrame frame, LabelPlacer placer)
     {
@@ -42,11 +42,15 @@ public sealed record TransectsDrawing(
         var meetings = Meetings(all);
         var ids = all.Select(drawn => IdLabels(drawn, meetings, placer)).ToArray();
         return new TransectsDrawing(
-            [.. all.Select(drawn => (drawn.Path, drawn.Title))],
+            Marks(ofPoints: false),
+            Marks(ofPoints: true),
             rings.ToString(),
             chevrons,
             [.. ids.SelectMany(labels => labels)],
             ids.Count(labels => labels.Count == 0));
+
+        (string, string)[] Marks(bool ofPoints)
+            => [.. all.Where(drawn => drawn.Transect.IsPoint == ofPoints).Select(drawn => (drawn.Path, drawn.Title))];
     }
 
     private static Pixel[][] Pixels(Transect transect, MapFrame frame)

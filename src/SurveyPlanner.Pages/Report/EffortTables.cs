@@ -57,22 +57,21 @@ internal static class EffortTables
         "Precision by effort",
         [new(EffortWords.Unit(effort, capital: true), false), new("Expected CV, %"), new("95\u00a0% band of the pilot, %"), new("Expected detections"), new("Remark", false)],
         [
-            .. axis.Ticks.Select(tick => (Effort: tick, Remark: ""))
-                .Append((Effort: effort.Required?.Effort ?? 0, Remark: "plain estimate for the target"))
-                .Append((Effort: effort.Required?.AssuredEffort ?? 0, Remark: "with the assurance asked for"))
-                .Append((Effort: plan.Delivered?.Effort ?? 0, Remark: "layout as drawn"))
-                .OrderBy(row => row.Effort)
-                .Select(row => (row.Remark, Precision: effort.CvAt(row.Effort)))
+            .. axis.Ticks.Select(tick => (Precision: effort.CvAt(tick), Remark: ""))
+                .Append((Precision: effort.CvAt(effort.Required?.Effort ?? 0), Remark: "plain estimate for the target"))
+                .Append((Precision: effort.CvAt(effort.Required?.AssuredEffort ?? 0), Remark: "with the assurance asked for"))
+                .Append((Precision: plan.Delivered, Remark: "layout as drawn"))
                 .Where(row => row.Precision is not null)
+                .OrderBy(row => row.Precision!.Effort)
                 .Select(row => (string[])
                 [
-                    EffortWords.Number(row.Precision!.Effort, effort), Figures.Three(100 * row.Precision.Cv), Band(effort, row.Precision.Effort),
+                    EffortWords.Number(row.Precision!.Effort, effort), Figures.Three(100 * row.Precision.Cv), Band(effort, row.Precision),
                     Figures.Three(row.Precision.ExpectedDetections), row.Remark,
                 ]),
         ]);
 
-    private static string Band(EffortPlan effort, double at)
-        => EffortBand.At(effort, at) is var (lower, upper) ? $"{Figures.Three(100 * lower)} to {Figures.Three(100 * upper)}" : Figures.None;
+    private static string Band(EffortPlan effort, EffortPrecision precision)
+        => EffortBand.Of(effort, precision) is var (lower, upper) ? $"{Figures.Three(100 * lower)} to {Figures.Three(100 * upper)}" : Figures.None;
 
     public static Table OfTargets(EffortPlan effort) => new(
         "Effort by target",

@@ -41,20 +41,21 @@ internal static class EffortWords
     {
         if (plan.Delivered is not { } delivered)
         {
-            return "No layout drawn here is surveyed the way the pilot was, so nothing can be said of what it delivers.";
+            return "No transect was drawn in one of the strata that the pilot speaks for, so nothing can be said of what the layout delivers for them together.";
         }
 
-        var open = EffortBand.At(effort, delivered.Effort) is var (lower, upper)
+        var open = EffortBand.Of(effort, delivered) is var (lower, upper)
             ? $" (the pilot leaves {Figures.Percent(lower)} to {Figures.Percent(upper)} open)"
             : "";
         var gives = $"The layout as drawn has {Amount(delivered.Effort, effort)} and is expected to deliver {Figures.Percent(delivered.Cv)}{open}, "
             + $"from about {Figures.Three(delivered.ExpectedDetections)} detections.";
-        return effort.Required is { } required ? $"{gives} That is {Verdict(delivered.Effort, required)}." : gives;
+        return effort.Required is { } required ? $"{gives} That is {Verdict(effort.EffortAsPlanned(delivered), required)}." : gives;
     }
 
+    // What is drawn counts by what it delivers, which is less than its length says where strata have other shares than planned.
     private static string Verdict(double drawn, RequiredEffort required) => required switch
     {
-        _ when drawn < required.Effort => "less than the plain estimate asks for",
+        _ when drawn < (1 - 1e-9) * required.Effort => "less than the plain estimate asks for",
         { AssuredEffort: { } assured } when drawn < assured => "more than the plain estimate, but not enough for the assurance asked for",
         { Interval: { } interval } when drawn > interval.Upper => "more than all that the interval leaves open",
         { AssuredEffort: not null } => "enough for the assurance asked for",

@@ -13,4 +13,7 @@ internal static class EffortBand
         => effort.Uncertainty is { Factors: var factors } && effort.CvAt(amount / factors.Lower) is { } best && effort.CvAt(amount / factors.Upper) is { } worst
             ? (best.Cv, worst.Cv)
             : null;
+
+    /// <summary>The same for what efforts deliver that are shared otherwise than planned.</summary>
+    public static (double Lower, double Upper)? Of(EffortPlan effort, EffortPrecision precision) => At(effort, effort.EffortAsPlanned(precision));
 }

@@ -57,10 +57,12 @@ internal static class Sentences
         }
 
         var target = plan.Effort?.Required is { } required ? $"; the target is {Figures.ChosenPercent(required.TargetCv)}" : "";
-        var open = EffortBand.At(plan.Effort!, delivered.Effort) is var (lower, upper)
+        var open = EffortBand.Of(plan.Effort!, delivered) is var (lower, upper)
             ? $"; the pilot leaves {Figures.Percent(lower)} to {Figures.Percent(upper)} open"
             : "";
-        return $"It is expected to estimate density with a coefficient of variation of {Figures.Percent(delivered.Cv)}{open}{target}.";
+        var others = plan.Strata.Where(stratum => stratum.Layout.Design.IsPoints != plan.Effort!.IsPoints).Select(stratum => stratum.Stratum.Name).ToList();
+        var where = others.Count == 0 ? "" : $" outside {string.Join(", ", others.Select(name => $"'{name}'"))}";
+        return $"It is expected to estimate density{where} with a coefficient of variation of {Figures.Percent(delivered.Cv)}{open}{target}.";
     }
 
     // A closed form knows that a place can never be covered; a simulation only that it never saw it.

@@ -14,6 +14,9 @@ internal static class CoverageAdvisor
     /// <summary>Unevenness on so small a share of an area moves the estimate by less than a hundredth or so. Common practice, no source.</summary>
     private const double SmallShare = 0.05;
 
+    // Strips that share less than a fiftieth change nominal by as little.
+    private const double SharesTold = 1.02;
+
     // Twenty cells or more across the axis in the coarsest grid: enough to tell a trend from cells that differ by chance.
     private const int AxisClasses = 10;
 
@@ -24,6 +27,7 @@ internal static class CoverageAdvisor
     public static CoverageAdvice Of(LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
         var (typicalError, reach) = (coverage.StandardError, EdgeReach(design));
+        var (level, shares) = Level(coverage, distances, reach);
         double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0, unevenTimes = 0;
         for (var i = 0; i < distances.Length; i++)
         {
@@ -31,7 +35,7 @@ internal static class CoverageAdvisor
 
             // Where few draws cover a cell, its own standard error is as much a matter of chance as its coverage, and least where no draw does.
             var doubt = cell.Exact is null ? EnoughDraws.StandardErrors * Math.Max(cell.StandardError, typicalError) : 0;
-            var isUneven = IsUneven(cell.Best, coverage.Nominal, doubt);
+            var isUneven = IsUneven(cell.Best, level, doubt);
             area += cell.AreaKm2;
             undrawn += cell.Best == 0 ? cell.AreaKm2 : 0;
             uneven += isUneven ? cell.AreaKm2 : 0;
@@ -51,15 +55,54 @@ internal static class CoverageAdvisor
         {
             finding = unevenInside <= SmallShare * inside
                 ? CoverageFinding.UnevenAtEdge
-                : ChangesAlongAxis(design, coverage, distances, along) ? CoverageFinding.UnevenAlongAxis : CoverageFinding.UnevenInside;
+                : ChangesAlongAxis(reach, coverage, distances, along) ? CoverageFinding.UnevenAlongAxis : CoverageFinding.UnevenInside;
         }
 
-        var sentences = CoverageSentences.Of(finding, design, coverage, uneven / area)
+        var sentences = CoverageSentences.Of(finding, design, coverage, shares ? level : null, uneven / area)
+            + CoverageSentences.OfEdgeMean(finding, coverage, EdgeMean(coverage, distances, reach), reach)
             + CoverageSentences.OfEvenTimes(finding, design, unevenTimes <= SmallShare * inside)
             + CoverageSentences.OfOverlap(design, coverage)
             + CoverageSentences.OfUndrawn(finding, coverage, undrawn, area);
         double? never = undrawn == 0 || EnoughDraws.TellZero(coverage) ? undrawn : null;
         return new CoverageAdvice(finding, uneven / area, never, sentences);
+    }
+
+    /// <summary>
+    /// What coverage would be if it were even, and whether that is less than nominal because strips share places: then what it is on average away from
+    /// the boundary, since nominal adds up what each strip covers.
+    /// </summary>
+    private static (double Level, bool Shares) Level(StratumCoverage coverage, ReadOnlySpan<double> distances, double reach)
+    {
+        double area = 0, best = 0, times = 0, draws = 0;
+        for (var i = 0; i < distances.Length; i++)
+        {
+            if (distances[i] > reach)
+            {
+                var cell = coverage.Cells[i];
+                area += cell.AreaKm2;
+                best += cell.AreaKm2 * cell.Best;
+                times += cell.AreaKm2 * cell.ExpectedTimes;
+                draws += cell.AreaKm2 * cell.Simulated;
+            }
+        }
+
+        var shares = times > SharesTold * draws && best < coverage.Nominal * area;
+        return (shares ? best / area : coverage.Nominal, shares);
+    }
+
+    /// <summary>Mean coverage of what lies near the boundary, in parts of that elsewhere; NaN where either is missing.</summary>
+    private static double EdgeMean(StratumCoverage coverage, ReadOnlySpan<double> distances, double reach)
+    {
+        double edgeArea = 0, edge = 0, insideArea = 0, inside = 0;
+        for (var i = 0; i < distances.Length; i++)
+        {
+            var (area, best) = (coverage.Cells[i].AreaKm2, coverage.Cells[i].AreaKm2 * coverage.Cells[i].Best);
+            (edgeArea, edge, insideArea, inside) = distances[i] <= reach
+                ? (edgeArea + area, edge + best, insideArea, inside)
+                : (edgeArea, edge, insideArea + area, inside + best);
+        }
+
+        return edge / edgeArea / (inside / insideArea);
     }
 
     /// <summary>
@@ -73,11 +116,11 @@ internal static class CoverageAdvisor
     private static bool IsUneven(double coverage, double nominal, double doubt) => Math.Abs(coverage - nominal) - doubt > Band * nominal;
 
     /// <summary>
-    /// Whether, away from the boundary, the mean over all that lies at one height of the axis departs from nominal by more than a tenth, on more than
-    /// a small share of the area.
+    /// Whether, away from the boundary, the mean over all that lies at one height of the axis departs from the mean over everything by more than a
+    /// tenth, on more than a small share of the area.
     /// </summary>
     private static bool ChangesAlongAxis(
-        LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
+        double reach, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
         var (low, high) = (double.PositiveInfinity, double.NegativeInfinity);
         foreach (var y in along)
@@ -85,7 +128,6 @@ internal static class CoverageAdvisor
             (low, high) = (Math.Min(low, y), Math.Max(high, y));
         }
 
-        var reach = EdgeReach(design);
         var (areas, sums) = (new double[AxisClasses], new double[AxisClasses]);
         for (var i = 0; i < distances.Length; i++)
         {
@@ -97,7 +139,8 @@ internal static class CoverageAdvisor
             }
         }
 
-        var uneven = areas.Where((area, i) => Math.Abs((sums[i] / area) - coverage.Nominal) > Band * coverage.Nominal).Sum();
+        var mean = sums.Sum() / areas.Sum();
+        var uneven = areas.Where((area, i) => Math.Abs((sums[i] / area) - mean) > Band * mean).Sum();
         return uneven > SmallShare * areas.Sum();
     }
 }

@@ -10,7 +10,7 @@ namespace SurveyPlanner.Coverage;
 /// </summary>
 internal static class CoverageAlong
 {
-    private const double StepsPerHalfWidth = 4;
+    private const double StepsPerHalfWidth = 16;
 
     // A place costs well under a microsecond exactly, and simulated ten for a thousand draws: some milliseconds in all.
     public const int MostExactPlaces = 20_000;

@@ -9,20 +9,24 @@ internal static class CoverageSentences
     /// <summary>From here on it matters that a place may be covered several times over. A tenth, as everywhere in the advice.</summary>
     private const double OverlapTold = 1.1;
 
+    private const double LowMean = 0.9;
+
     /// <summary>The finding.</summary>
     /// <param name="finding">The finding.</param>
     /// <param name="design">The layout: what would mend unevenness depends on it.</param>
     /// <param name="coverage">Its coverage.</param>
+    /// <param name="sharedLevel">What coverage comes to on average away from the boundary, where that is less than nominal because strips share places; else null.</param>
     /// <param name="unevenShare">Share of the area that is uneven.</param>
-    public static string Of(CoverageFinding finding, LayoutDesign design, StratumCoverage coverage, double unevenShare)
+    public static string Of(CoverageFinding finding, LayoutDesign design, StratumCoverage coverage, double? sharedLevel, double unevenShare)
     {
-        var uneven = $"({Percent(unevenShare)} of the area is more than a tenth from nominal{(coverage.IsExact ? "" : ", beyond what chance explains")})";
+        var nominal = sharedLevel is { } level ? $"the {ThreeDigits(level)} that nominal comes to where {Swept(design).ToLowerInvariant()} share places" : "nominal";
+        var uneven = $"({Percent(unevenShare)} of the area is more than a tenth from {nominal}{(coverage.IsExact ? "" : ", beyond what chance explains")})";
         const string weight = "weight each detection by its coverage";
         return finding switch
         {
-            CoverageFinding.Even when coverage.IsExact => $"Coverage is even: {Percent(1 - unevenShare)} of the area is within a tenth of nominal.",
+            CoverageFinding.Even when coverage.IsExact => $"Coverage is even: {Percent(1 - unevenShare)} of the area is within a tenth of {nominal}.",
             CoverageFinding.Even =>
-                $"Coverage is even as far as {Count(coverage.Replicates)} simulated draws tell: {Percent(1 - unevenShare)} of the area is within a tenth of nominal, or no farther from that than chance explains ({Percent(EnoughDraws.StandardErrors * coverage.StandardError / coverage.Nominal)} of nominal).",
+                $"Coverage is even as far as {Count(coverage.Replicates)} simulated draws tell: {Percent(1 - unevenShare)} of the area is within a tenth of {nominal}, or no farther from that than chance explains ({Percent(EnoughDraws.StandardErrors * coverage.StandardError / coverage.Nominal)} of nominal).",
             CoverageFinding.UnevenAtEdge => $"Coverage is uneven at the edge only {uneven}: {(EvensEdge(design) is { } how ? $"consider {how}, or " : "")}{weight}.",
             CoverageFinding.UnevenAlongAxis => $"Coverage changes along the axis {uneven}: {Otherwise(EvensInside(design, finding))}{weight}.",
             CoverageFinding.UnevenInside => $"Coverage is uneven inside the stratum too {uneven}: {Otherwise(EvensInside(design, finding))}{weight}.",
@@ -31,6 +35,16 @@ internal static class CoverageSentences
             _ => throw new InvalidOperationException($"unknown finding {finding}"),
         };
     }
+
+    /// <summary>That the mean near the boundary is lower where single cells do not tell; else nothing.</summary>
+    /// <param name="finding">The finding.</param>
+    /// <param name="coverage">The coverage.</param>
+    /// <param name="edgeMean">Mean coverage near the boundary, in parts of that elsewhere.</param>
+    /// <param name="reachMetres">How near.</param>
+    public static string OfEdgeMean(CoverageFinding finding, StratumCoverage coverage, double edgeMean, double reachMetres)
+        => finding == CoverageFinding.Even && !coverage.IsExact && edgeMean < LowMean
+            ? $" The mean within {ThreeDigits(reachMetres)} m of the boundary is {Percent(edgeMean)} of that elsewhere, as the edge profile shows: more draws would call it uneven there."
+            : "";
 
     /// <summary>That places are covered equally often where they are not equally likely to be covered at all, as where legs meet; else nothing.</summary>
     public static string OfEvenTimes(CoverageFinding finding, LayoutDesign design, bool timesAreEven)

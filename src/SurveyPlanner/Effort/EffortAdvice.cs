@@ -19,7 +19,7 @@ internal static class EffortAdvice
     private const int MostNamed = 4;
 
     public static IEnumerable<Advice> For(EffortPlan plan, EffortDesign design, IReadOnlyList<EffortStratum> strata)
-        => Open(plan).Concat(Basis(plan, design, strata)).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan));
+        => Open(plan).Concat(Basis(plan, design, strata)).Concat(Pilot(plan)).Concat(Detection(plan, design)).Concat(Numbers(plan, design));
 
     /// <summary>First what matters most: how far the pilot leaves the effort open.</summary>
     private static IEnumerable<Advice> Open(EffortPlan plan)
@@ -96,6 +96,12 @@ internal static class EffortAdvice
                 $"The pilot has only {pilot.Pooled.Transects} transects, so its variance is itself uncertain; take the effort as a rough figure.");
         }
 
+        if (plan.Model.Strata.Length > 1 && pilot.Strata is [{ Stratum.Length: 0 }])
+        {
+            yield return new Advice(
+                $"The pilot names no strata, so its one encounter rate is taken for all {plan.Model.Strata.Length}; a column stratum in its table would give each its own.");
+        }
+
         var visits = pilot.Pooled.Effort / pilot.Pooled.Transects;
         if (pilot.IsPoints && visits > SomeRevisits)
         {
@@ -129,7 +135,7 @@ internal static class EffortAdvice
         }
     }
 
-    private static IEnumerable<Advice> Numbers(EffortPlan plan)
+    private static IEnumerable<Advice> Numbers(EffortPlan plan, EffortDesign design)
     {
         if (plan.Required is not { } required)
         {
@@ -137,12 +143,14 @@ internal static class EffortAdvice
         }
 
         var (low, high) = plan.IsPoints ? (75, 100) : (60, 80);
-        var detections = plan.CvAt(required.Planned)?.ExpectedDetections ?? required.Precision.ExpectedDetections;
+        var detections = plan.Strata.Sum(stratum => stratum.ExpectedDetections) ?? required.Precision.ExpectedDetections;
+        var effort = plan.Strata.Sum(stratum => stratum.Effort) ?? required.Planned;
+        var unit = plan.IsPoints ? "points" : "lines";
         if (detections < high)
         {
             yield return new Advice(
                 FormattableString.Invariant(
-                    $"The effort planned brings about {detections:0} detections; at least {low} to {high} are advised {(plan.IsPoints ? "at points" : "along lines")} to fit a detection function."),
+                    $"The {Figure(effort)} {(plan.IsPoints ? "points" : "km")} planned bring about {detections:0} detections; at least {low} to {high} are advised {(plan.IsPoints ? "at points" : "along lines")} to fit a detection function."),
                 Minima);
         }
 
@@ -152,12 +160,11 @@ internal static class EffortAdvice
             .Select(stratum => (stratum.Name, Transects: required.Planned * stratum.Share / stratum.TransectEffort!.Value))
             .Where(stratum => stratum.Transects < FewestTransects - 0.5)
             .ToList();
-        var unit = plan.IsPoints ? "points" : "lines";
         if (few.Count > MostNamed)
         {
             yield return new Advice(
                 FormattableString.Invariant(
-                    $"In {few.Count} of {plan.Model.Strata.Length} strata the target alone would ask for fewer than {FewestTransects} {unit} each, in '{few.MinBy(stratum => stratum.Transects).Name}' for about {few.Min(stratum => stratum.Transects):0.#}; at least 10 to 20 in each stratum are advised, and the table plans for the least number (min_lines)."),
+                    $"In {few.Count} of {plan.Model.Strata.Length} strata the target alone would ask for fewer than {FewestTransects} {unit} each, in '{few.MinBy(stratum => stratum.Transects).Name}' for about {few.Min(stratum => stratum.Transects):0.#}; at least 10 to 20 in each stratum are advised, and the table plans for at least {design.MinLines} (min_lines)."),
                 Replicates);
             yield break;
         }
@@ -166,7 +173,7 @@ internal static class EffortAdvice
         {
             yield return new Advice(
                 FormattableString.Invariant(
-                    $"In stratum '{name}' the target alone would ask for about {transects:0.#} {unit}; at least 10 to 20 in each stratum are advised, and the table plans for the least number (min_lines)."),
+                    $"In stratum '{name}' the target alone would ask for about {transects:0.#} {unit}; at least 10 to 20 in each stratum are advised, and the table plans for at least {design.MinLines} (min_lines)."),
                 Replicates);
         }
     }

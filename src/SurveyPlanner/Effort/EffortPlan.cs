@@ -41,6 +41,22 @@ public sealed record EffortPlan(
 {
     /// <summary>The precision that a total effort delivers when shared among the strata as planned; null for an effort that is not above 0.</summary>
     public EffortPrecision? CvAt(double effort) => Model.PrecisionAt(effort);
+
+    /// <summary>
+    /// The precision that efforts by stratum deliver, however they are shared; null where there is none at all, or none in a stratum that has
+    /// detections to count, of which nothing would then be known.
+    /// </summary>
+    /// <param name="efforts">Kilometres of line or points, in the order of the strata of <see cref="Model"/>.</param>
+    public EffortPrecision? PrecisionOf(IReadOnlyList<double> efforts)
+    {
+        var total = efforts.Sum();
+        return total > 0 && Model.Strata.Zip(efforts).All(pair => pair.Second > 0 || pair.First.Rate == 0)
+            ? Model.WithShares([.. efforts.Select(effort => effort / total)]).PrecisionAt(total)
+            : null;
+    }
+
+    /// <summary>The effort that would deliver as much if it were shared among the strata as planned.</summary>
+    public double EffortAsPlanned(EffortPrecision precision) => Model.EffortFor(precision.Cv) ?? precision.Effort;
 }
 
 /// <summary>Density in the pilot.</summary>

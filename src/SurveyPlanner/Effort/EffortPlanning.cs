@@ -23,11 +23,9 @@ public static class EffortPlanning
     /// <exception cref="InputException">With every problem of the design and the pilot.</exception>
     public static EffortPlan? For(EffortDesign design, PilotTable? pilot, IReadOnlyList<EffortStratum> strata, ulong seed)
     {
-        var problems = EffortChecks.Problems(design, pilot, strata).ToList();
-        if (pilot is not null)
-        {
-            problems.AddRange(PilotChecks.Problems(pilot, [.. strata.Select(stratum => stratum.Name)]));
-        }
+        // What the pilot's strata are wrong about comes first: that none of them is surveyed follows from it.
+        var problems = pilot is null ? [] : PilotChecks.Problems(pilot, [.. strata.Select(stratum => stratum.Name)]).ToList();
+        problems.AddRange(EffortChecks.Problems(design, pilot, strata));
 
         if (problems.Count > 0)
         {

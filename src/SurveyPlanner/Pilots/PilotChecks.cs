@@ -77,20 +77,35 @@ public static class PilotChecks
             yield break;
         }
 
-        var known = string.Join(", ", regionStrata.Select(name => $"'{name}'"));
-        foreach (var transect in pilot.Transects)
+        foreach (var transect in pilot.Transects.Where(transect => transect.Stratum.Length == 0))
         {
-            if (transect.Stratum.Length == 0)
+            yield return new Problem(
+                $"Transect '{transect.Id}' names no stratum although others do; give its stratum.", pilot.Source, transect.Line);
+        }
+
+        // By name rather than by transect: they are wrong for one reason.
+        foreach (var group in pilot.Transects.Where(transect => transect.Stratum.Length > 0).GroupBy(transect => transect.Stratum))
+        {
+            if (!regionStrata.Contains(group.Key))
             {
-                yield return new Problem(
-                    $"Transect '{transect.Id}' names no stratum although others do; give its stratum.", pilot.Source, transect.Line);
-            }
-            else if (!regionStrata.Contains(transect.Stratum))
-            {
-                yield return new Problem(
-                    $"Transect '{transect.Id}' lies in stratum '{transect.Stratum}', which the region lacks; it has {known}.", pilot.Source, transect.Line);
+                var (first, others) = (group.First(), group.Count() - 1);
+                var who = others == 0 ? $"Transect '{first.Id}' lies" : $"Transect '{first.Id}' and {others} other{(others == 1 ? "" : "s")} lie";
+                yield return new Problem($"{who} in stratum '{group.Key}', which the region lacks; {InItsPlace(group.Key, regionStrata)}", pilot.Source, first.Line);
             }
         }
+    }
+
+    private static string InItsPlace(string name, IReadOnlyCollection<string> regionStrata)
+    {
+        if (regionStrata.FirstOrDefault(known => known.Equals(name.Trim(), StringComparison.OrdinalIgnoreCase)) is { } meant)
+        {
+            return $"did you mean '{meant}'?";
+        }
+
+        var has = $"it has {string.Join(", ", regionStrata.Select(known => $"'{known}'"))}";
+        return regionStrata.Count > 1
+            ? has + "."
+            : $"{has} alone: say with region.stratum_field which attribute of the boundary has these names, or leave the column out.";
     }
 
     private static IEnumerable<Problem> DetectionProblems(PilotTable pilot, PilotDetection detection, HashSet<string> ids)
@@ -117,6 +132,13 @@ public static class PilotChecks
     {
         if (pilot.Detections.IsEmpty)
         {
+            var counted = pilot.Transects.Sum(transect => (long)Math.Max(0, transect.Count));
+            if (pilot.DetectionsSource is { } source && counted > 0)
+            {
+                yield return new Problem(
+                    $"There are no detections in it, although the transects count {counted}; give one row for each, or take detections out of [pilot].", source);
+            }
+
             yield break;
         }
 

@@ -43,6 +43,47 @@ public class CoverageAdviceTests
     }
 
     /// <summary>
+    /// Circuits of side s whose strips share their corners: 8sw - 4w² of every d², by hand, is 0.1275 of every place, less than the 0.15 that the four
+    /// strips of a circuit come to.
+    /// </summary>
+    [Fact]
+    public void Circuits_whose_corners_are_shared_are_even()
+    {
+        var loops = new LayoutDesign(LayoutKind.Loops, new Sizing.Spacing(4_000), new Bearing.Degrees(0), 300) { SideMetres = 1_000, Edge = EdgeRule.Plus };
+        var coverage = Judge.Of(PlaneStrata.Rectangle(40_000, 30_000), loops, 500);
+
+        Assert.Equal(CoverageFinding.Even, coverage.Advice!.Finding);
+        Assert.Contains("within a tenth of the 0.12", coverage.Advice.Sentence, StringComparison.Ordinal);
+        Assert.All(coverage.Cells, cell => Assert.Equal(0.1275, cell.Best, cell.Exact is null ? 4.5 * cell.StandardError : 1e-12));
+    }
+
+    /// <summary>Two passes that cross in the same bands whatever their start: what changes there changes across the axis, which no turning mends.</summary>
+    [Fact]
+    public void Passes_that_cross_are_not_uneven_along_the_axis()
+    {
+        var crossed = Zigzag with { Sizing = new Sizing.Spacing(40_000), HalfWidthMetres = 10_000, Crossed = true };
+        var advice = Judge.Of(PlaneStrata.Rectangle(400_000, 100_000), crossed, 4_000, 2000).Advice!;
+
+        Assert.Equal(CoverageFinding.UnevenInside, advice.Finding);
+        Assert.DoesNotContain("adjusted-angle", advice.Sentence, StringComparison.Ordinal);
+    }
+
+    /// <summary>Segments at random bearings kept whole: single cells differ by chance as much as the edge from the inside, but their means do not.</summary>
+    [Fact]
+    public void A_mean_that_falls_at_the_edge_is_told_where_single_cells_do_not_tell()
+    {
+        var segments = new LayoutDesign(LayoutKind.Segments, new Sizing.Spacing(6_000), new Bearing.Random(), 300)
+        {
+            SegmentMetres = 2_000,
+            Crossing = CrossingRule.Keep,
+        };
+        var rectangle = PlaneStrata.Rectangle(40_000, 30_000);
+
+        Assert.Contains(" The mean within 2,300 m of the boundary is ", Judge.Of(rectangle, segments, 500, 1000).Advice!.Sentence, StringComparison.Ordinal);
+        Assert.NotEqual(CoverageFinding.Even, Judge.Of(rectangle, segments, 500, 40_000).Advice!.Finding);
+    }
+
+    /// <summary>
     /// Segments of 3 km kept whole if they start inside: whether a place near the side they start from is covered is decided up to 3 km away.
     /// </summary>
     [Fact]

@@ -47,6 +47,45 @@ public class EffortPlanningTests
         Assert.Equal([0.25, 0.75], two.Strata.Select(stratum => stratum.Share));
     }
 
+    /// <summary>
+    /// The variance of Σ w_h r_h is Σ w_h² c_h r_h / L_h whatever effort each stratum gets, and the detection part falls with the detections of all;
+    /// by hand from the figures of the strata.
+    /// </summary>
+    [Fact]
+    public void Effort_shared_otherwise_than_planned_delivers_by_what_fell_on_each_stratum()
+    {
+        var pilot = new PilotTable(
+            false,
+            [
+                .. new[] { 3, 5, 2, 8, 4, 6 }.Select((count, i) => new PilotTransect("a", $"A{i}", 2, count)),
+                .. new[] { 1, 0, 2, 1, 3, 0 }.Select((count, i) => new PilotTransect("b", $"B{i}", 2, count)),
+            ],
+            []);
+        EffortStratum[] strata = [Whole with { Name = "a", AreaKm2 = 100 }, Whole with { Name = "b", AreaKm2 = 300 }];
+        var plan = EffortPlanning.For(Target with { ClusterSize = new GivenClusterSize(4, 3) }, pilot, strata, Seed)!;
+        var (a, b) = (plan.Model.Strata[0], plan.Model.Strata[1]);
+        var delivered = plan.PrecisionOf([12, 700])!;
+
+        var rate = (0.25 * a.Rate) + (0.75 * b.Rate);
+        var variance = (0.0625 * a.Dispersion * a.Rate / 12) + (0.5625 * b.Dispersion * b.Rate / 700);
+        var detections = (12 * a.Rate) + (700 * b.Rate);
+        Assert.Equal((712, detections), (delivered.Effort, delivered.ExpectedDetections));
+        Assert.Equal(Math.Sqrt((variance / (rate * rate)) + (0.5625 / detections)), delivered.Cv, 1e-12);
+        Assert.Equal(delivered.Cv, plan.CvAt(plan.EffortAsPlanned(delivered))!.Cv, 1e-12);
+        Assert.True(plan.EffortAsPlanned(delivered) < 0.5 * 712);
+        Assert.Null(plan.PrecisionOf([0, 700]));
+        Assert.Null(plan.PrecisionOf([0, 0]));
+    }
+
+    [Fact]
+    public void A_pilot_that_names_no_strata_says_that_it_stands_for_all()
+    {
+        EffortStratum[] strata = [Whole with { Name = "a" }, Whole with { Name = "b" }];
+        bool Says(EffortPlan plan) => plan.Advice.Any(advice => advice.Message.StartsWith("The pilot names no strata", StringComparison.Ordinal));
+        Assert.True(Says(EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), strata, Seed)!));
+        Assert.False(Says(EffortPlanning.For(Target, Pilot([3, 5, 2, 8, 4, 6]), [Whole], Seed)!));
+    }
+
     [Fact]
     public void One_transect_falls_back_on_the_rule_of_thumb_and_says_so()
     {

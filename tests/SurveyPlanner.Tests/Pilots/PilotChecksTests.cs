@@ -58,6 +58,31 @@ public class PilotChecksTests
     }
 
     [Fact]
+    public void A_stratum_that_the_region_lacks_is_one_problem_however_many_lie_in_it()
+    {
+        string Of(string[] named, params string[] region)
+        {
+            var pilot = Good with { Transects = [.. named.Select((name, i) => new PilotTransect(name, $"T{i}", 1, 1, i + 2))], Detections = [], DetectionsSource = null };
+            return Assert.Single(PilotChecks.Problems(pilot, region)).ToString();
+        }
+
+        Assert.Equal(
+            "transects.csv:3: Transect 'T1' and 2 others lie in stratum 'fjord', which the region lacks; it has 'bay', 'sound'.",
+            Of(["bay", "fjord", "fjord", "fjord"], "bay", "sound"));
+        Assert.Equal("transects.csv:2: Transect 'T0' lies in stratum 'BAY', which the region lacks; did you mean 'bay'?", Of(["BAY"], "bay", "sound"));
+        Assert.Equal(
+            "transects.csv:2: Transect 'T0' and 1 other lie in stratum 'bay', which the region lacks; it has 'region' alone: say with region.stratum_field which attribute of the boundary has these names, or leave the column out.",
+            Of(["bay", "bay"], "region"));
+    }
+
+    [Fact]
+    public void Detections_that_are_missing_altogether_are_told()
+    {
+        var problem = Assert.Single(PilotChecks.Problems(Good with { Detections = [] }, ["bay", "sound"]));
+        Assert.StartsWith("detections.csv: There are no detections in it, although the transects count 3;", problem.ToString(), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_pilot_without_transects_is_one_problem()
         => Assert.Single(PilotChecks.Problems(Good with { Transects = [], Detections = [] }, ["bay"]));
 
