@@ -70,13 +70,15 @@ internal sealed class CoverageCalculator(CoverageDesign design, ulong seed, int 
 
     private ImmutableArray<TransectCoverage> Along(LayoutGenerator generator, Layout layout, StratumCoverage cells, uint stratum)
     {
-        var places = CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.MostExactPlaces);
+        List<AlongPlace> Places(int most, int least)
+            => CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.Step(generator.Stratum, layout.Transects, most), least);
+        var places = Places(CoverageAlong.MostExactPlaces, CoverageAlong.LeastExactPlaces);
         var grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out var order);
         var coverage = ExactCoverage.At(generator, grid, stop);
         var isExact = coverage is not null;
         if (coverage is null)
         {
-            places = CoverageAlong.Places(generator.Stratum, layout.Transects, CoverageAlong.MostSimulatedPlaces);
+            places = Places(CoverageAlong.MostSimulatedPlaces, least: 1);
             grid = CellGrid.OfPlaces([.. places.Select(place => (place.X, place.Y))], out order);
             var counts = CoverageSimulation.Run(generator, grid, _replicates, seed, stratum, threads, stop);
             coverage = [.. Enumerable.Range(0, grid.Count).Select(counts.Probability)];
