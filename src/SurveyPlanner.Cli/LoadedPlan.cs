@@ -25,7 +25,7 @@ internal sealed record LoadedPlan(PlanFile File, SurveyDesign Design, bool SeedF
     {
         if (BoundaryEndings.Contains(Path.GetExtension(path).ToLowerInvariant()) && System.IO.File.Exists(path))
         {
-            throw new InputException(new Problem($"this is a boundary file, not a plan; make a plan for it with: survey-planner new {path}", path));
+            throw new InputException(new Problem($"this is a boundary file, not a plan; make a plan for it with: survey-planner new {Usage.Typed(path)}", path));
         }
 
         var files = new InputFiles();

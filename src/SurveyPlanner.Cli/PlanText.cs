@@ -81,13 +81,13 @@ internal static class PlanText
         var table = new TextTable("stratum", "km²", "kind", "bearing", "spacing km", "transects", "km", "expected km");
         foreach (var (stratum, layout) in plan.Strata.Select(one => (one.Stratum, one.Layout)))
         {
-            var points = layout.Design.IsPoints;
+            var (points, scattered) = (layout.Design.IsPoints, layout.Design.IsScattered);
             table.Add(
                 stratum.Name,
                 TextTable.Figure(stratum.AreaKm2),
                 ChoiceWord.Of(layout.Design.Kind),
-                TextTable.Bearing(layout.BearingDegrees, 180),
-                TextTable.Figure(layout.SpacingMetres / 1000),
+                scattered ? "" : TextTable.Bearing(layout.BearingDegrees, 180),
+                scattered ? "" : TextTable.Figure(layout.SpacingMetres / 1000),
                 TextTable.Number(layout.Transects.Length),
                 points ? "" : TextTable.Figure(layout.TotalLengthMetres / 1000),
                 layout.ExpectedLengthMetres is { } expected ? TextTable.Figure(expected / 1000) : "");

@@ -20,6 +20,9 @@ internal static class Usage
         return $"{message}; see {name} --help";
     }
 
+    /// <summary>A file name as a shell takes it: in quotes where it has a space or a mark that means something to one.</summary>
+    public static string Typed(string path) => path.All(c => char.IsLetterOrDigit(c) || "._-/\\:+@".Contains(c, StringComparison.Ordinal)) ? path : $"\"{path}\"";
+
     private static string Unknown(string token, Command command, string name)
     {
         var isOption = token.StartsWith('-');

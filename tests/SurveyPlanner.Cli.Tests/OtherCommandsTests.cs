@@ -5,6 +5,15 @@ namespace SurveyPlanner.Cli.Tests;
 public class OtherCommandsTests
 {
     [Fact]
+    public void The_next_command_can_be_typed_as_it_is_shown()
+    {
+        using var work = new Workspace();
+        File.Copy(ReferenceData.Path("regions", "marine_archipelago_sea.geojson"), work.At("see & strand.geojson"));
+        var plan = work.At("see & strand.toml");
+        Assert.EndsWith($"survey-planner check \"{plan}\"", ProgramRun.Of("new", work.At("see & strand.geojson")).Out.TrimEnd(), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void New_writes_a_plan_that_check_accepts_and_plan_carries_out()
     {
         using var work = new Workspace();

@@ -50,6 +50,31 @@ public class PlanCommandTests
         Assert.Equal("parallel", strata["Knox County"]);
     }
 
+    /// <summary>Lines in one stratum and scattered points, with spare ones, in the other: each drawn and told as what it is.</summary>
+    [Fact]
+    public void Lines_and_points_in_one_plan()
+    {
+        using var work = new Workspace();
+        File.WriteAllText(work.At("region.geojson"), """
+            {"type":"FeatureCollection","features":[
+            {"type":"Feature","properties":{"zone":"a"},"geometry":{"type":"Polygon","coordinates":[[[10,50],[11,50],[11,51],[10,51],[10,50]]]}},
+            {"type":"Feature","properties":{"zone":"b"},"geometry":{"type":"Polygon","coordinates":[[[11,50],[12,50],[12,51],[11,51],[11,50]]]}}]}
+            """);
+        var plan = work.Plan(
+            "region.geojson\"\nstratum_field = \"zone",
+            "kind = \"parallel\"\nbearing = 0\nspacing = \"20 km\"\nhalf_width = \"500 m\"",
+            "[stratum.\"b\"]\nkind = \"random-points\"\npoints = 12\nreserve = 5\nradius = \"500 m\"\n[coverage]\nreplicates = 50");
+        var run = ProgramRun.Of("plan", plan, "--out", work.At("out"));
+        Assert.Equal((0, ""), (run.ExitCode, run.ExitCode == 0 ? "" : run.Error));
+
+        var report = File.ReadAllText(work.At("out/report.html"));
+        var dots = report[report.IndexOf("class=\"dots\"", StringComparison.Ordinal)..];
+        Assert.Equal(12, dots[..dots.IndexOf("</g>", StringComparison.Ordinal)].Split("class=\"line\"").Length - 1);
+        Assert.Contains("5 spare points", report.Replace('\u00a0', ' '), StringComparison.Ordinal);
+        var row = run.Out.Split('\n').Single(line => line.StartsWith("b ", StringComparison.Ordinal) && line.Contains("random-points", StringComparison.Ordinal));
+        Assert.DoesNotContain("°", row, StringComparison.Ordinal);
+    }
+
     [Fact]
     public void Threads_and_replay_give_the_same_bytes()
     {

@@ -32,7 +32,7 @@ internal static class NewCommand
             var path = parsed.GetValue(boundary)!;
             if (Path.GetExtension(path).Equals(".toml", StringComparison.OrdinalIgnoreCase) && File.Exists(path))
             {
-                throw new InputException(new Problem($"this is a plan already; look at it with: survey-planner check {path}", path));
+                throw new InputException(new Problem($"this is a plan already; look at it with: survey-planner check {Usage.Typed(path)}", path));
             }
 
             var planPath = parsed.GetValue(file) ?? Path.ChangeExtension(path, ".toml");
@@ -48,7 +48,7 @@ internal static class NewCommand
             var text = StarterPlan.For(relative, facts);
             OneFile.Write(planPath, WithKey(WithKey(text, "layer", name), "crs", system));
             CommandFrame.Tell(terminal, facts.Notices, parsed.GetValue(options.Quiet));
-            terminal.Out.WriteLine($"Wrote {planPath}. Read it, then: survey-planner check {planPath}");
+            terminal.Out.WriteLine($"Wrote {planPath}. Read it, then: survey-planner check {Usage.Typed(planPath)}");
             return ExitCodes.Done;
         });
     }

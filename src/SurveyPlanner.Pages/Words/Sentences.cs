@@ -40,7 +40,8 @@ internal static class Sentences
         var (min, max) = (coverages.Min(c => c.Min), coverages.Max(c => c.Max));
         if (min > 0)
         {
-            return $"{sentence}; every place has a chance of being covered, between {Figures.Three(min)} and {Figures.Three(max)}.";
+            var (low, high) = (Figures.Three(min), Figures.Three(max));
+            return $"{sentence}; every place has a chance of being covered, {(low == high ? "of " + low : $"between {low} and {high}")}.";
         }
 
         return IsCertain(coverages)

@@ -197,6 +197,9 @@ public sealed record LayoutDesign(
     /// <summary>Whether animals are counted around points rather than along lines.</summary>
     public bool IsPoints => Kind is LayoutKind.PointGrid or LayoutKind.PointsOnLines or LayoutKind.RandomPoints or LayoutKind.BalancedPoints;
 
+    /// <summary>Whether it has neither lines to point anywhere nor a distance between neighbours.</summary>
+    public bool IsScattered => Kind is LayoutKind.RandomPoints or LayoutKind.BalancedPoints;
+
     /// <summary>
     /// Whether transects follow one another at a fixed spacing from a random start, so that each can be compared with the next. Grids of segments
     /// and loops are systematic too, but have no single order.
