@@ -70,6 +70,7 @@ public class PlanCommandTests
         var report = File.ReadAllText(work.At("out/report.html"));
         var dots = report[report.IndexOf("class=\"dots\"", StringComparison.Ordinal)..];
         Assert.Equal(12, dots[..dots.IndexOf("</g>", StringComparison.Ordinal)].Split("class=\"line\"").Length - 1);
+        Assert.Contains("b: random-points, 12 points. ", report.Replace('\u00a0', ' '), StringComparison.Ordinal);
         Assert.Contains("5 spare points", report.Replace('\u00a0', ' '), StringComparison.Ordinal);
         var row = run.Out.Split('\n').Single(line => line.StartsWith("b ", StringComparison.Ordinal) && line.Contains("random-points", StringComparison.Ordinal));
         Assert.DoesNotContain("°", row, StringComparison.Ordinal);

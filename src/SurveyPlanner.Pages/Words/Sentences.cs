@@ -70,6 +70,9 @@ internal static class Sentences
     private static bool IsCertain(IEnumerable<StratumCoverage> coverages)
         => coverages.SelectMany(coverage => coverage.Cells).Any(cell => cell.Exact <= 0);
 
+    private static string Bearing(Layout layout)
+        => layout.Design.IsScattered ? "" : $", bearing {Figures.Bearing(layout.BearingDegrees)}° true";
+
     /// <summary>What a region is.</summary>
     public static string OfRegion(Region region)
     {
@@ -84,7 +87,7 @@ internal static class Sentences
         var strata = plan.Strata.Length > MostStrata
             ? $"Its layout has {Effort(plan).TrimEnd(',')}; the table of the layout has the strata one by one"
             : string.Join("; ", plan.Strata.Select(stratum =>
-                $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}, bearing {Figures.Bearing(stratum.Layout.BearingDegrees)}° true"));
+                $"{(plan.Strata.Length == 1 ? "Layout" : stratum.Stratum.Name)}: {Kind(stratum.Layout.Design)}, {Transects(stratum.Layout)}{Bearing(stratum.Layout)}"));
         return $"{OfRegion(plan.Region)} {strata}. The table of transects has their positions.";
     }
 
