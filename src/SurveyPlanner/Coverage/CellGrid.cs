@@ -21,6 +21,7 @@ internal sealed class CellGrid
         RowStarts = rowStarts;
         X = x;
         Cells = cells;
+        // Rows of places lie at sixteenths of a cell.
         _rows = SlotTable.Of(rowY, [0, rowY.Length], (cells?.SizeMetres ?? 0) / 16, out _rowSlots)[0];
         _rowPlaces = SlotTable.Of(x, rowStarts, cells?.SizeMetres ?? 0, out _placeSlots);
     }
@@ -78,6 +79,7 @@ internal sealed class CellGrid
         => (_rows.FirstFrom(_rowSlots, RowY, lowY), _rows.FirstBeyond(_rowSlots, RowY, highY));
 
     /// <summary>Whether a row has places on either side of some x or between them. Most rows at a coast hold a place or two, which most ranges miss.</summary>
+    /// <remarks>Both are asked, without a branch between them: which of them fails nothing foretells.</remarks>
     public bool MayHold(int row, double low, double high) => low <= _rowPlaces[row].Last & high >= _rowPlaces[row].First;
 
     /// <summary>The places of a row with x from <paramref name="low"/> to <paramref name="high"/>: first index and end, not after it where there are none.</summary>

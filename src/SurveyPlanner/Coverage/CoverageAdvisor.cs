@@ -27,7 +27,7 @@ internal static class CoverageAdvisor
     public static CoverageAdvice Of(LayoutDesign design, StratumCoverage coverage, ReadOnlySpan<double> distances, ReadOnlySpan<double> along)
     {
         var (typicalError, reach) = (coverage.StandardError, EdgeReach(design));
-        var (level, shares) = Level(coverage, distances, reach);
+        var (level, shares, edgeMean) = Means(coverage, distances, reach);
         double area = 0, undrawn = 0, uneven = 0, inside = 0, unevenInside = 0, unevenTimes = 0;
         for (var i = 0; i < distances.Length; i++)
         {
@@ -59,7 +59,7 @@ internal static class CoverageAdvisor
         }
 
         var sentences = CoverageSentences.Of(finding, design, coverage, shares ? level : null, uneven / area)
-            + CoverageSentences.OfEdgeMean(finding, coverage, EdgeMean(coverage, distances, reach), reach)
+            + CoverageSentences.OfEdgeMean(finding, coverage, edgeMean, reach)
             + CoverageSentences.OfEvenTimes(finding, design, unevenTimes <= SmallShare * inside)
             + CoverageSentences.OfOverlap(design, coverage)
             + CoverageSentences.OfUndrawn(finding, coverage, undrawn, area);
@@ -68,41 +68,31 @@ internal static class CoverageAdvisor
     }
 
     /// <summary>
-    /// What coverage would be if it were even, and whether that is less than nominal because strips share places: then what it is on average away from
-    /// the boundary, since nominal adds up what each strip covers.
+    /// What coverage would be if it were even, whether that is less than nominal because strips share places (then it is what it is on average away
+    /// from the boundary, since nominal adds up what each strip covers), and the mean near the boundary in parts of that elsewhere, NaN where either
+    /// is missing.
     /// </summary>
-    private static (double Level, bool Shares) Level(StratumCoverage coverage, ReadOnlySpan<double> distances, double reach)
+    private static (double Level, bool Shares, double EdgeMean) Means(StratumCoverage coverage, ReadOnlySpan<double> distances, double reach)
     {
-        double area = 0, best = 0, times = 0, draws = 0;
+        double edgeArea = 0, edge = 0, insideArea = 0, inside = 0, times = 0, draws = 0;
         for (var i = 0; i < distances.Length; i++)
         {
-            if (distances[i] > reach)
+            var cell = coverage.Cells[i];
+            if (distances[i] <= reach)
             {
-                var cell = coverage.Cells[i];
-                area += cell.AreaKm2;
-                best += cell.AreaKm2 * cell.Best;
-                times += cell.AreaKm2 * cell.ExpectedTimes;
-                draws += cell.AreaKm2 * cell.Simulated;
+                edgeArea += cell.AreaKm2;
+                edge += cell.AreaKm2 * cell.Best;
+                continue;
             }
+
+            insideArea += cell.AreaKm2;
+            inside += cell.AreaKm2 * cell.Best;
+            times += cell.AreaKm2 * cell.ExpectedTimes;
+            draws += cell.AreaKm2 * cell.Simulated;
         }
 
-        var shares = times > SharesTold * draws && best < coverage.Nominal * area;
-        return (shares ? best / area : coverage.Nominal, shares);
-    }
-
-    /// <summary>Mean coverage of what lies near the boundary, in parts of that elsewhere; NaN where either is missing.</summary>
-    private static double EdgeMean(StratumCoverage coverage, ReadOnlySpan<double> distances, double reach)
-    {
-        double edgeArea = 0, edge = 0, insideArea = 0, inside = 0;
-        for (var i = 0; i < distances.Length; i++)
-        {
-            var (area, best) = (coverage.Cells[i].AreaKm2, coverage.Cells[i].AreaKm2 * coverage.Cells[i].Best);
-            (edgeArea, edge, insideArea, inside) = distances[i] <= reach
-                ? (edgeArea + area, edge + best, insideArea, inside)
-                : (edgeArea, edge, insideArea + area, inside + best);
-        }
-
-        return edge / edgeArea / (inside / insideArea);
+        var shares = times > SharesTold * draws && inside < coverage.Nominal * insideArea;
+        return (shares ? inside / insideArea : coverage.Nominal, shares, edge / edgeArea / (inside / insideArea));
     }
 
     /// <summary>

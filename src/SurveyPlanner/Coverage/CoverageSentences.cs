@@ -43,7 +43,7 @@ internal static class CoverageSentences
     /// <param name="reachMetres">How near.</param>
     public static string OfEdgeMean(CoverageFinding finding, StratumCoverage coverage, double edgeMean, double reachMetres)
         => finding == CoverageFinding.Even && !coverage.IsExact && edgeMean < LowMean
-            ? $" The mean within {ThreeDigits(reachMetres)} m of the boundary is {Percent(edgeMean)} of that elsewhere, as the edge profile shows: more draws would call it uneven there."
+            ? $" The mean within {ThreeDigits(reachMetres)} m of the boundary is {Percent(edgeMean)} of that elsewhere, as the edge profile shows."
             : "";
 
     /// <summary>That places are covered equally often where they are not equally likely to be covered at all, as where legs meet; else nothing.</summary>
